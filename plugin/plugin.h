@@ -1,0 +1,38 @@
+// SPDX-License-Identifier: GPL-2.0-or-later
+// The desktop plugin: registers the Processing provider and puts the Stillhead menu into QGIS. Whatever it
+// adds in initGui() it takes away in unload(), and nothing that another added.
+#pragma once
+
+#include <qgisplugin.h>
+
+#include <QObject>
+#include <QPointer>
+
+#include <vector>
+
+class QAction;
+class QgisInterface;
+
+namespace stillhead
+{
+
+  class Plugin : public QObject, public QgisPlugin
+  {
+      Q_OBJECT
+
+    public:
+      explicit Plugin( QgisInterface *iface );
+
+      void initGui() override;
+      void unload() override;
+
+    private:
+      void addAlgorithmAction( const QString &text, const QString &algorithmId );
+      void openAlgorithmDialog( const QString &algorithmId );
+
+      QgisInterface *mIface = nullptr;
+      std::vector<QPointer<QAction>> mActions;
+      bool mAddedProvider = false;
+  };
+
+} // namespace stillhead
