@@ -67,6 +67,11 @@ namespace stillhead
     return QString::fromLatin1( versionText() );
   }
 
+  compat::ProviderFlags Provider::flags() const
+  {
+    return compat::readsVirtualRasters();
+  }
+
   void Provider::loadAlgorithms()
   {
     const QList<QgsProcessingAlgorithm *> algorithms = algorithmList();

@@ -2,6 +2,8 @@
 // The Processing provider: its id, name, icon and the list of its algorithms.
 #pragma once
 
+#include "processing/qgiscompat.h"
+
 #include <qgsprocessingprovider.h>
 
 namespace stillhead
@@ -24,6 +26,7 @@ namespace stillhead
       QIcon icon() const override;
       QString svgIconPath() const override;
       QString versionInfo() const override;
+      compat::ProviderFlags flags() const override;
 
     protected:
       void loadAlgorithms() override;
