@@ -14,6 +14,7 @@
 
 #include <QAction>
 #include <QIcon>
+#include <QMenu>
 
 namespace stillhead
 {
@@ -42,20 +43,15 @@ namespace stillhead
   void Plugin::initGui()
   {
     mAddedProvider = stillhead_register_provider();
+    mMenu = mIface->pluginMenu()->addMenu( QIcon( pluginIcon() ), pluginName() );
+    mMenu->setObjectName( QStringLiteral( "StillheadMenu" ) );
     addAlgorithmAction( tr( "Static pressure along pipes…" ), QStringLiteral( "stillhead:staticpressure" ) );
     addAlgorithmAction( tr( "Static pressure surface…" ), QStringLiteral( "stillhead:pressuresurface" ) );
   }
 
   void Plugin::unload()
   {
-    for ( const QPointer<QAction> &action : mActions )
-    {
-      if ( !action )
-        continue;
-      mIface->removePluginMenu( pluginName(), action );
-      delete action;
-    }
-    mActions.clear();
+    delete mMenu;
     if ( mAddedProvider )
       QgsApplication::processingRegistry()->removeProvider( QStringLiteral( "stillhead" ) );
     mAddedProvider = false;
@@ -63,11 +59,9 @@ namespace stillhead
 
   void Plugin::addAlgorithmAction( const QString &text, const QString &algorithmId )
   {
-    auto *action = new QAction( QIcon( pluginIcon() ), text, this );
+    QAction *action = mMenu->addAction( QIcon( pluginIcon() ), text );
     action->setObjectName( algorithmId );
     connect( action, &QAction::triggered, this, [this, algorithmId] { openAlgorithmDialog( algorithmId ); } );
-    mIface->addPluginToMenu( pluginName(), action );
-    mActions.emplace_back( action );
   }
 
   void Plugin::openAlgorithmDialog( const QString &algorithmId )

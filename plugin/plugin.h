@@ -8,10 +8,8 @@
 #include <QObject>
 #include <QPointer>
 
-#include <vector>
-
-class QAction;
 class QgisInterface;
+class QMenu;
 
 namespace stillhead
 {
@@ -31,7 +29,7 @@ namespace stillhead
       void openAlgorithmDialog( const QString &algorithmId );
 
       QgisInterface *mIface = nullptr;
-      std::vector<QPointer<QAction>> mActions;
+      QPointer<QMenu> mMenu; //!< owns its actions; QGIS may delete it first when it closes
       bool mAddedProvider = false;
   };
 
