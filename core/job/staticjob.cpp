@@ -1,0 +1,301 @@
+// SPDX-License-Identifier: GPL-2.0-or-later
+// The stages in their order; each is a plain value handed to the next.
+#include "core/job/staticjob.h"
+
+#include "core/feedback/parallel.h"
+#include "core/judgement/judge.h"
+#include "core/judgement/linejudge.h"
+#include "core/judgement/stretches.h"
+#include "core/judgement/summits.h"
+#include "core/profile/profilebuilder.h"
+#include "core/terrain/segmentwalk.h"
+#include "core/terrain/terrainreader.h"
+#include "core/units/units.h"
+
+#include <algorithm>
+#include <cmath>
+#include <memory>
+
+namespace stillhead
+{
+
+  namespace
+  {
+    //! Readings outside this range are rare enough to be asked about; common practice, no source.
+    constexpr double USUAL_LEAST_PA = 15.0 * PASCALS_PER_PSI;
+    constexpr double USUAL_MOST_PA = 250.0 * PASCALS_PER_PSI;
+
+    class Pipeline
+    {
+      public:
+        Pipeline( const StaticJob &job, Monitor &monitor )
+          : mJob( job )
+          , mMonitor( monitor )
+        {
+        }
+
+        StaticResult run()
+        {
+          mResult.drawing = canonicalDrawing( *mJob.drawing, *mJob.measure, mJob.threads, mResult.findings, mMonitor );
+          if ( mResult.drawing.lines.empty() )
+            throw Refusal { Refusal::Reason::NoLines, 0.0 };
+          findWithoutSurvey();
+          placeSource();
+          mResult.network = joinLines( mResult.drawing, *mJob.measure, mJob.joins, SourcePlace { mResult.source.on },
+            mJob.threads, mResult.findings, mMonitor );
+          makeZones();
+          judgeLines();
+          judgeWhole();
+          return std::move( mResult );
+        }
+
+      private:
+        void findWithoutSurvey()
+        {
+          if ( !mJob.useLineZ )
+            return;
+          for ( const CanonicalLine &line : mResult.drawing.lines )
+          {
+            if ( !hasSurvey( mResult.drawing, line ) )
+              addFinding( FindingCode::NoSurveyZ, mResult.drawing.vertices[line.first] ).line = line.drawn;
+          }
+        }
+
+        Finding &addFinding( FindingCode code, const PlanPoint &place )
+        {
+          Finding finding;
+          finding.code = code;
+          finding.place = place;
+          mResult.findings.push_back( finding );
+          return mResult.findings.back();
+        }
+
+        TerrainPoint pixelOf( const PlanPoint &place ) const
+        {
+          TerrainPoint terrain;
+          mJob.planToTerrain->transform( &place, &terrain, 1 );
+          return mJob.terrain->grid().toPixel( terrain );
+        }
+
+        //! True if the box around some line meets the terrain.
+        bool linesMeetTerrain() const
+        {
+          const RasterGrid &grid = mJob.terrain->grid();
+          for ( const CanonicalLine &line : mResult.drawing.lines )
+          {
+            TerrainPoint low { HUGE_VAL, HUGE_VAL };
+            TerrainPoint high { -HUGE_VAL, -HUGE_VAL };
+            for ( std::size_t i = line.first; i < line.first + line.count; ++i )
+            {
+              const TerrainPoint pixel = pixelOf( mResult.drawing.vertices[i] );
+              low = { std::min( low.x, pixel.x ), std::min( low.y, pixel.y ) };
+              high = { std::max( high.x, pixel.x ), std::max( high.y, pixel.y ) };
+            }
+            if ( low.x <= grid.columns() - 0.5 && high.x >= -0.5 && low.y <= grid.rows() - 0.5 && high.y >= -0.5 )
+              return true;
+          }
+          return false;
+        }
+
+        void placeSource()
+        {
+          const Source &source = mJob.source;
+          SourceReport &report = mResult.source;
+          const std::optional<NearestPipe> pipe =
+            nearestPipe( mResult.drawing, *mJob.measure, source.place, mJob.joins.toleranceM );
+          if ( !pipe || pipe->distanceM > mJob.sourceReachM )
+            throw Refusal { Refusal::Reason::SourceTooFar, pipe ? pipe->distanceM : NOT_A_FIGURE };
+          report.on = pipe->on;
+          report.distanceM = pipe->distanceM;
+          TerrainReader reader( *mJob.terrain );
+          report.terrainGroundM = reader.elevationAtM( pixelOf( source.place ) );
+          report.usedGroundM = source.groundElevationM.value_or( report.terrainGroundM );
+          if ( source.kind != SourceKind::WaterLevel && std::isnan( report.usedGroundM ) )
+            throw Refusal { linesMeetTerrain() ? Refusal::Reason::SourceNoTerrain : Refusal::Reason::NoOverlap, 0.0 };
+          report.levels = staticLevels( source, report.usedGroundM, mJob.specificWeightNPerM3 );
+
+          if ( !source.low )
+            addFinding( FindingCode::OneReading, source.place );
+          if ( source.boostPa != 0.0 && !source.boostLowPa )
+            addFinding( FindingCode::PumpDutyNotGiven, source.place );
+          if ( source.kind == SourceKind::PressureReading )
+            reportUnusual( source );
+        }
+
+        void reportUnusual( const Source &source )
+        {
+          for ( const double readingPa : { source.high, source.low.value_or( source.high ) } )
+          {
+            if ( readingPa >= USUAL_LEAST_PA && readingPa <= USUAL_MOST_PA )
+              continue;
+            addFinding( FindingCode::UnusualPressure, source.place ).figurePa = readingPa;
+            return;
+          }
+        }
+
+        void makeZones()
+        {
+          mResult.zoneMap = zonesOf( mResult.network );
+          mResult.zones.resize( static_cast<std::size_t>( mResult.zoneMap.count ) );
+          const Source &source = mJob.source;
+          const bool onTerrain = !source.groundElevationM && source.kind != SourceKind::WaterLevel;
+          const double doubt = doubtPa( mJob.terrainRmseM, mJob.readingErrorPa, onTerrain, mJob.specificWeightNPerM3 );
+          for ( std::size_t i = 0; i < mResult.network.nodes.size(); ++i )
+          {
+            if ( mResult.network.nodes[i].kind == NodeKind::Source )
+              mResult.zones[static_cast<std::size_t>( mResult.zoneMap.ofNode[i] )] = { true, mResult.source.levels,
+                doubt };
+          }
+        }
+
+        //! Lines in the order of the tiles they begin in, so that neighbours are worked on while their terrain is at hand.
+        std::vector<std::size_t> linesByTile() const
+        {
+          std::vector<std::pair<std::pair<int, int>, std::size_t>> keys;
+          keys.reserve( mResult.drawing.lines.size() );
+          for ( std::size_t i = 0; i < mResult.drawing.lines.size(); ++i )
+          {
+            const TerrainPoint pixel = pixelOf( mResult.drawing.vertices[mResult.drawing.lines[i].first] );
+            const auto tile = [&]( double position, int size ) {
+              return std::isfinite( position ) ? static_cast<int>( std::floor( position / size ) ) : 0;
+            };
+            keys.push_back(
+              { { tile( pixel.y, mJob.terrain->tileRows() ), tile( pixel.x, mJob.terrain->tileColumns() ) }, i } );
+          }
+          std::sort( keys.begin(), keys.end() );
+          std::vector<std::size_t> order;
+          order.reserve( keys.size() );
+          for ( const auto &key : keys )
+            order.push_back( key.second );
+          return order;
+        }
+
+        void judgeLines()
+        {
+          const LineParts parts( mResult.network, mResult.drawing.lines.size() );
+          const CutElevations cuts = cutElevationsOf( mResult.zones, mJob.limits, mJob.specificWeightNPerM3 );
+          const LineJudgeInput input { mResult.drawing, mResult.network, parts, mResult.zoneMap, mResult.zones,
+            mJob.limits, mJob.specificWeightNPerM3 };
+          const std::vector<std::size_t> order = linesByTile();
+          std::vector<LineOutcome> outcomes( order.size() );
+          std::vector<double> nodeElevationsM( mResult.network.nodes.size(), NO_ELEVATION );
+          std::vector<std::unique_ptr<LineJudge>> judges( threadCount( mJob.threads ) );
+          parallelRanges( order.size(), 8, mJob.threads, mMonitor, 0.14, 0.9,
+            [&]( std::size_t first, std::size_t last, unsigned worker ) {
+              if ( !judges[worker] )
+                judges[worker] = std::make_unique<LineJudge>(
+                  input, cuts, ProfileBuilder( mResult.drawing, *mJob.planToTerrain, *mJob.terrain, mJob.useLineZ ) );
+              for ( std::size_t i = first; i < last; ++i )
+                outcomes[order[i]] = judges[worker]->judge( order[i], nodeElevationsM );
+            } );
+          gather( outcomes );
+          judgeNodes( nodeElevationsM );
+        }
+
+        void gather( std::vector<LineOutcome> &outcomes )
+        {
+          std::size_t pieces = 0;
+          std::size_t vertices = 0;
+          bool anyElevation = false;
+          for ( const LineOutcome &outcome : outcomes )
+          {
+            pieces += outcome.pieces.size();
+            vertices += outcome.vertices.size();
+            anyElevation = anyElevation || outcome.anyElevation;
+          }
+          if ( !anyElevation && !linesMeetTerrain() )
+            throw Refusal { Refusal::Reason::NoOverlap, 0.0 };
+          mResult.pieces.reserve( pieces );
+          mResult.vertices.reserve( vertices );
+          for ( LineOutcome &outcome : outcomes )
+          {
+            const unsigned first = static_cast<unsigned>( mResult.vertices.size() );
+            for ( Piece &piece : outcome.pieces )
+            {
+              piece.firstVertex += first;
+              mResult.pieces.push_back( piece );
+            }
+            mResult.vertices.insert( mResult.vertices.end(), outcome.vertices.begin(), outcome.vertices.end() );
+            outcome = {};
+          }
+        }
+
+        void judgeNodes( const std::vector<double> &elevationsM )
+        {
+          mResult.nodeFigures.reserve( elevationsM.size() );
+          for ( std::size_t i = 0; i < elevationsM.size(); ++i )
+          {
+            CutPiece point;
+            point.lowestM = point.highestM = elevationsM[i];
+            point.known = !std::isnan( elevationsM[i] );
+            const int zone = mResult.zoneMap.ofNode[i];
+            const Role role = mResult.drawing.lines[static_cast<std::size_t>( mResult.network.nodes[i].on.line )].role;
+            mNodePieces.push_back( judgedPiece( point, -1, zone, mResult.zones[static_cast<std::size_t>( zone )], role,
+              mJob.limits, mJob.specificWeightNPerM3 ) );
+            mNodePieces.back().lowestM = elevationsM[i];
+          }
+        }
+
+        void judgeWhole()
+        {
+          stopIfCancelled( mMonitor );
+          const PieceGraph graph( mResult.network, mResult.pieces );
+          const Reach reach = lowCaseReach( graph, mResult.zones );
+          settleSummits( mResult.pieces, mResult.zones, reach );
+          finishNodes( reach );
+          mMonitor.progress( 0.93 );
+          findSummitsAndGaps( graph, mResult.drawing, mResult.zones, reach, mResult.findings );
+          stopIfCancelled( mMonitor );
+          mResult.stretches = findStretches( graph, mResult.drawing, *mJob.drawing, mResult.zones, mJob.limits );
+          mResult.extremes = findExtremes( graph, mResult.stretches, mResult.zones );
+          mResult.totals = totalsOf( mResult.pieces );
+          mMonitor.progress( 1.0 );
+        }
+
+        void finishNodes( const Reach &reach )
+        {
+          for ( std::size_t i = 0; i < mNodePieces.size(); ++i )
+          {
+            Piece &node = mNodePieces[i];
+            const Zone &zone = mResult.zones[static_cast<std::size_t>( node.zone )];
+            if ( zone.fed && node.state != State::NoTerrain && reach.ofNode[i] == Reached::No )
+              markPastASummit( node );
+            mResult.nodeFigures.push_back( { node.lowestM, node.pressureLowPa, node.pressureHighPa, node.state } );
+          }
+        }
+
+        const StaticJob &mJob;
+        Monitor &mMonitor;
+        StaticResult mResult;
+        std::vector<Piece> mNodePieces;
+    };
+  } // namespace
+
+  Totals totalsOf( const std::vector<Piece> &pieces )
+  {
+    Totals totals;
+    totals.lowestPa = totals.highestPa = NOT_A_FIGURE;
+    for ( const Piece &piece : pieces )
+    {
+      const double lengthM = piece.toM - piece.fromM;
+      totals.lengthM += lengthM;
+      totals.withinM += piece.state == State::WithinLimits ? lengthM : 0.0;
+      totals.overM += piece.over ? lengthM : 0.0;
+      totals.shortM += piece.isShort ? lengthM : 0.0;
+      totals.noSourceM += piece.state == State::NoSource ? lengthM : 0.0;
+      totals.noTerrainM += piece.state == State::NoTerrain ? lengthM : 0.0;
+      totals.closeCallM += piece.closeCall ? lengthM : 0.0;
+      if ( !( totals.lowestPa <= piece.pressureLowPa ) && !std::isnan( piece.pressureLowPa ) )
+        totals.lowestPa = piece.pressureLowPa;
+      if ( !( totals.highestPa >= piece.pressureHighPa ) && !std::isnan( piece.pressureHighPa ) )
+        totals.highestPa = piece.pressureHighPa;
+    }
+    return totals;
+  }
+
+  StaticResult solveStatics( const StaticJob &job, Monitor &monitor )
+  {
+    return Pipeline( job, monitor ).run();
+  }
+
+} // namespace stillhead

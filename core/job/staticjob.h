@@ -1,0 +1,116 @@
+// SPDX-License-Identifier: GPL-2.0-or-later
+// The main job as one straight pipeline: drawing and terrain and source in, every figure of the result out.
+#pragma once
+
+#include "core/feedback/monitor.h"
+#include "core/judgement/limits.h"
+#include "core/judgement/piece.h"
+#include "core/judgement/stretch.h"
+#include "core/network/canonicaldrawing.h"
+#include "core/network/joining.h"
+#include "core/network/network.h"
+#include "core/plan/finding.h"
+#include "core/plan/plantoterrain.h"
+#include "core/profile/simplify.h"
+#include "core/statics/source.h"
+#include "core/statics/zones.h"
+#include "core/terrain/tilecache.h"
+
+#include <optional>
+#include <string>
+#include <vector>
+
+namespace stillhead
+{
+
+  //! Inputs of the main job; all in SI.
+  struct StaticJob
+  {
+      const Drawing *drawing = nullptr;
+      const PlanMeasure *measure = nullptr;
+      const PlanToTerrain *planToTerrain = nullptr;
+      TileCache *terrain = nullptr;
+      Source source;
+      double sourceReachM = 10.0;
+      bool useLineZ = false; //!< drawn Z (Drawing::surveyZM) is the pipe and replaces terrain and cover
+      JoinOptions joins;
+      Limits limits;
+      double terrainRmseM = 0.0;
+      double readingErrorPa = 0.0; //!< ± at 95 %
+      double specificWeightNPerM3 = 0.0;
+      unsigned threads = 0; //!< 0: as many as the machine has cores; results do not depend on it
+  };
+
+  //! What was used at the source.
+  struct SourceReport
+  {
+      PlaceOnLine on;              //!< where it joins the pipe
+      double distanceM = 0.0;      //!< from the given point to that place
+      double terrainGroundM = 0.0; //!< NaN where the terrain has none
+      double usedGroundM = 0.0;    //!< NaN where the kind needs none
+      StaticLevels levels;
+  };
+
+  //! Sums over pieces, in metres of ground length and pascals; pressures are NaN where no pipe has figures.
+  struct Totals
+  {
+      double lengthM = 0.0;
+      double withinM = 0.0;
+      double overM = 0.0;
+      double shortM = 0.0;
+      double noSourceM = 0.0;
+      double noTerrainM = 0.0;
+      double closeCallM = 0.0;
+      double lowestPa = 0.0;
+      double highestPa = 0.0;
+  };
+
+  Totals totalsOf( const std::vector<Piece> &pieces );
+
+  //! What is known of a node; NaN where there is no figure.
+  struct NodeFigures
+  {
+      double elevationM = 0.0;
+      double pressureLowPa = 0.0;
+      double pressureHighPa = 0.0;
+      State state = State::NoSource;
+  };
+
+  //! Everything the main job found. Indices of lines refer to `drawing.lines` (canonical order) unless said otherwise.
+  struct StaticResult
+  {
+      CanonicalDrawing drawing;
+      Network network;
+      ZoneMap zoneMap;
+      std::vector<Zone> zones;
+      std::vector<Piece> pieces;            //!< sorted by span and along it
+      std::vector<ProfileVertex> vertices;  //!< the drawn profile of all pieces, in their order
+      std::vector<NodeFigures> nodeFigures; //!< one for each node
+      std::vector<Stretch> stretches;
+      std::vector<Extreme> extremes;
+      std::vector<Finding> findings; //!< Finding::line indexes Drawing::lines as drawn
+      SourceReport source;
+      Totals totals;
+  };
+
+  //! Why the job was refused; the caller makes the sentence.
+  struct Refusal
+  {
+      enum class Reason
+      {
+        NoLines,         //!< nothing left to compute
+        SourceTooFar,    //!< figureM: distance to the nearest pipe
+        SourceNoTerrain, //!< no elevation at the source and none given
+        NoOverlap        //!< no vertex of any line lies on the terrain
+      };
+      Reason reason = Reason::NoLines;
+      double figureM = 0.0;
+  };
+
+  /**
+   * Runs the main job.
+   * \throws Refusal for input that cannot be answered, Cancelled, std::runtime_error if the terrain cannot be read
+   */
+  StaticResult solveStatics( const StaticJob &job, Monitor &monitor );
+
+} // namespace stillhead

@@ -1,0 +1,196 @@
+// SPDX-License-Identifier: GPL-2.0-or-later
+// One walk along the profile. It keeps the interval between cut elevations in which the pipe lies; leaving it by more
+// than rounding cuts the span at the root, solved on a stretch where the quadratic is monotone.
+#include "core/judgement/cutting.h"
+
+#include "core/network/noding.h"
+#include "core/profile/profilesearch.h"
+#include "core/terrain/segmentwalk.h"
+
+#include <algorithm>
+#include <cmath>
+
+namespace stillhead
+{
+
+  namespace
+  {
+    //! The pipe has left an interval once it is this far beyond its end: far above rounding, far below what a gauge reads.
+    constexpr double BEYOND_ROUNDING_M = 1e-9;
+  } // namespace
+
+  std::vector<double> cutElevationsM( const Zone &zone, Role role, const Limits &limits, double specificWeightNPerM3 )
+  {
+    const auto highAt = [&]( double pressurePa ) { return zone.levels.highM - pressurePa / specificWeightNPerM3; };
+    const auto lowAt = [&]( double pressurePa ) { return zone.levels.lowM - pressurePa / specificWeightNPerM3; };
+    const double most = limits.mostFor( role );
+    const double least = limits.leastFor( role );
+    std::vector<double> elevations { zone.levels.highM, zone.levels.lowM, highAt( most ), lowAt( least ) };
+    for ( const double band : limits.bandsPa )
+      elevations.push_back( highAt( band ) );
+    if ( zone.doubtPa > 0.0 )
+      elevations.insert( elevations.end(),
+        { highAt( most - zone.doubtPa ), highAt( most + zone.doubtPa ), lowAt( least - zone.doubtPa ),
+          lowAt( least + zone.doubtPa ) } );
+    std::sort( elevations.begin(), elevations.end() );
+    const auto same = []( double a, double b ) { return b - a <= BEYOND_ROUNDING_M; };
+    elevations.erase( std::unique( elevations.begin(), elevations.end(), same ), elevations.end() );
+    return elevations;
+  }
+
+  //! The state of one walk along a span.
+  struct Cutter::Walk
+  {
+      std::vector<CutPiece> &pieces;
+      const std::vector<double> &cutsM;
+      double endM;
+      CutPiece current {};
+      std::size_t interval = 0; //!< number of cut elevations below the pipe
+      double lastCutElevationM = NO_ELEVATION;
+
+      void open( double alongM, bool known )
+      {
+        current = {};
+        current.fromM = alongM;
+        current.known = known;
+        current.lowestM = current.highestM = NO_ELEVATION;
+        current.lowestAtM = current.highestAtM = alongM;
+      }
+
+      void close( double alongM )
+      {
+        current.toM = alongM;
+        pieces.push_back( current );
+      }
+
+      void include( double alongM, double elevationM )
+      {
+        if ( !( current.lowestM <= elevationM ) )
+        {
+          current.lowestM = elevationM;
+          current.lowestAtM = alongM;
+        }
+        if ( !( current.highestM >= elevationM ) )
+        {
+          current.highestM = elevationM;
+          current.highestAtM = alongM;
+        }
+      }
+
+      void cutAt( double alongM, double elevationM )
+      {
+        include( alongM, elevationM );
+        if ( alongM - current.fromM < LEAST_SPAN_M )
+        {
+          // Out of an interval and back within a millimetre: the first of the two cuts is taken back.
+          if ( lastCutElevationM == elevationM && !pieces.empty() && pieces.back().known )
+          {
+            const CutPiece passed = current;
+            current = pieces.back();
+            pieces.pop_back();
+            include( passed.lowestAtM, passed.lowestM );
+            include( passed.highestAtM, passed.highestM );
+            lastCutElevationM = NO_ELEVATION;
+          }
+          return;
+        }
+        if ( endM - alongM < LEAST_SPAN_M )
+          return;
+        close( alongM );
+        open( alongM, true );
+        include( alongM, elevationM );
+        lastCutElevationM = elevationM;
+      }
+
+      void enter( double elevationM )
+      {
+        interval =
+          static_cast<std::size_t>( std::lower_bound( cutsM.begin(), cutsM.end(), elevationM ) - cutsM.begin() );
+      }
+
+      //! The pipe becomes known or unknown at \a alongM.
+      void change( double alongM, bool known )
+      {
+        lastCutElevationM = NO_ELEVATION;
+        if ( endM - alongM < LEAST_SPAN_M )
+          return;
+        if ( alongM - current.fromM >= LEAST_SPAN_M )
+          close( alongM );
+        else
+          alongM = current.fromM;
+        open( alongM, known );
+      }
+
+      //! Follows \a piece, monotone from share \a low to \a high.
+      template <typename Along>
+      void follow( const Quadratic &piece, double low, double high, double toElevationM, Along alongAt )
+      {
+        while ( interval < cutsM.size() && toElevationM > cutsM[interval] + BEYOND_ROUNDING_M )
+        {
+          cutAt( alongAt( piece.rootIn( cutsM[interval], low, high ) ), cutsM[interval] );
+          ++interval;
+        }
+        while ( interval > 0 && toElevationM < cutsM[interval - 1] - BEYOND_ROUNDING_M )
+        {
+          cutAt( alongAt( piece.rootIn( cutsM[interval - 1], low, high ) ), cutsM[interval - 1] );
+          --interval;
+        }
+        include( alongAt( high ), toElevationM );
+      }
+  };
+
+  const std::vector<CutPiece> &Cutter::cut(
+    const Profile &profile, double fromM, double toM, const std::vector<double> &elevationsM, bool splitUnknown )
+  {
+    mPieces.clear();
+    Walk walk { mPieces, elevationsM, toM };
+    const bool toLast = toM >= profile.alongM.back();
+    bool started = false;
+    bool known = false;
+    for ( std::size_t i = pieceAt( profile, fromM );
+          i + 1 < profile.knots() && ( toLast || profile.alongM[i] < toM || !started ); ++i )
+    {
+      const bool pieceKnown = !std::isnan( profile.bendM[i] );
+      const double low = shareAt( profile, i, fromM, 0.0 );
+      const double high = shareAt( profile, i, toM, 1.0 );
+      const auto alongAt = [&]( double share ) {
+        if ( share <= low )
+          return std::max( fromM, profile.alongM[i] );
+        return share >= high ? std::min( toM, profile.alongM[i + 1] )
+                             : profile.alongM[i] + share * ( profile.alongM[i + 1] - profile.alongM[i] );
+      };
+      if ( !started )
+        walk.open( fromM, pieceKnown );
+      else if ( splitUnknown && pieceKnown != known )
+        walk.change( alongAt( low ), pieceKnown );
+
+      if ( pieceKnown )
+      {
+        const Quadratic quadratic = quadraticOf( profile, i );
+        const double fromElevationM = low <= 0.0 ? quadratic.from : quadratic.at( low );
+        const double toElevationM = high >= 1.0 ? quadratic.to : quadratic.at( high );
+        if ( !known )
+        {
+          walk.current.known = walk.current.known || !splitUnknown;
+          walk.enter( fromElevationM );
+          walk.include( alongAt( low ), fromElevationM );
+        }
+        const double turn = quadratic.turnsInside() ? quadratic.turn() : low;
+        if ( turn > low && turn < high )
+        {
+          walk.follow( quadratic, low, turn, quadratic.at( turn ), alongAt );
+          walk.follow( quadratic, turn, high, toElevationM, alongAt );
+        }
+        else
+        {
+          walk.follow( quadratic, low, high, toElevationM, alongAt );
+        }
+      }
+      known = pieceKnown;
+      started = true;
+    }
+    walk.close( toM );
+    return mPieces;
+  }
+
+} // namespace stillhead

@@ -1,0 +1,84 @@
+// SPDX-License-Identifier: GPL-2.0-or-later
+// Groups by union of touching pieces.
+#include "core/judgement/piecegroups.h"
+
+namespace stillhead
+{
+
+  PieceGraph::PieceGraph( const Network &network, const std::vector<Piece> &pieces )
+    : mNetwork( network )
+    , mPieces( pieces )
+    , mAdjacency( network )
+    , mFirst( network.spans.size() + 1, 0 )
+  {
+    for ( const Piece &piece : pieces )
+      ++mFirst[static_cast<std::size_t>( piece.span ) + 1];
+    for ( std::size_t i = 1; i < mFirst.size(); ++i )
+      mFirst[i] += mFirst[i - 1];
+  }
+
+  void PieceGraph::piecesAt( int node, std::vector<int> &pieces ) const
+  {
+    pieces.clear();
+    int before = -1;
+    for ( const int span : mAdjacency.spansAt( node ) )
+    {
+      // A span that begins and ends here stands twice.
+      if ( span == before )
+        continue;
+      before = span;
+      const Span &pipe = mNetwork.spans[static_cast<std::size_t>( span )];
+      if ( pipe.fromNode == node )
+        pieces.push_back( firstOf( span ) );
+      if ( pipe.toNode == node && ( pipe.fromNode != node || firstOf( span + 1 ) - 1 != firstOf( span ) ) )
+        pieces.push_back( firstOf( span + 1 ) - 1 );
+    }
+  }
+
+  DisjointSets PieceGraph::groups( const std::function<bool( int )> &belongs ) const
+  {
+    DisjointSets sets( mPieces.size() );
+    std::vector<int> here;
+    for ( std::size_t node = 0; node < mNetwork.nodes.size(); ++node )
+    {
+      piecesAt( static_cast<int>( node ), here );
+      int first = -1;
+      for ( const int piece : here )
+      {
+        if ( !belongs( piece ) )
+          continue;
+        if ( first >= 0 )
+          sets.join( first, piece );
+        else
+          first = piece;
+      }
+    }
+    for ( std::size_t i = 1; i < mPieces.size(); ++i )
+    {
+      const int piece = static_cast<int>( i );
+      if ( mPieces[i].span == mPieces[i - 1].span && belongs( piece - 1 ) && belongs( piece ) )
+        sets.join( piece - 1, piece );
+    }
+    return sets;
+  }
+
+  void PieceGraph::visitTouching( const std::function<void( int, int )> &visit ) const
+  {
+    for ( std::size_t i = 1; i < mPieces.size(); ++i )
+    {
+      if ( mPieces[i].span == mPieces[i - 1].span )
+        visit( static_cast<int>( i ) - 1, static_cast<int>( i ) );
+    }
+    std::vector<int> here;
+    for ( std::size_t node = 0; node < mNetwork.nodes.size(); ++node )
+    {
+      piecesAt( static_cast<int>( node ), here );
+      for ( std::size_t a = 0; a < here.size(); ++a )
+      {
+        for ( std::size_t b = a + 1; b < here.size(); ++b )
+          visit( here[a], here[b] );
+      }
+    }
+  }
+
+} // namespace stillhead
