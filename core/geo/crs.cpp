@@ -14,7 +14,7 @@ namespace stillhead
 
   namespace
   {
-    //! Names under which GeoPackage, GDAL, PROJ and QGIS keep "no CRS".
+    //! How the names begin under which GeoPackage, GDAL, PROJ and QGIS keep "no CRS".
     constexpr std::array<const char *, 5> PLACEHOLDERS { "undefined geographic srs", "undefined cartesian srs",
       "undefined srs", "unknown engineering crs", "unknown crs" };
 
@@ -120,8 +120,10 @@ namespace stillhead
       return false;
     if ( proj_get_id_code( crs.get(), 0 ) )
       return false;
-    const char *name = proj_get_name( crs.get() );
-    return name && std::find( PLACEHOLDERS.begin(), PLACEHOLDERS.end(), lowered( name ) ) != PLACEHOLDERS.end();
+    const char *text = proj_get_name( crs.get() );
+    const std::string name = lowered( text ? text : "" );
+    return std::any_of( PLACEHOLDERS.begin(), PLACEHOLDERS.end(),
+      [&name]( const std::string &placeholder ) { return name.compare( 0, placeholder.size(), placeholder ) == 0; } );
   }
 
   std::optional<double> axisUnitMetres( const std::string &definition )

@@ -2,6 +2,7 @@
 // Values are read as doubles, which hold every type up to 64-bit floats and 32-bit integers exactly.
 #include "core/geo/gdalband.h"
 
+#include <algorithm>
 #include <cmath>
 #include <cstring>
 #include <limits>
@@ -52,6 +53,14 @@ namespace stillhead
       return static_cast<double>( static_cast<float>( nodata ) );
     }
 
+    [[noreturn]] void throwUnreadable( const GdalBand::Window &window, const GdalErrors &errors )
+    {
+      throw std::runtime_error( "The terrain cannot be read at columns " + std::to_string( window.column ) + " to "
+        + std::to_string( window.column + window.columns - 1 ) + ", rows " + std::to_string( window.row ) + " to "
+        + std::to_string( window.row + window.rows - 1 ) + errors.inParentheses()
+        + "; check that its files are complete." );
+    }
+
     double nodataOf( GDALRasterBandH band, bool &has )
     {
       int found = 0;
@@ -100,66 +109,68 @@ namespace stillhead
     mMayHaveHoles = !mHasNodata && !mMask;
   }
 
-  void GdalBand::readRaw( GDALRasterBandH band, int column, int row, int columns, int rows, void *values,
-    GDALDataType type, const GdalErrors &errors )
+  void GdalBand::readRaw(
+    GDALRasterBandH band, const Window &window, void *values, GDALDataType type, const GdalErrors &errors )
   {
-    if ( GDALRasterIOEx( band, GF_Read, column, row, columns, rows, values, columns, rows, type, 0, 0, nullptr )
+    if ( GDALRasterIOEx( band, GF_Read, window.column, window.row, window.columns, window.rows, values, window.columns,
+           window.rows, type, 0, 0, nullptr )
       != CE_None )
-    {
-      throw std::runtime_error( "The terrain cannot be read at columns " + std::to_string( column ) + " to "
-        + std::to_string( column + columns - 1 ) + ", rows " + std::to_string( row ) + " to "
-        + std::to_string( row + rows - 1 ) + errors.inParentheses() + "; check that its files are complete." );
-    }
+      throwUnreadable( window, errors );
   }
 
-  void GdalBand::read( int column, int row, int columns, int rows, double *elevationsM )
+  void GdalBand::read( const Window &window, double *elevationsM )
   {
     const GdalErrors errors;
     const UnsharedSources unshared;
-    const std::size_t count = static_cast<std::size_t>( columns ) * static_cast<std::size_t>( rows );
-    bool everywhere = false;
-    const bool holes = mMayHaveHoles && isUncoveredSomewhere( column, row, columns, rows, everywhere );
-    if ( everywhere )
+    const std::size_t count = static_cast<std::size_t>( window.columns ) * static_cast<std::size_t>( window.rows );
+    const Coverage coverage = mMayHaveHoles ? coverageOf( window ) : Coverage::Whole;
+    // Asking opens the files of a mosaic: one that is missing shows here, and would pass for a gap.
+    if ( coverage != Coverage::Whole && !errors.text().empty() )
+      throwUnreadable( window, errors );
+    if ( coverage == Coverage::None )
     {
-      for ( std::size_t i = 0; i < count; ++i )
-        elevationsM[i] = NO_ELEVATION;
+      std::fill_n( elevationsM, count, NO_ELEVATION );
       return;
     }
-    readRaw( mBand, column, row, columns, rows, elevationsM, GDT_Float64, errors );
+    readRaw( mBand, window, elevationsM, GDT_Float64, errors );
+    toElevations( elevationsM, count );
+    if ( mMask )
+      leaveOutMasked( window, elevationsM, errors );
+    if ( coverage == Coverage::Part )
+      leaveOutUncovered( window, elevationsM, window.columns );
+  }
+
+  void GdalBand::toElevations( double *values, std::size_t count ) const
+  {
     if ( mIsSignedByte )
     {
       for ( std::size_t i = 0; i < count; ++i )
-        elevationsM[i] -= elevationsM[i] > 127.0 ? 256.0 : 0.0;
+        values[i] -= values[i] > 127.0 ? 256.0 : 0.0;
     }
     if ( mHasNodata )
     {
       for ( std::size_t i = 0; i < count; ++i )
-        elevationsM[i] = elevationsM[i] == mNodata ? NO_ELEVATION : elevationsM[i];
+        values[i] = values[i] == mNodata ? NO_ELEVATION : values[i];
     }
     if ( mIsPlain )
     {
       for ( std::size_t i = 0; i < count; ++i )
-        elevationsM[i] *= mMetresPerUnit;
+        values[i] *= mMetresPerUnit;
     }
     else
     {
       for ( std::size_t i = 0; i < count; ++i )
-        elevationsM[i] = ( elevationsM[i] * mScale + mOffset ) * mMetresPerUnit;
+        values[i] = ( values[i] * mScale + mOffset ) * mMetresPerUnit;
     }
     // An infinite height is none.
     for ( std::size_t i = 0; i < count; ++i )
-      elevationsM[i] = std::abs( elevationsM[i] ) <= std::numeric_limits<double>::max() ? elevationsM[i] : NO_ELEVATION;
-    if ( mMask )
-      leaveOutMasked( column, row, columns, rows, elevationsM, errors );
-    if ( holes )
-      leaveOutUncovered( column, row, columns, rows, elevationsM, columns );
+      values[i] = std::abs( values[i] ) <= std::numeric_limits<double>::max() ? values[i] : NO_ELEVATION;
   }
 
-  void GdalBand::leaveOutMasked(
-    int column, int row, int columns, int rows, double *elevationsM, const GdalErrors &errors )
+  void GdalBand::leaveOutMasked( const Window &window, double *elevationsM, const GdalErrors &errors )
   {
-    mMaskValues.resize( static_cast<std::size_t>( columns ) * static_cast<std::size_t>( rows ) );
-    readRaw( mMask, column, row, columns, rows, mMaskValues.data(), GDT_Byte, errors );
+    mMaskValues.resize( static_cast<std::size_t>( window.columns ) * static_cast<std::size_t>( window.rows ) );
+    readRaw( mMask, window, mMaskValues.data(), GDT_Byte, errors );
     for ( std::size_t i = 0; i < mMaskValues.size(); ++i )
     {
       if ( mMaskValues[i] == 0 )
@@ -167,44 +178,45 @@ namespace stillhead
     }
   }
 
-  bool GdalBand::isUncoveredSomewhere( int column, int row, int columns, int rows, bool &everywhere ) const
+  GdalBand::Coverage GdalBand::coverageOf( const Window &window ) const
   {
-    const int status = GDALGetDataCoverageStatus( mBand, column, row, columns, rows, 0, nullptr );
-    const bool uncovered =
-      !( status & GDAL_DATA_COVERAGE_STATUS_UNIMPLEMENTED ) && ( status & GDAL_DATA_COVERAGE_STATUS_EMPTY );
-    everywhere = uncovered && !( status & GDAL_DATA_COVERAGE_STATUS_DATA );
-    return uncovered;
+    const int status =
+      GDALGetDataCoverageStatus( mBand, window.column, window.row, window.columns, window.rows, 0, nullptr );
+    if ( ( status & GDAL_DATA_COVERAGE_STATUS_UNIMPLEMENTED ) || !( status & GDAL_DATA_COVERAGE_STATUS_EMPTY ) )
+      return Coverage::Whole;
+    return status & GDAL_DATA_COVERAGE_STATUS_DATA ? Coverage::Part : Coverage::None;
   }
 
-  void GdalBand::leaveOutUncovered( int column, int row, int columns, int rows, double *elevationsM, int stride )
+  void GdalBand::leaveOutUncovered( const Window &window, double *elevationsM, int stride )
   {
-    bool everywhere = false;
-    if ( !isUncoveredSomewhere( column, row, columns, rows, everywhere ) )
+    const Coverage coverage = coverageOf( window );
+    if ( coverage == Coverage::Whole )
       return;
-    if ( everywhere || ( columns == 1 && rows == 1 ) )
+    if ( coverage == Coverage::None || ( window.columns == 1 && window.rows == 1 ) )
     {
-      for ( int r = 0; r < rows; ++r )
-      {
-        for ( int c = 0; c < columns; ++c )
-          elevationsM[static_cast<std::size_t>( r ) * static_cast<std::size_t>( stride )
-            + static_cast<std::size_t>( c )] = NO_ELEVATION;
-      }
+      for ( int row = 0; row < window.rows; ++row )
+        std::fill_n( elevationsM + static_cast<std::ptrdiff_t>( row ) * stride, window.columns, NO_ELEVATION );
       return;
     }
     // Covered in part: halve the longer side until the parts are plain.
-    if ( columns >= rows )
+    Window first = window;
+    Window second = window;
+    if ( window.columns >= window.rows )
     {
-      const int half = columns / 2;
-      leaveOutUncovered( column, row, half, rows, elevationsM, stride );
-      leaveOutUncovered( column + half, row, columns - half, rows, elevationsM + half, stride );
+      first.columns = window.columns / 2;
+      second.column += first.columns;
+      second.columns -= first.columns;
     }
     else
     {
-      const int half = rows / 2;
-      leaveOutUncovered( column, row, columns, half, elevationsM, stride );
-      leaveOutUncovered(
-        column, row + half, columns, rows - half, elevationsM + static_cast<std::ptrdiff_t>( half ) * stride, stride );
+      first.rows = window.rows / 2;
+      second.row += first.rows;
+      second.rows -= first.rows;
     }
+    leaveOutUncovered( first, elevationsM, stride );
+    leaveOutUncovered( second,
+      elevationsM + static_cast<std::ptrdiff_t>( second.row - window.row ) * stride + ( second.column - window.column ),
+      stride );
   }
 
 } // namespace stillhead

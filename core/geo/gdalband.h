@@ -27,18 +27,36 @@ namespace stillhead
   class GdalBand
   {
     public:
+      //! Pixels, from the upper left one.
+      struct Window
+      {
+          int column = 0;
+          int row = 0;
+          int columns = 0;
+          int rows = 0;
+      };
+
       //! \param metresPerUnit of the band's heights, after scale and offset
       GdalBand( GdalDataset dataset, int band, double metresPerUnit );
 
       //! As ElevationSource::read().
-      void read( int column, int row, int columns, int rows, double *elevationsM );
+      void read( const Window &window, double *elevationsM );
 
     private:
-      void readRaw( GDALRasterBandH band, int column, int row, int columns, int rows, void *values, GDALDataType type,
-        const GdalErrors &errors );
-      void leaveOutMasked( int column, int row, int columns, int rows, double *elevationsM, const GdalErrors &errors );
-      void leaveOutUncovered( int column, int row, int columns, int rows, double *elevationsM, int stride );
-      bool isUncoveredSomewhere( int column, int row, int columns, int rows, bool &everywhere ) const;
+      //! How much of a window the sources of a mosaic, or the blocks of a sparse file, cover.
+      enum class Coverage
+      {
+        Whole,
+        Part,
+        None
+      };
+
+      void readRaw(
+        GDALRasterBandH band, const Window &window, void *values, GDALDataType type, const GdalErrors &errors );
+      void toElevations( double *values, std::size_t count ) const;
+      void leaveOutMasked( const Window &window, double *elevationsM, const GdalErrors &errors );
+      Coverage coverageOf( const Window &window ) const;
+      void leaveOutUncovered( const Window &window, double *elevationsM, int stride );
 
       GdalDataset mDataset;
       GDALRasterBandH mBand = nullptr;

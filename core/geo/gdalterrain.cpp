@@ -195,7 +195,7 @@ namespace stillhead
   {
     // A handle whose read failed is not given back: the next read starts afresh.
     std::unique_ptr<GdalBand> band = mPool->take();
-    band->read( column, row, columns, rows, elevationsM );
+    band->read( { column, row, columns, rows }, elevationsM );
     mPool->giveBack( std::move( band ) );
   }
 
