@@ -23,8 +23,9 @@ target_link_libraries( stillhead_qgis_gui INTERFACE stillhead_qgis ${QGIS_GUI_LI
 # Where QGIS looks. Relative to the prefix, so that `cmake --install build --prefix X` works too.
 get_filename_component( STILLHEAD_QGIS_PREFIX "${QGIS_CORE_LIBRARY}" DIRECTORY )
 string( REGEX REPLACE "/lib(64)?(/[^/]+)?$" "" STILLHEAD_QGIS_PREFIX "${STILLHEAD_QGIS_PREFIX}" )
-if( CMAKE_INSTALL_PREFIX_INITIALIZED_TO_DEFAULT )
+if( STILLHEAD_PREFIX_OPEN )
   set( CMAKE_INSTALL_PREFIX "${STILLHEAD_QGIS_PREFIX}" CACHE PATH "QGIS's own prefix" FORCE )
+  set( STILLHEAD_PREFIX_OPEN OFF CACHE INTERNAL "" )
 endif()
 set( STILLHEAD_PLUGIN_DIR "lib/qgis/plugins" CACHE STRING "QGIS's folder of native plugins, below the prefix" )
 set( STILLHEAD_PYTHON_DIR "share/qgis/python/plugins" CACHE STRING "QGIS's folder of Python plugins, below the prefix" )

@@ -5,8 +5,8 @@
 stillheadBuildPackages="g++ cmake ninja-build libqgis-dev libgdal-dev libproj-dev libboost-dev libeigen3-dev
   qtbase5-dev qttools5-dev libqt5svg5-dev"
 stillheadRunPackages="qgis qgis-providers python3-qgis gdal-bin proj-bin proj-data fonts-dejavu-core"
-stillheadTestPackages="xvfb xauth"
-stillheadCheckPackages="clang-format dpkg-dev"
+stillheadTestPackages="xvfb xauth dpkg-dev"
+stillheadCheckPackages="clang-format"
 
 # ensure_packages name... : installs those of the named packages that are not installed.
 ensure_packages()

@@ -1,9 +1,9 @@
 #!/bin/bash
 # SPDX-License-Identifier: GPL-2.0-or-later
-# headless.sh BUILD: enables the headless package of BUILD in the profile that the environment names and checks
-# that the command-line tool lists the provider, exactly once and as active.
+# headless.sh FOLDER: enables the headless package that lies in FOLDER in the profile that the environment names
+# and checks that the command-line tool lists the provider, exactly once and as active.
 set -euo pipefail
-export QGIS_PLUGINPATH="$1/headless"
+export QGIS_PLUGINPATH="$1"
 # Some distributions wrap the tool in a script that passes options it does not know.
 tool="$( command -v qgis_process.bin || command -v qgis_process )"
 "$tool" plugins enable stillhead_headless
