@@ -3,28 +3,26 @@
 #include "core/job/staticjob.h"
 
 #include "core/feedback/parallel.h"
+#include "core/job/placing.h"
+#include "core/job/zonefeeding.h"
 #include "core/judgement/judge.h"
 #include "core/judgement/linejudge.h"
 #include "core/judgement/stretches.h"
 #include "core/judgement/summits.h"
 #include "core/profile/profilebuilder.h"
 #include "core/terrain/segmentwalk.h"
-#include "core/terrain/terrainreader.h"
-#include "core/units/units.h"
 
 #include <algorithm>
 #include <cmath>
 #include <memory>
+#include <numeric>
+#include <utility>
 
 namespace stillhead
 {
 
   namespace
   {
-    //! Readings outside this range are rare enough to be asked about; common practice, no source.
-    constexpr double USUAL_LEAST_PA = 15.0 * PASCALS_PER_PSI;
-    constexpr double USUAL_MOST_PA = 250.0 * PASCALS_PER_PSI;
-
     class Pipeline
     {
       public:
@@ -38,12 +36,9 @@ namespace stillhead
         {
           mResult.drawing = canonicalDrawing( *mJob.drawing, *mJob.measure, mJob.threads, mResult.findings, mMonitor );
           if ( mResult.drawing.lines.empty() )
-            throw Refusal { Refusal::Reason::NoLines, 0.0 };
+            throw Refusal { Refusal::Reason::NoLines, 0.0, {}, {}, {} };
           findWithoutSurvey();
-          placeSource();
-          mResult.network = joinLines( mResult.drawing, *mJob.measure, mJob.joins, SourcePlace { mResult.source.on },
-            mJob.threads, mResult.findings, mMonitor );
-          makeZones();
+          joinAndFeed();
           judgeLines();
           judgeWhole();
           return std::move( mResult );
@@ -77,75 +72,47 @@ namespace stillhead
           return mJob.terrain->grid().toPixel( terrain );
         }
 
-        //! True if the box around some line meets the terrain.
-        bool linesMeetTerrain() const
+        //! Places sources and devices, joins the lines there, parts the network at devices and feeds its zones.
+        void joinAndFeed()
         {
-          const RasterGrid &grid = mJob.terrain->grid();
-          for ( const CanonicalLine &line : mResult.drawing.lines )
+          Placing placing( mJob, mResult.drawing, mResult.findings );
+          mResult.sources = placing.placeSources();
+          std::vector<DevicePlace> devices = placing.placeDevices();
+
+          std::vector<std::size_t> order( mResult.sources.size() );
+          std::iota( order.begin(), order.end(), 0 );
+          const auto on = [&]( std::size_t i ) {
+            return std::make_pair( mResult.sources[i].on.line, mResult.sources[i].on.alongM );
+          };
+          std::stable_sort(
+            order.begin(), order.end(), [&]( std::size_t a, std::size_t b ) { return on( a ) < on( b ); } );
+          std::vector<PlaceOnLine> places;
+          for ( const std::size_t source : order )
+            places.push_back( mResult.sources[source].on );
+          for ( const DevicePlace &device : devices )
+            places.push_back( device.on );
+
+          std::vector<int> nodes;
+          mResult.network = joinLines(
+            mResult.drawing, *mJob.measure, mJob.joins, places, nodes, mJob.threads, mResult.findings, mMonitor );
+          for ( std::size_t i = 0; i < order.size(); ++i )
           {
-            TerrainPoint low { HUGE_VAL, HUGE_VAL };
-            TerrainPoint high { -HUGE_VAL, -HUGE_VAL };
-            for ( std::size_t i = line.first; i < line.first + line.count; ++i )
-            {
-              const TerrainPoint pixel = pixelOf( mResult.drawing.vertices[i] );
-              low = { std::min( low.x, pixel.x ), std::min( low.y, pixel.y ) };
-              high = { std::max( high.x, pixel.x ), std::max( high.y, pixel.y ) };
-            }
-            if ( low.x <= grid.columns() - 0.5 && high.x >= -0.5 && low.y <= grid.rows() - 0.5 && high.y >= -0.5 )
-              return true;
+            mResult.sources[order[i]].node = nodes[i];
+            mResult.network.nodes[static_cast<std::size_t>( nodes[i] )].kind = NodeKind::Source;
           }
-          return false;
-        }
-
-        void placeSource()
-        {
-          const Source &source = mJob.source;
-          SourceReport &report = mResult.source;
-          const std::optional<NearestPipe> pipe =
-            nearestPipe( mResult.drawing, *mJob.measure, source.place, mJob.joins.toleranceM );
-          if ( !pipe || pipe->distanceM > mJob.sourceReachM )
-            throw Refusal { Refusal::Reason::SourceTooFar, pipe ? pipe->distanceM : NOT_A_FIGURE };
-          report.on = pipe->on;
-          report.distanceM = pipe->distanceM;
-          TerrainReader reader( *mJob.terrain );
-          report.terrainGroundM = reader.elevationAtM( pixelOf( source.place ) );
-          report.usedGroundM = source.groundElevationM.value_or( report.terrainGroundM );
-          if ( source.kind != SourceKind::WaterLevel && std::isnan( report.usedGroundM ) )
-            throw Refusal { linesMeetTerrain() ? Refusal::Reason::SourceNoTerrain : Refusal::Reason::NoOverlap, 0.0 };
-          report.levels = staticLevels( source, report.usedGroundM, mJob.specificWeightNPerM3 );
-
-          if ( !source.low )
-            addFinding( FindingCode::OneReading, source.place );
-          if ( source.boostPa != 0.0 && !source.boostLowPa )
-            addFinding( FindingCode::PumpDutyNotGiven, source.place );
-          if ( source.kind == SourceKind::PressureReading )
-            reportUnusual( source );
-        }
-
-        void reportUnusual( const Source &source )
-        {
-          for ( const double readingPa : { source.high, source.low.value_or( source.high ) } )
-          {
-            if ( readingPa >= USUAL_LEAST_PA && readingPa <= USUAL_MOST_PA )
-              continue;
-            addFinding( FindingCode::UnusualPressure, source.place ).figurePa = readingPa;
-            return;
-          }
-        }
-
-        void makeZones()
-        {
+          for ( std::size_t i = 0; i < devices.size(); ++i )
+            devices[i].node = nodes[order.size() + i];
+          partAtDevices( mResult.network, mResult.drawing, mJob.devices, devices, mResult.findings );
+          const auto isLeftOut = [&]( const DevicePlace &place ) {
+            return mResult.network.nodes[static_cast<std::size_t>( place.node )].device != place.device;
+          };
+          devices.erase( std::remove_if( devices.begin(), devices.end(), isLeftOut ), devices.end() );
+          std::vector<double> elevationsM;
+          for ( const DevicePlace &device : devices )
+            elevationsM.push_back( placing.deviceElevationM( device ) );
+          directLinks( mResult.network, mResult.drawing, mJob.devices, devices );
           mResult.zoneMap = zonesOf( mResult.network );
-          mResult.zones.resize( static_cast<std::size_t>( mResult.zoneMap.count ) );
-          const Source &source = mJob.source;
-          const bool onTerrain = !source.groundElevationM && source.kind != SourceKind::WaterLevel;
-          const double doubt = doubtPa( mJob.terrainRmseM, mJob.readingErrorPa, onTerrain, mJob.specificWeightNPerM3 );
-          for ( std::size_t i = 0; i < mResult.network.nodes.size(); ++i )
-          {
-            if ( mResult.network.nodes[i].kind == NodeKind::Source )
-              mResult.zones[static_cast<std::size_t>( mResult.zoneMap.ofNode[i] )] = { true, mResult.source.levels,
-                doubt };
-          }
+          feedZones( mJob, devices, elevationsM, mResult );
         }
 
         //! Lines in the order of the tiles they begin in, so that neighbours are worked on while their terrain is at hand.
@@ -203,8 +170,8 @@ namespace stillhead
             vertices += outcome.vertices.size();
             anyElevation = anyElevation || outcome.anyElevation;
           }
-          if ( !anyElevation && !linesMeetTerrain() )
-            throw Refusal { Refusal::Reason::NoOverlap, 0.0 };
+          if ( !anyElevation && !Placing( mJob, mResult.drawing, mResult.findings ).linesMeetTerrain() )
+            throw Refusal { Refusal::Reason::NoOverlap, 0.0, {}, {}, {} };
           mResult.pieces.reserve( pieces );
           mResult.vertices.reserve( vertices );
           for ( LineOutcome &outcome : outcomes )

@@ -3,16 +3,19 @@
 #pragma once
 
 #include "core/feedback/monitor.h"
+#include "core/feedback/refusal.h"
 #include "core/judgement/limits.h"
 #include "core/judgement/piece.h"
 #include "core/judgement/stretch.h"
 #include "core/network/canonicaldrawing.h"
+#include "core/network/device.h"
 #include "core/network/joining.h"
 #include "core/network/network.h"
 #include "core/plan/finding.h"
 #include "core/plan/plantoterrain.h"
 #include "core/profile/simplify.h"
 #include "core/statics/source.h"
+#include "core/statics/standingdevice.h"
 #include "core/statics/zones.h"
 #include "core/terrain/tilecache.h"
 
@@ -23,6 +26,14 @@
 namespace stillhead
 {
 
+  //! Whether it is asked what regulators that fail open would do; the order is that of the FAILED_OPEN parameter.
+  enum class FailedOpen
+  {
+    NotAsked,
+    EachInTurn,
+    All
+  };
+
   //! Inputs of the main job; all in SI.
   struct StaticJob
   {
@@ -30,21 +41,25 @@ namespace stillhead
       const PlanMeasure *measure = nullptr;
       const PlanToTerrain *planToTerrain = nullptr;
       TileCache *terrain = nullptr;
-      Source source;
+      std::vector<Source> sources; //!< at least one
+      std::vector<Device> devices;
       double sourceReachM = 10.0;
       bool useLineZ = false; //!< drawn Z (Drawing::surveyZM) is the pipe and replaces terrain and cover
       JoinOptions joins;
       Limits limits;
       double terrainRmseM = 0.0;
       double readingErrorPa = 0.0; //!< ± at 95 %
+      double leastDropPa = 0.0;    //!< below this difference of low inlet over set a regulator is short of differential
+      FailedOpen failedOpen = FailedOpen::NotAsked;
       double specificWeightNPerM3 = 0.0;
       unsigned threads = 0; //!< 0: as many as the machine has cores; results do not depend on it
   };
 
-  //! What was used at the source.
+  //! What was used at a source.
   struct SourceReport
   {
-      PlaceOnLine on;              //!< where it joins the pipe
+      PlaceOnLine on; //!< where it joins the pipe
+      int node = -1;
       double distanceM = 0.0;      //!< from the given point to that place
       double terrainGroundM = 0.0; //!< NaN where the terrain has none
       double usedGroundM = 0.0;    //!< NaN where the kind needs none
@@ -76,6 +91,13 @@ namespace stillhead
       State state = State::NoSource;
   };
 
+  //! The largest level of the high case that a zone would see if regulators fail open, and the device that causes it.
+  struct ZoneFailure
+  {
+      double levelM = 0.0;
+      int device = -1; //!< −1: no failure raises it
+  };
+
   //! Everything the main job found. Indices of lines refer to `drawing.lines` (canonical order) unless said otherwise.
   struct StaticResult
   {
@@ -88,23 +110,11 @@ namespace stillhead
       std::vector<NodeFigures> nodeFigures; //!< one for each node
       std::vector<Stretch> stretches;
       std::vector<Extreme> extremes;
-      std::vector<Finding> findings; //!< Finding::line indexes Drawing::lines as drawn
-      SourceReport source;
+      std::vector<Finding> findings;       //!< Finding::line indexes Drawing::lines as drawn
+      std::vector<SourceReport> sources;   //!< one for each source given
+      std::vector<StandingDevice> devices; //!< those that found their place, in the order given
+      std::vector<ZoneFailure> failures;   //!< one for each zone if it was asked for, else empty
       Totals totals;
-  };
-
-  //! Why the job was refused; the caller makes the sentence.
-  struct Refusal
-  {
-      enum class Reason
-      {
-        NoLines,         //!< nothing left to compute
-        SourceTooFar,    //!< figureM: distance to the nearest pipe
-        SourceNoTerrain, //!< no elevation at the source and none given
-        NoOverlap        //!< no vertex of any line lies on the terrain
-      };
-      Reason reason = Reason::NoLines;
-      double figureM = 0.0;
   };
 
   /**

@@ -28,10 +28,10 @@ namespace stillhead
     std::vector<double> elevations { zone.levels.highM, zone.levels.lowM, highAt( most ), lowAt( least ) };
     for ( const double band : limits.bandsPa )
       elevations.push_back( highAt( band ) );
-    if ( zone.doubtPa > 0.0 )
-      elevations.insert( elevations.end(),
-        { highAt( most - zone.doubtPa ), highAt( most + zone.doubtPa ), lowAt( least - zone.doubtPa ),
-          lowAt( least + zone.doubtPa ) } );
+    if ( zone.doubtHighPa > 0.0 )
+      elevations.insert( elevations.end(), { highAt( most - zone.doubtHighPa ), highAt( most + zone.doubtHighPa ) } );
+    if ( zone.doubtLowPa > 0.0 )
+      elevations.insert( elevations.end(), { lowAt( least - zone.doubtLowPa ), lowAt( least + zone.doubtLowPa ) } );
     std::sort( elevations.begin(), elevations.end() );
     const auto same = []( double a, double b ) { return b - a <= BEYOND_ROUNDING_M; };
     elevations.erase( std::unique( elevations.begin(), elevations.end(), same ), elevations.end() );

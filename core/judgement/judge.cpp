@@ -89,8 +89,9 @@ namespace stillhead
       piece.state = State::AboveStaticLevel;
     else
       piece.state = under ? State::UnderLimit : State::WithinLimits;
-    const bool near = std::abs( highPa - most ) <= zone.doubtPa || std::abs( lowPa - least ) <= zone.doubtPa;
-    piece.closeCall = zone.doubtPa > 0.0 && near && piece.state != State::AboveStaticLevel;
+    const bool nearMost = zone.doubtHighPa > 0.0 && std::abs( highPa - most ) <= zone.doubtHighPa;
+    const bool nearLeast = zone.doubtLowPa > 0.0 && std::abs( lowPa - least ) <= zone.doubtLowPa;
+    piece.closeCall = ( nearMost || nearLeast ) && piece.state != State::AboveStaticLevel;
     return piece;
   }
 

@@ -35,13 +35,30 @@ namespace stillhead
     }
   }
 
-  DisjointSets PieceGraph::groups( const std::function<bool( int )> &belongs ) const
+  template <typename Visit> void PieceGraph::visitPlaces( Visit visit ) const
   {
-    DisjointSets sets( mPieces.size() );
     std::vector<int> here;
     for ( std::size_t node = 0; node < mNetwork.nodes.size(); ++node )
     {
       piecesAt( static_cast<int>( node ), here );
+      visit( here );
+    }
+    std::vector<int> beyond;
+    for ( const DeviceLink &link : mNetwork.links )
+    {
+      if ( !link.passes )
+        continue;
+      piecesAt( link.fromNode, here );
+      piecesAt( link.toNode, beyond );
+      here.insert( here.end(), beyond.begin(), beyond.end() );
+      visit( here );
+    }
+  }
+
+  DisjointSets PieceGraph::groups( const std::function<bool( int )> &belongs ) const
+  {
+    DisjointSets sets( mPieces.size() );
+    visitPlaces( [&]( const std::vector<int> &here ) {
       int first = -1;
       for ( const int piece : here )
       {
@@ -52,7 +69,7 @@ namespace stillhead
         else
           first = piece;
       }
-    }
+    } );
     for ( std::size_t i = 1; i < mPieces.size(); ++i )
     {
       const int piece = static_cast<int>( i );
@@ -69,16 +86,13 @@ namespace stillhead
       if ( mPieces[i].span == mPieces[i - 1].span )
         visit( static_cast<int>( i ) - 1, static_cast<int>( i ) );
     }
-    std::vector<int> here;
-    for ( std::size_t node = 0; node < mNetwork.nodes.size(); ++node )
-    {
-      piecesAt( static_cast<int>( node ), here );
+    visitPlaces( [&]( const std::vector<int> &here ) {
       for ( std::size_t a = 0; a < here.size(); ++a )
       {
         for ( std::size_t b = a + 1; b < here.size(); ++b )
           visit( here[a], here[b] );
       }
-    }
+    } );
   }
 
 } // namespace stillhead

@@ -13,7 +13,7 @@
 namespace stillhead
 {
 
-  //! The pieces of a network, sorted by span, and how they hang together.
+  //! The pieces of a network, sorted by span, and how they hang together (across devices too, but for closed valves).
   class PieceGraph
   {
     public:
@@ -36,6 +36,9 @@ namespace stillhead
       void visitTouching( const std::function<void( int, int )> &visit ) const;
 
     private:
+      //! Calls \a visit( pieces ) with all pieces that meet at one place.
+      template <typename Visit> void visitPlaces( Visit visit ) const;
+
       const Network &mNetwork;
       const std::vector<Piece> &mPieces;
       Adjacency mAdjacency;

@@ -32,7 +32,13 @@ namespace stillhead
         Flood( const PieceGraph &graph, const std::vector<Zone> &zones )
           : mGraph( graph )
           , mZones( zones )
+          , mBeyond( graph.network().nodes.size() )
         {
+          for ( const DeviceLink &link : graph.network().links )
+          {
+            if ( link.passes )
+              mBeyond[static_cast<std::size_t>( link.fromNode )].push_back( link.toNode );
+          }
           mReach.ofNode.assign( graph.network().nodes.size(), Reached::No );
           mReach.ofPiece.assign( graph.pieces().size(), Reached::No );
         }
@@ -76,6 +82,13 @@ namespace stillhead
           {
             const int node = open.back();
             open.pop_back();
+            for ( const int next : mBeyond[static_cast<std::size_t>( node )] )
+            {
+              if ( mReach.ofNode[static_cast<std::size_t>( next )] >= as )
+                continue;
+              mReach.ofNode[static_cast<std::size_t>( next )] = as;
+              open.push_back( next );
+            }
             for ( const int span : mGraph.adjacency().spansAt( node ) )
             {
               const Span &pipe = mGraph.network().spans[static_cast<std::size_t>( span )];
@@ -114,6 +127,7 @@ namespace stillhead
 
         const PieceGraph &mGraph;
         const std::vector<Zone> &mZones;
+        std::vector<std::vector<int>> mBeyond; //!< nodes behind the devices at each node
         Reach mReach;
     };
   } // namespace

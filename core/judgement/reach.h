@@ -27,7 +27,10 @@ namespace stillhead
   //! True if \a piece of a fed zone lies above \a levelM; false where its elevation is unknown.
   bool liesAbove( const Piece &piece, double levelM );
 
-  //! Spreads water from the source nodes through the fed zones in the low case. Pipe without elevation lets it pass.
+  /**
+   * Spreads water from the source nodes through the fed zones in the low case, through devices the way they pass. Pipe
+   * without elevation lets it pass.
+   */
   Reach lowCaseReach( const PieceGraph &graph, const std::vector<Zone> &zones );
 
 } // namespace stillhead

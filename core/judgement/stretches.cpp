@@ -74,7 +74,8 @@ namespace stillhead
           stretch.worstElevationM = stretch.over ? worst.lowestM : worst.highestM;
           const double past = beyond( stretch.worstPiece, stretch.over );
           stretch.beyondPa = std::max( 0.0, past );
-          const double doubt = mZones[static_cast<std::size_t>( worst.zone )].doubtPa;
+          const Zone &zone = mZones[static_cast<std::size_t>( worst.zone )];
+          const double doubt = stretch.over ? zone.doubtHighPa : zone.doubtLowPa;
           stretch.closeCall = doubt > 0.0 && std::abs( past ) <= doubt;
           std::vector<std::tuple<Role, int>> features;
           for ( const int number : stretch.pieces )

@@ -1,5 +1,5 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Ends first, then interiors, then crossings, then the source; findings last, when it is known what is joined.
+// Ends first, then interiors, then crossings, then sources and devices; findings last, when it is known what is joined.
 #include "core/network/joining.h"
 
 #include "core/network/crossings.h"
@@ -112,8 +112,8 @@ namespace stillhead
       }
     }
 
-    //! The element of the source: what the line has within the tolerance, else a cut of its own.
-    int sourceElement( Noding &noding, const PlaceOnLine &on, double toleranceM )
+    //! The element of a source or device: what the line has within the tolerance, else a cut of its own.
+    int elementAt( Noding &noding, const PlaceOnLine &on, double toleranceM )
     {
       const std::vector<LineCut> near = noding.near( on.line, on.alongM, toleranceM );
       const auto nearest = std::min_element( near.begin(), near.end(), [&]( const LineCut &a, const LineCut &b ) {
@@ -125,7 +125,8 @@ namespace stillhead
   } // namespace
 
   Network joinLines( const CanonicalDrawing &drawing, const PlanMeasure &measure, const JoinOptions &options,
-    const std::optional<SourcePlace> &source, unsigned threads, std::vector<Finding> &findings, Monitor &monitor )
+    const std::vector<PlaceOnLine> &places, std::vector<int> &nodeOfPlace, unsigned threads,
+    std::vector<Finding> &findings, Monitor &monitor )
   {
     const GroundScales scales( drawing, measure, threads, monitor );
     const LegIndex index( drawing );
@@ -142,15 +143,15 @@ namespace stillhead
     reportTouches( drawing, touches, scales, options.toleranceM, found );
     treatCrossings(
       drawing, findCrossings( drawing, index, options.toleranceM, threads, monitor ), options, noding, found );
-    int sourceAt = -1;
-    if ( source )
+    std::vector<int> elements;
+    for ( const PlaceOnLine &place : places )
     {
-      sourceAt = sourceElement( noding, source->on, options.toleranceM );
+      elements.push_back( elementAt( noding, place, options.toleranceM ) );
       noding.settle();
     }
 
     std::vector<int> nodeOfEnd;
-    Network network = noding.network( sourceAt, nodeOfEnd );
+    Network network = noding.network( elements, nodeOfEnd, nodeOfPlace );
     const std::vector<Finding> nearMisses =
       findNearMisses( drawing, network, nodeOfEnd, index, scales, options.toleranceM, threads, monitor );
     found.insert( found.end(), nearMisses.begin(), nearMisses.end() );
@@ -164,13 +165,15 @@ namespace stillhead
   }
 
   std::optional<NearestPipe> nearestPipe(
-    const CanonicalDrawing &drawing, const PlanMeasure &measure, const PlanPoint &place, double toleranceM )
+    const CanonicalDrawing &drawing, const PlanMeasure &measure, const PlanPoint &place, int system, double toleranceM )
   {
     const GroundScale scale = measure.scaleAt( place );
     std::optional<NearestPipe> nearest[2];
     for ( std::size_t i = 0; i < drawing.lines.size(); ++i )
     {
       const CanonicalLine &line = drawing.lines[i];
+      if ( system != 0 && line.system != system )
+        continue;
       std::optional<NearestPipe> &best = nearest[line.role == Role::Mainline ? 0 : 1];
       for ( std::size_t v = line.first; v + 1 < line.first + line.count; ++v )
       {

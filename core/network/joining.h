@@ -18,19 +18,15 @@ namespace stillhead
       bool joinCrossings = false; //!< lines that merely cross are joined too
   };
 
-  //! A place that must become a node although nothing ends there (a source).
-  struct SourcePlace
-  {
-      PlaceOnLine on;
-  };
-
   /**
    * The network of \a drawing. Lines of different systems never join. Findings: near misses, crossings without a joint,
    * systems that touch.
-   * \param source where the source stands; its node gets the kind Source (a node within the tolerance takes it over)
+   * \param places where sources and devices stand: each becomes a node (one within the tolerance takes it over)
+   * \param nodeOfPlace receives the node of every place
    */
   Network joinLines( const CanonicalDrawing &drawing, const PlanMeasure &measure, const JoinOptions &options,
-    const std::optional<SourcePlace> &source, unsigned threads, std::vector<Finding> &findings, Monitor &monitor );
+    const std::vector<PlaceOnLine> &places, std::vector<int> &nodeOfPlace, unsigned threads,
+    std::vector<Finding> &findings, Monitor &monitor );
 
   //! The pipe nearest to a place.
   struct NearestPipe
@@ -41,9 +37,9 @@ namespace stillhead
 
   /**
    * The pipe nearest to \a place on the ground; a mainline before a lateral where both lie equally near within \a toleranceM.
-   * Nothing where the drawing has no line.
+   * Only lines of \a system, if it is not 0 (blank). Nothing where the drawing has no such line.
    */
-  std::optional<NearestPipe> nearestPipe(
-    const CanonicalDrawing &drawing, const PlanMeasure &measure, const PlanPoint &place, double toleranceM );
+  std::optional<NearestPipe> nearestPipe( const CanonicalDrawing &drawing, const PlanMeasure &measure,
+    const PlanPoint &place, int system, double toleranceM );
 
 } // namespace stillhead

@@ -21,7 +21,8 @@ namespace stillhead
   {
     End,
     Joint,
-    Source
+    Source,
+    Device
   };
 
   //! A place where pipes end or meet.
@@ -29,8 +30,9 @@ namespace stillhead
   {
       NodeKind kind = NodeKind::End;
       PlanPoint place;
-      PlaceOnLine on; //!< the pipe whose elevation the node has
-      int degree = 0; //!< ends of spans that meet here
+      PlaceOnLine on;  //!< the pipe whose elevation the node has
+      int degree = 0;  //!< ends of spans that meet here
+      int device = -1; //!< what stands here, index into the devices given
   };
 
   //! Pipe of one line between two neighbouring nodes, from `fromM` to `toM` along the line.
@@ -43,11 +45,21 @@ namespace stillhead
       int toNode = -1;
   };
 
+  //! A device between two nodes at one place. Water passes from `fromNode` to `toNode` if at all.
+  struct DeviceLink
+  {
+      int device = -1;
+      int fromNode = -1;
+      int toNode = -1;
+      bool passes = true; //!< false for a closed valve
+  };
+
   //! Spans are sorted by line and along it; both follow the canonical order of the drawing.
   struct Network
   {
       std::vector<Node> nodes;
       std::vector<Span> spans;
+      std::vector<DeviceLink> links; //!< where devices part the network
   };
 
 } // namespace stillhead

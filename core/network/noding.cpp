@@ -79,7 +79,7 @@ namespace stillhead
     return found;
   }
 
-  Network Noding::network( int source, std::vector<int> &nodeOfEnd )
+  Network Noding::network( const std::vector<int> &asked, std::vector<int> &nodeOfEnd, std::vector<int> &nodeOfAsked )
   {
     Network network;
     const int elements = mEnds + static_cast<int>( mCuts.size() );
@@ -123,9 +123,9 @@ namespace stillhead
     }
     for ( Node &node : network.nodes )
       node.kind = node.degree > 1 ? NodeKind::Joint : NodeKind::End;
-    if ( source >= 0 )
-      network.nodes[static_cast<std::size_t>( nodeOfElement[static_cast<std::size_t>( source )] )].kind =
-        NodeKind::Source;
+    nodeOfAsked.clear();
+    for ( const int element : asked )
+      nodeOfAsked.push_back( nodeOfElement[static_cast<std::size_t>( element )] );
     return network;
   }
 

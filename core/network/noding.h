@@ -51,10 +51,11 @@ namespace stillhead
       bool isEnd( int element ) const { return element < mEnds; }
 
       /**
-       * The network. \a source is an element whose node gets the kind Source (−1: none).
+       * The network.
        * \param nodeOfEnd receives the node of every end
+       * \param asked elements whose nodes are asked for, and where they go
        */
-      Network network( int source, std::vector<int> &nodeOfEnd );
+      Network network( const std::vector<int> &asked, std::vector<int> &nodeOfEnd, std::vector<int> &nodeOfAsked );
 
     private:
       LineCut endOf( int line, bool last ) const;

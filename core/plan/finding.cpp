@@ -35,6 +35,24 @@ namespace stillhead
       return "unusual pressure";
     case FindingCode::PumpDutyNotGiven:
       return "pump duty not given";
+    case FindingCode::LevelsDiffer:
+      return "levels differ";
+    case FindingCode::DeviceOffTheLine:
+      return "device off the line";
+    case FindingCode::DeviceAtAJoint:
+      return "device at a joint";
+    case FindingCode::RegulatorWideOpen:
+      return "regulator wide open";
+    case FindingCode::RegulatorShortOfDifferential:
+      return "regulator short of differential";
+    case FindingCode::RegulatorBypassed:
+      return "regulator bypassed";
+    case FindingCode::RegulatorHeldShut:
+      return "regulator held shut";
+    case FindingCode::PressureMayBeTrapped:
+      return "pressure may be trapped";
+    case FindingCode::CannotBeMended:
+      return "cannot be mended";
     }
     return "";
   }

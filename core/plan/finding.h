@@ -6,6 +6,7 @@
 #include "core/plan/plan.h"
 
 #include <limits>
+#include <vector>
 
 namespace stillhead
 {
@@ -24,7 +25,16 @@ namespace stillhead
     NoSurveyZ,         //!< asked to use drawn Z, but this line has none
     OneReading,        //!< only one value given for the source
     UnusualPressure,   //!< source pressure outside 15 to 250 psi; figurePa
-    PumpDutyNotGiven   //!< boost given without its value while running
+    PumpDutyNotGiven,  //!< boost given without its value while running
+    LevelsDiffer,      //!< sources of one zone agree only nearly; figurePa: the difference
+    DeviceOffTheLine,  //!< a device that stands on no pipe; gapM to the nearest. It is left out
+    DeviceAtAJoint,    //!< a device where it is not clear which leg it stands on. It is left out
+    RegulatorWideOpen, //!< inlet below set in the low case; figurePa: the inlet
+    RegulatorShortOfDifferential, //!< low inlet less than the least drop above set; figurePa: inlet less set
+    RegulatorBypassed,            //!< water has a way round it; way: the lines
+    RegulatorHeldShut,            //!< its outlet side is fed to a larger level
+    PressureMayBeTrapped,         //!< below a check valve
+    CannotBeMended                //!< over limit, but no regulator can help; figureM: the ground that needs the level
   };
 
   //! The text of \a code in the FINDINGS output.
@@ -44,6 +54,10 @@ namespace stillhead
       double lengthM = NOT_A_FIGURE; //!< length of pipe that the code speaks of
       double figurePa = NOT_A_FIGURE;
       bool joinedByEnd = false;
+      int device = -1; //!< index into the devices given
+      int source = -1; //!< index into the sources given
+      int otherSource = -1;
+      std::vector<int> way; //!< drawn lines of a way, in its order
   };
 
 } // namespace stillhead

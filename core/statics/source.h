@@ -20,6 +20,7 @@ namespace stillhead
   struct Source
   {
       PlanPoint place;
+      int system = 0; //!< index into Drawing::systems; a blank one joins any line
       SourceKind kind = SourceKind::PressureReading;
       double high = 0.0;                      //!< high case: Pa for a reading, m for a level
       std::optional<double> low;              //!< low case; unset: as high

@@ -37,11 +37,11 @@ namespace stillhead
     return zones;
   }
 
-  double doubtPa( double terrainRmseM, double readingErrorPa, bool sourceOnTerrain, double specificWeightNPerM3 )
+  double doubtPa( double terrainRmseM, double readingErrorPa, int terrainPlaces, double specificWeightNPerM3 )
   {
     constexpr double NORMAL_95 = 1.96;
     const double terrainPa = NORMAL_95 * terrainRmseM * specificWeightNPerM3;
-    return std::sqrt( terrainPa * terrainPa * ( sourceOnTerrain ? 2.0 : 1.0 ) + readingErrorPa * readingErrorPa );
+    return std::sqrt( terrainPa * terrainPa * terrainPlaces + readingErrorPa * readingErrorPa );
   }
 
 } // namespace stillhead

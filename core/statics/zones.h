@@ -15,7 +15,8 @@ namespace stillhead
   {
       bool fed = false; //!< joined to a source
       StaticLevels levels;
-      double doubtPa = 0.0; //!< how far a pressure may be off, ± at 95 %
+      double doubtHighPa = 0.0; //!< how far a pressure of the high case may be off, ± at 95 %
+      double doubtLowPa = 0.0;  //!< the same of the low case
   };
 
   //! Zone of every node and span, numbered from 0: the source's first, the others in the order of their nodes.
@@ -29,11 +30,11 @@ namespace stillhead
   ZoneMap zonesOf( const Network &network );
 
   /**
-   * Doubt of a pressure, ± at 95 %, from independent errors: √( (1.96·rmse·γ)²·n + reading² ) with n = 2 where the source
-   * takes its ground from the terrain too, else 1.
+   * Doubt of a pressure, ± at 95 %, from independent errors: √( (1.96·rmse·γ)²·n + reading² ).
    * \param terrainRmseM root mean square error of the terrain
    * \param readingErrorPa of the source's reading, ± at 95 %
+   * \param terrainPlaces n: at how many places the terrain enters (the pipe, and what its level rests on)
    */
-  double doubtPa( double terrainRmseM, double readingErrorPa, bool sourceOnTerrain, double specificWeightNPerM3 );
+  double doubtPa( double terrainRmseM, double readingErrorPa, int terrainPlaces, double specificWeightNPerM3 );
 
 } // namespace stillhead
