@@ -13,10 +13,7 @@ ensure_packages()
 {
   local missing=() package asRoot=()
   for package in "$@"; do
-    case "$(dpkg-query -W -f='${db:Status-Status}' "$package" 2>/dev/null)" in
-      *installed) ;;
-      *) missing+=( "$package" ) ;;
-    esac
+    dpkg-query -W -f='${db:Status-Status}\n' "$package" 2>/dev/null | grep -qx installed || missing+=( "$package" )
   done
   if [ ${#missing[@]} -eq 0 ]; then
     return 0
