@@ -29,6 +29,12 @@ namespace stillhead
       //! Parameters of a run, whose definitions are this algorithm's.
       ParameterValues valuesOf( const QVariantMap &parameters, QgsProcessingContext &context ) const;
 
+      //! \a feedback, or \a silent for a runner that gives none.
+      static QgsProcessingFeedback &feedbackOr( QgsProcessingFeedback *feedback, QgsProcessingFeedback &silent )
+      {
+        return feedback ? *feedback : silent;
+      }
+
       /**
        * Runs \a work and rethrows whatever it throws as QgsProcessingException.
        * \returns what \a work returned

@@ -3,6 +3,7 @@
 #include "processing/provider.h"
 
 #include "core/version.h"
+#include "processing/pressuresurfacealgorithm.h"
 #include "processing/staticpressurealgorithm.h"
 
 #include <qgsprocessingalgorithm.h>
@@ -18,7 +19,7 @@ namespace stillhead
     //! Every algorithm of the provider, in the order in which the toolbox shows them.
     QList<QgsProcessingAlgorithm *> algorithmList()
     {
-      return { new StaticPressureAlgorithm() };
+      return { new StaticPressureAlgorithm(), new PressureSurfaceAlgorithm() };
     }
 
   } // namespace

@@ -196,6 +196,17 @@ namespace stillhead
     return list;
   }
 
+  ParameterList areaParameter()
+  {
+    ParameterList list;
+    add( list,
+      new QgsProcessingParameterFeatureSource( parameter::AREA, Text::tr( "Area to stay within" ),
+        compat::sourceTypes( { compat::Source::Polygon } ), QVariant(), true ),
+      Text::tr( "Polygons in any CRS; cells whose centre lies outside get no pressure. Optional: unset, the whole "
+                "terrain." ) );
+    return list;
+  }
+
   ParameterList unitParameters()
   {
     ParameterList list;

@@ -35,6 +35,9 @@ namespace stillhead
   //! LATERAL_LEAST, LATERAL_MOST, TERRAIN_RMSE and READING_ERROR.
   ParameterList judgementParameters();
 
+  //! AREA to stay within.
+  ParameterList areaParameter();
+
   //! PRESSURE_UNIT, LENGTH_UNIT and WATER_TEMPERATURE.
   ParameterList unitParameters();
 

@@ -25,12 +25,6 @@ namespace stillhead
       return layer && layer->dataProvider() ? layer->dataProvider()->pkAttributeIndexes() : QList<int>();
     }
 
-    //! Runners without a screen may give no feedback at all.
-    QgsProcessingFeedback &feedbackOr( QgsProcessingFeedback *feedback, QgsProcessingFeedback &silent )
-    {
-      return feedback ? *feedback : silent;
-    }
-
   } // namespace
 
   QString StaticPressureAlgorithm::name() const
@@ -85,6 +79,8 @@ namespace stillhead
     addSink( output::STRETCHES, Text::tr( "Stretches over or short" ), static_cast<int>( compat::Source::Polygon ), true );
     addSink( output::EXTREMES, Text::tr( "Worst places" ), static_cast<int>( compat::Source::Point ), true );
     addSink( output::FINDINGS, Text::tr( "Findings" ), static_cast<int>( compat::Source::Point ), true );
+    addParameter( new QgsProcessingParameterRasterDestination(
+      output::SURFACE, Text::tr( "Static pressure surface" ), QVariant(), true, false ) );
 
     addOutput( new QgsProcessingOutputString( output::SUMMARY, Text::tr( "Summary" ) ) );
     addNumberOutputs( {
@@ -119,7 +115,7 @@ namespace stillhead
       mLateralKeys = keysOf( laterals );
       mTerrain = readTerrain( values, feedbackOr( feedback, silent ) );
       const QgsRasterLayer *terrain = parameterAsRasterLayer( parameters, parameter::TERRAIN, context );
-      OutputSet( values, staticPressureSinks() )
+      OutputSet( values, staticPressureLayers() )
         .check( { { parameter::MAINS, mains }, { parameter::LATERALS, laterals }, { parameter::TERRAIN, terrain } } );
       return QVariantMap();
     } );

@@ -10,6 +10,7 @@
 #include "processing/reading/layercrs.h"
 #include "processing/reading/limitsreader.h"
 #include "processing/reading/unitsreader.h"
+#include "processing/surfaceoutput.h"
 #include "processing/text/refusaltext.h"
 #include "processing/text/summarytext.h"
 #include "processing/text/text.h"
@@ -29,6 +30,7 @@ namespace stillhead
     // How the progress bar is shared out.
     constexpr double READ_TO = 8.0;
     constexpr double SOLVE_TO = 75.0;
+    constexpr double SURFACE_TO = 90.0;
     constexpr double WRITE_TO = 99.0;
 
     std::unique_ptr<PlanToTerrain> wayToTerrain(
@@ -54,9 +56,9 @@ namespace stillhead
 
   } // namespace
 
-  QStringList staticPressureSinks()
+  QStringList staticPressureLayers()
   {
-    return { output::SPANS, output::NODES, output::STRETCHES, output::EXTREMES, output::FINDINGS };
+    return { output::SPANS, output::NODES, output::STRETCHES, output::EXTREMES, output::FINDINGS, output::SURFACE };
   }
 
   StaticPressureRun::StaticPressureRun( const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback )
@@ -159,47 +161,78 @@ namespace stillhead
     facts.sourceNote = mSource.note;
     facts.terrain = mTerrain.description();
     facts.constant = mUnits.constantText();
-    facts.parameters = parameterLines( mValues.values(), staticPressureSinks() );
+    facts.parameters = parameterLines( mValues.values(), staticPressureLayers() );
     return facts;
   }
 
   QVariantMap StaticPressureRun::write()
   {
     const ResultContext context { mResult, mDrawn, *mMeasure, mUnits, mLimits, mStyle, mTerrain.unit.metresPerUnit };
-    OutputSet outputs( mValues, staticPressureSinks() );
+    OutputSet outputs( mValues, staticPressureLayers() );
     std::vector<ResultTable> tables;
-    double rows = 0.0;
     for ( ResultTable &table : allTables( context ) )
     {
-      if ( !outputs.isAsked( table.output ) )
-        continue;
-      rows += static_cast<double>( table.rows ) + 1.0;
-      tables.push_back( std::move( table ) );
+      if ( outputs.isAsked( table.output ) )
+        tables.push_back( std::move( table ) );
     }
     outputs.checkFormats( tables );
 
     QVariantMap results;
     const QString summary = summaryText( context, mSource.source );
     const RunFacts runFacts = facts( summary );
-    double from = SOLVE_TO;
+    // The longest work first: a cancel then finds nothing replaced yet.
+    writeSurface( outputs, runFacts, results );
+    writeTables( outputs, tables, runFacts, results );
+    outputs.commit();
+    results.insert( output::SUMMARY, summary );
+    addNumbers( results );
+    mFeedback.pushInfo( summary );
+    return results;
+  }
+
+  void StaticPressureRun::writeSurface( OutputSet &outputs, const RunFacts &facts, QVariantMap &results )
+  {
+    if ( !outputs.isAsked( output::SURFACE ) )
+      return;
+    SurfaceInput input;
+    input.levels = mResult.source.levels;
+    input.hasLow = mSource.source.low.has_value();
+    if ( !QgsProcessingParameters::isDynamic( mValues.values(), parameter::COVER ) )
+      input.coverM = mUnits.metres( mValues.number( parameter::COVER ) );
+    FeedbackMonitor monitor( &mFeedback, SOLVE_TO, SURFACE_TO );
+    WrittenLayer written;
+    written.id = QgsProcessingParameters::parameterAsOutputLayer(
+      mValues.definition( output::SURFACE ), mValues.values(), mValues.context() );
+    written.what = ResultLayer::Surface;
+    written.metadata = resultMetadata( facts, mValues.definition( output::SURFACE )->description() );
+    writeSurfaceFile( written.id, input, mTerrain, mUnits, monitor );
+    outputs.noteWritten( output::SURFACE );
+    finishOnLoading( written, mStyle, mValues.context() );
+    results.insert( output::SURFACE, written.id );
+    mWritten.push_back( written );
+  }
+
+  void StaticPressureRun::writeTables(
+    OutputSet &outputs, const std::vector<ResultTable> &tables, const RunFacts &facts, QVariantMap &results )
+  {
+    double from = outputs.isAsked( output::SURFACE ) ? SURFACE_TO : SOLVE_TO;
+    double rows = 0.0;
+    for ( const ResultTable &table : tables )
+      rows += static_cast<double>( table.rows ) + 1.0;
+    const double percentPerRow = ( WRITE_TO - from ) / rows;
     for ( const ResultTable &table : tables )
     {
-      const double to = from + ( WRITE_TO - SOLVE_TO ) * ( static_cast<double>( table.rows ) + 1.0 ) / rows;
+      const double to = from + percentPerRow * ( static_cast<double>( table.rows ) + 1.0 );
       WrittenLayer written;
       written.id = outputs.write( table, mDrawn.crs, mFeedback, from, to );
       written.what = table.what;
-      written.metadata = resultMetadata( runFacts, mValues.definition( table.output )->description() );
+      written.metadata = resultMetadata( facts, mValues.definition( table.output )->description() );
       written.inGeoPackage = outputs.isGeoPackage( table.output );
       finishOnLoading( written, mStyle, mValues.context() );
       results.insert( table.output, written.id );
       mWritten.push_back( written );
       from = to;
     }
-    outputs.commit();
-    results.insert( output::SUMMARY, summary );
-    addNumbers( results );
-    mFeedback.pushInfo( summary );
-    return results;
   }
 
   void StaticPressureRun::addNumbers( QVariantMap &results ) const

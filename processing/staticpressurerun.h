@@ -17,8 +17,8 @@
 namespace stillhead
 {
 
-  //! Names of the vector outputs, in the order in which they are written.
-  QStringList staticPressureSinks();
+  //! Names of the outputs that are layers.
+  QStringList staticPressureLayers();
 
   class StaticPressureRun
   {
@@ -39,6 +39,8 @@ namespace stillhead
       const ResultStyle &style() const { return mStyle; }
 
     private:
+      void writeSurface( OutputSet &outputs, const RunFacts &facts, QVariantMap &results );
+      void writeTables( OutputSet &outputs, const std::vector<ResultTable> &tables, const RunFacts &facts, QVariantMap &results );
       void logSource() const;
       void logFindings() const;
       RunFacts facts( const QString &summary ) const;

@@ -25,14 +25,26 @@ namespace stillhead
       return lengthM;
     }
 
+    QString rangeText( double leastPa, double mostPa, const DisplayUnits &units )
+    {
+      return Text::tr( "%1 to %2" ).arg( plainNumber( units.pressure( leastPa ) ), units.givenPressureText( mostPa ) );
+    }
+
+    QString limitsText( const ResultContext &context )
+    {
+      const Limits &limits = context.limits;
+      const QString all = rangeText( limits.leastPa, limits.mostPa, context.units );
+      if ( limits.lateralLeastPa == limits.leastPa && limits.lateralMostPa == limits.mostPa )
+        return all;
+      return Text::tr( "%1 (laterals %2)" ).arg( all, rangeText( limits.lateralLeastPa, limits.lateralMostPa, context.units ) );
+    }
+
     QString lengthsSentence( const ResultContext &context )
     {
       const Totals &totals = context.result.totals;
       const DisplayUnits &units = context.units;
       QStringList parts;
-      parts << Text::tr( "%1 stands within %2 to %3 at rest" )
-                 .arg( units.lengthText( totals.withinM ), units.givenPressureText( context.limits.leastPa ),
-                   units.givenPressureText( context.limits.mostPa ) );
+      parts << Text::tr( "%1 stands within %2 at rest" ).arg( units.lengthText( totals.withinM ), limitsText( context ) );
       if ( totals.overM > 0.0 )
         parts << Text::tr( "%1 is over (%2 of it mainlines)" )
                    .arg( units.lengthText( totals.overM ), units.lengthText( overMainlinesM( context ) ) );

@@ -1,5 +1,5 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// The sinks of one run: asked about before the work, created after it, written one by one. A run that fails or is cancelled
+// The outputs of one run: asked about before the work, created after it, written one by one. A run that fails or is cancelled
 // while writing takes away what it has made; where something earlier was replaced already, it is finished instead.
 #pragma once
 
@@ -18,7 +18,7 @@ namespace stillhead
   class OutputSet
   {
     public:
-      //! \param names the vector outputs that the algorithm has
+      //! \param names the outputs that the algorithm has, rasters included
       OutputSet( const ParameterValues &values, const QStringList &names );
       ~OutputSet();
       OutputSet( const OutputSet & ) = delete;
@@ -43,6 +43,9 @@ namespace stillhead
        */
       QString write( const ResultTable &table, const QgsCoordinateReferenceSystem &crs, QgsProcessingFeedback &feedback,
         double fromPercent, double toPercent );
+
+      //! Says that the output \a name, which somebody else writes, is there from now on.
+      void noteWritten( const QString &name ) { mWritten.push_back( name ); }
 
       //! All is written and stays.
       void commit() { mWritten.clear(); }

@@ -9,6 +9,10 @@
 #include <qgsmaplayer.h>
 #include <qgsprocessingutils.h>
 #include <qgsproviderregistry.h>
+#include <qgsrasterlayer.h>
+
+#include <QDir>
+#include <QFileInfo>
 
 namespace stillhead
 {
@@ -50,6 +54,21 @@ namespace stillhead
       return error;
     }
 
+    //! A raster keeps style and metadata in files beside it, which the application reads by itself.
+    void storeBeside( const WrittenLayer &written, const ResultStyle &style )
+    {
+      QgsRasterLayer layer( written.id );
+      if ( !layer.isValid() )
+        return;
+      styleResult( layer, written.what, style );
+      layer.setMetadata( written.metadata );
+      const QFileInfo file( written.id );
+      const QString base = file.dir().filePath( file.completeBaseName() );
+      bool stored = false;
+      layer.saveNamedStyle( base + QStringLiteral( ".qml" ), stored );
+      layer.saveNamedMetadata( base + QStringLiteral( ".qmd" ), stored );
+    }
+
   } // namespace
 
   void finishOnLoading( const WrittenLayer &layer, const ResultStyle &style, QgsProcessingContext &context )
@@ -71,6 +90,8 @@ namespace stillhead
             feedback.pushWarning( error );
         }
       }
+      if ( written.what == ResultLayer::Surface )
+        storeBeside( written, style );
       if ( QgsMapLayer *layer = QgsProcessingUtils::mapLayerFromString( written.id, context, false ) )
         Finisher( written, style ).postProcessLayer( layer, context, &feedback );
     }
