@@ -40,11 +40,11 @@ namespace stillhead
       return { rim, line };
     }
 
-    //! Lifted, so that it does not cover the worst place that a summit often is.
-    Layers aboveItsPlace( const Layers &layers )
+    //! Moved off its place, where another symbol often stands (the worst place of a summit, a finding on the way).
+    Layers movedOff( const Layers &layers, double xMm, double yMm )
     {
       for ( QgsSymbolLayer *layer : layers )
-        static_cast<QgsMarkerSymbolLayer *>( layer )->setOffset( QPointF( 2.2, 0.0 ) ); // turned with the symbol
+        static_cast<QgsMarkerSymbolLayer *>( layer )->setOffset( QPointF( xMm, yMm ) );
       return layers;
     }
 
@@ -55,6 +55,7 @@ namespace stillhead
         Layers layers;
     };
 
+    // The arrow head is turned by a quarter, and its offset with it.
     QList<Look> looks()
     {
       return {
@@ -64,8 +65,8 @@ namespace stillhead
         { FindingCode::CrossingNotJoined, rimmed( Shape::HalfArc, 4.6, 0.0 ) },
         { FindingCode::NoSource, rimmed( Shape::Cross2, 3.0, 0.0 ) },
         { FindingCode::NoTerrain, letter( QStringLiteral( "?" ) ) },
-        { FindingCode::Summit, aboveItsPlace( rimmed( Shape::ArrowHead, 3.6, -90.0 ) ) },
-        { FindingCode::SummitUnknown, letter( QStringLiteral( "^" ) ) },
+        { FindingCode::Summit, movedOff( rimmed( Shape::ArrowHead, 3.6, -90.0 ), 2.2, 0.0 ) },
+        { FindingCode::SummitUnknown, movedOff( letter( QStringLiteral( "^" ) ), 5.0, 0.0 ) },
         { FindingCode::SystemsTouch, { shapeLayer( Shape::Diamond, 4.0, WHITE, DARK, 0.5 ) } },
         { FindingCode::Duplicate, letter( QStringLiteral( "2" ) ) },
         { FindingCode::NoLength, letter( QStringLiteral( "0" ) ) },
