@@ -3,6 +3,8 @@
 #include "processing/provider.h"
 
 #include "core/version.h"
+#include "processing/pressuresurfacealgorithm.h"
+#include "processing/staticpressurealgorithm.h"
 
 #include <qgsprocessingalgorithm.h>
 
@@ -17,7 +19,7 @@ namespace stillhead
     //! Every algorithm of the provider, in the order in which the toolbox shows them.
     QList<QgsProcessingAlgorithm *> algorithmList()
     {
-      return {};
+      return { new StaticPressureAlgorithm(), new PressureSurfaceAlgorithm() };
     }
 
   } // namespace

@@ -7,6 +7,7 @@
 
 #include <qgis.h>
 #include <qgscolorrampshader.h>
+#include <qgscoordinatereferencesystem.h>
 #include <qgsfeaturerequest.h>
 #include <qgsfield.h>
 #include <qgslinesymbollayer.h>
@@ -319,6 +320,13 @@ namespace stillhead::compat
 #else
   using MarkerShape = QgsSimpleMarkerSymbolLayerBase::Shape;
   using MarkerLinePlacement = QgsTemplatedLineSymbolLayerBase::Placement;
+#endif
+
+  //! The form of WKT that loses nothing of a CRS.
+#if _QGIS_VERSION_INT >= 33600
+  constexpr Qgis::CrsWktVariant FULL_WKT = Qgis::CrsWktVariant::Preferred;
+#else
+  constexpr QgsCoordinateReferenceSystem::WktVariant FULL_WKT = QgsCoordinateReferenceSystem::WKT_PREFERRED;
 #endif
 
   //! Where markers or hashes stand along a line.

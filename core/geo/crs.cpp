@@ -110,6 +110,16 @@ namespace stillhead
     return crs;
   }
 
+  std::string horizontalDefinition( const std::string &definition )
+  {
+    if ( !verticalUnit( definition ) )
+      return definition;
+    const ProjContext context = makeProjContext();
+    const ProjObject crs = horizontalCrs( context.get(), definition );
+    const char *wkt = crs ? proj_as_wkt( context.get(), crs.get(), PJ_WKT2_2019, nullptr ) : nullptr;
+    return wkt ? wkt : definition;
+  }
+
   bool isPlaceholderCrs( const std::string &definition )
   {
     if ( isBlank( definition ) )

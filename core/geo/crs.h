@@ -32,6 +32,9 @@ namespace stillhead
   //! The unit of heights where \a definition has a vertical part (compound, or a third axis); else nothing.
   std::optional<VerticalUnit> verticalUnit( const std::string &definition );
 
+  //! The definition without its vertical part; \a definition itself where it has none or cannot be read.
+  std::string horizontalDefinition( const std::string &definition );
+
   /**
    * The horizontal CRS in \a definition: the first part of a compound, a third axis dropped.
    * Null where the definition cannot be read.

@@ -31,6 +31,22 @@ namespace stillhead
         && drawing.vertices[line.first] == drawing.vertices[lastLeg + 1];
     }
 
+    //! For every line the first one with the same vertices: lines drawn twice meet all along, which is no crossing.
+    std::vector<int> shapesOf( const CanonicalDrawing &drawing )
+    {
+      std::vector<int> shapes( drawing.lines.size() );
+      for ( std::size_t i = 0; i < shapes.size(); ++i )
+      {
+        shapes[i] = static_cast<int>( i );
+        if ( i == 0 || drawing.lines[i].count != drawing.lines[i - 1].count )
+          continue;
+        const PlanPoint *const own = &drawing.vertices[drawing.lines[i].first];
+        if ( std::equal( own, own + drawing.lines[i].count, &drawing.vertices[drawing.lines[i - 1].first] ) )
+          shapes[i] = shapes[i - 1];
+      }
+      return shapes;
+    }
+
     double alongAt( const CanonicalDrawing &drawing, const Leg &leg, double t )
     {
       const double from = drawing.alongM[leg.vertex];
@@ -63,6 +79,12 @@ namespace stillhead
       return crossing;
     }
 
+    //! A line's own legs meet where it has a riser or a tiny kink: it does not cross itself there.
+    bool isOwnBend( const Crossing &crossing, double toleranceM )
+    {
+      return crossing.lineA == crossing.lineB && std::abs( crossing.alongB - crossing.alongA ) <= toleranceM;
+    }
+
     bool samePlace( const Crossing &a, const Crossing &b, double toleranceM )
     {
       return a.lineA == b.lineA && a.lineB == b.lineB && std::abs( a.alongA - b.alongA ) <= toleranceM
@@ -76,6 +98,11 @@ namespace stillhead
     std::vector<Crossing> all;
     std::mutex mutex;
     const std::vector<Leg> &legs = index.legs();
+    const std::vector<int> shapes = shapesOf( drawing );
+    const auto drawnTwice = [&]( const Leg &leg, const Leg &other ) {
+      return leg.line != other.line
+        && shapes[static_cast<std::size_t>( leg.line )] == shapes[static_cast<std::size_t>( other.line )];
+    };
     parallelRanges(
       legs.size(), 1024, threads, monitor, 0.06, 0.1, [&]( std::size_t first, std::size_t last, unsigned ) {
         std::vector<Crossing> own;
@@ -88,9 +115,10 @@ namespace stillhead
           index.visitBox( { std::min( a.x, b.x ), std::min( a.y, b.y ) },
             { std::max( a.x, b.x ), std::max( a.y, b.y ) }, [&]( int other ) {
               const std::size_t j = static_cast<std::size_t>( other );
-              if ( j <= i || areNeighbours( drawing, legs[i], legs[j] ) )
+              if ( j <= i || drawnTwice( legs[i], legs[j] ) || areNeighbours( drawing, legs[i], legs[j] ) )
                 return;
-              if ( const auto crossing = crossingOf( drawing, legs[i], legs[j] ) )
+              const auto crossing = crossingOf( drawing, legs[i], legs[j] );
+              if ( crossing && !isOwnBend( *crossing, toleranceM ) )
                 own.push_back( *crossing );
             } );
         }

@@ -21,7 +21,8 @@ namespace stillhead
 
   /**
    * All crossings, sorted by lines and place, one for each place: hits nearer than \a toleranceM along both lines count
-   * once (a crossing at a vertex is met by several legs). Legs that lie on each other do not cross.
+   * once (a crossing at a vertex is met by several legs). Legs that lie on each other do not cross, nor do
+   * lines drawn twice, nor a line itself within \a toleranceM along it.
    */
   std::vector<Crossing> findCrossings(
     const CanonicalDrawing &drawing, const LegIndex &index, double toleranceM, unsigned threads, Monitor &monitor );

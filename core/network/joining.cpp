@@ -19,6 +19,9 @@ namespace stillhead
 
   namespace
   {
+    //! How many tolerances apart places of one node on a line may be and still be one: twice, as the farthest of three ends in a chain.
+    constexpr double SAME_JOINT_TOLERANCES = 2.0;
+
     enum class CrossingMeets
     {
       Nothing,  //!< the lines merely cross
@@ -132,7 +135,8 @@ namespace stillhead
     const LegIndex index( drawing );
     stopIfCancelled( monitor );
 
-    Noding noding( drawing, joinEnds( drawing, scales, options.toleranceM, monitor ) );
+    Noding noding(
+      drawing, joinEnds( drawing, scales, options.toleranceM, monitor ), SAME_JOINT_TOLERANCES * options.toleranceM );
     std::vector<SystemTouch> touches;
     for ( const Meeting &meeting :
       meetInteriors( drawing, index, scales, options.toleranceM, threads, touches, monitor ) )

@@ -79,21 +79,15 @@ namespace stillhead
         std::unordered_map<int, std::vector<int>> mSpansOfLine;
     };
 
-    //! Of the ends of one node that lie at the very same point, the least stands for all.
-    std::vector<int> distinctEnds( const CanonicalDrawing &drawing, const std::vector<int> &nodeOfEnd )
+    //! Ends that are joined to nothing. They lie farther than the tolerance apart, so not many can crowd one place.
+    std::vector<int> freeEnds( const Network &network, const std::vector<int> &nodeOfEnd )
     {
-      std::vector<int> ends( nodeOfEnd.size() );
-      for ( std::size_t i = 0; i < ends.size(); ++i )
-        ends[i] = static_cast<int>( i );
-      const auto node = [&]( int end ) { return nodeOfEnd[static_cast<std::size_t>( end )]; };
-      std::sort( ends.begin(), ends.end(), [&]( int a, int b ) {
-        return std::make_tuple( node( a ), endPoint( drawing, a ), a )
-          < std::make_tuple( node( b ), endPoint( drawing, b ), b );
-      } );
-      ends.erase(
-        std::unique( ends.begin(), ends.end(),
-          [&]( int a, int b ) { return node( a ) == node( b ) && endPoint( drawing, a ) == endPoint( drawing, b ); } ),
-        ends.end() );
+      std::vector<int> ends;
+      for ( std::size_t i = 0; i < nodeOfEnd.size(); ++i )
+      {
+        if ( network.nodes[static_cast<std::size_t>( nodeOfEnd[i] )].degree == 1 )
+          ends.push_back( static_cast<int>( i ) );
+      }
       return ends;
     }
   } // namespace
@@ -105,7 +99,7 @@ namespace stillhead
     const double radiusM = NEAR_MISS_TOLERANCES * toleranceM;
     const double joinedWithinM = 2.0 * radiusM;
     const Adjacency adjacency( network );
-    const std::vector<int> ends = distinctEnds( drawing, nodeOfEnd );
+    const std::vector<int> ends = freeEnds( network, nodeOfEnd );
     std::vector<std::pair<int, Finding>> found;
     std::mutex mutex;
     parallelRanges(

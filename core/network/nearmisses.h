@@ -1,5 +1,5 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Ends that nearly reach a line: within ten times the tolerance, and no pipe leads there nearby already.
+// Free ends that nearly reach a line: within ten times the tolerance, and no pipe leads there nearby already.
 #pragma once
 
 #include "core/network/groundscales.h"
@@ -15,7 +15,7 @@ namespace stillhead
   constexpr double NEAR_MISS_TOLERANCES = 10.0;
 
   /**
-   * One finding for each such end (ends at the same place of one node count once): the nearest line, the place on it and
+   * One finding for each free end (joined to nothing) that lies so near a line: the nearest such line, the place on it and
    * the gap. A line to which pipe leads from the end within twice that radius is not missed.
    * \param nodeOfEnd node of every end (2 × line for the first vertex, 2 × line + 1 for the last)
    */

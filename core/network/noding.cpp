@@ -32,8 +32,9 @@ namespace stillhead
     };
   } // namespace
 
-  Noding::Noding( const CanonicalDrawing &drawing, DisjointSets ends )
+  Noding::Noding( const CanonicalDrawing &drawing, DisjointSets ends, double sameJointM )
     : mDrawing( drawing )
+    , mSameJointM( sameJointM )
     , mEnds( static_cast<int>( drawing.lines.size() * 2 ) )
     , mSets( std::move( ends ) )
   {
@@ -106,13 +107,18 @@ namespace stillhead
         network.spans.push_back( { line, last.alongM, next.alongM, from, to } );
         last = next;
       };
-      const double lengthM = endOf( line, true ).alongM;
+      const LineCut end = endOf( line, true );
+      const auto apart = [&]( const LineCut &a, const LineCut &b ) {
+        const bool sameNode =
+          nodeOfElement[static_cast<std::size_t>( a.element )] == nodeOfElement[static_cast<std::size_t>( b.element )];
+        return b.alongM - a.alongM >= LEAST_SPAN_M && !( sameNode && b.alongM - a.alongM <= mSameJointM );
+      };
       for ( ; cut != mCuts.end() && cut->line == line; ++cut )
       {
-        if ( cut->alongM - last.alongM >= LEAST_SPAN_M && lengthM - cut->alongM >= LEAST_SPAN_M )
+        if ( apart( last, *cut ) && apart( *cut, end ) )
           add( *cut );
       }
-      add( endOf( line, true ) );
+      add( end );
     }
 
     choosePlaces( network, nodeOfElement );

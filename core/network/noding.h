@@ -29,8 +29,12 @@ namespace stillhead
   class Noding
   {
     public:
-      //! \param ends sets of ends that meet
-      Noding( const CanonicalDrawing &drawing, DisjointSets ends );
+      /**
+       * \param ends sets of ends that meet
+       * \param sameJointM places of one node on a line no farther apart than this cut it once: ends that meet near a line
+       * make one joint on it, not one each with a tiny loop between
+       */
+      Noding( const CanonicalDrawing &drawing, DisjointSets ends, double sameJointM );
 
       //! Cuts \a line at \a alongM; returns the new element.
       int cut( int line, double alongM );
@@ -62,6 +66,7 @@ namespace stillhead
       void choosePlaces( Network &network, const std::vector<int> &nodeOfElement ) const;
 
       const CanonicalDrawing &mDrawing;
+      double mSameJointM;
       int mEnds;
       DisjointSets mSets;
       std::vector<LineCut> mCuts;

@@ -19,9 +19,9 @@ give_up()
 fetch()
 {
   local mirror keyring=/usr/share/keyrings/debian-archive-keyring.gpg apt="$work/apt" version deb
-  mirror="$( { sed -n 's/^URIs:[[:space:]]*//p' /etc/apt/sources.list.d/debian.sources 2>/dev/null
-    sed -n 's/^deb[[:space:]]\(\[[^]]*\][[:space:]]*\)\{0,1\}\([^[:space:]]*\).*/\2/p' /etc/apt/sources.list 2>/dev/null
-    } | grep -v security | head -n 1 | cut -d ' ' -f 1 )"
+  mirror="$( cat /etc/apt/sources.list.d/debian.sources /etc/apt/sources.list 2>/dev/null \
+    | awk '/^URIs:/ { print $2 } /^deb / { for ( i = 2; i <= NF; ++i ) if ( $i ~ /:\/\// ) { print $i; break } }' \
+    | grep -v security | head -n 1 || true )"
   [ -n "$mirror" ] || give_up "no Debian mirror is configured in /etc/apt"
   [ -r "$keyring" ] || give_up "the package debian-archive-keyring is not installed"
   rm -rf "$work"

@@ -5,5 +5,5 @@ set -euo pipefail
 cd "$( dirname "${BASH_SOURCE[0]}" )/../.."
 . tests/ci/packages.sh
 ensure_packages $stillheadCheckPackages
-git ls-files -z '*.cpp' '*.h' | xargs -0 clang-format --dry-run -Werror
-git ls-files -z '*.sh' .ci/run | xargs -0 -n 1 bash -n
+git -c safe.directory="$PWD" ls-files -z '*.cpp' '*.h' | xargs -0 clang-format --dry-run -Werror
+git -c safe.directory="$PWD" ls-files -z '*.sh' .ci/run | xargs -0 -n 1 bash -n

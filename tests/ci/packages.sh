@@ -5,18 +5,15 @@
 stillheadBuildPackages="g++ cmake ninja-build libqgis-dev libgdal-dev libproj-dev libboost-dev libeigen3-dev
   qtbase5-dev qttools5-dev libqt5svg5-dev"
 stillheadRunPackages="qgis qgis-providers python3-qgis gdal-bin proj-bin proj-data fonts-dejavu-core"
-stillheadTestPackages="xvfb xauth dpkg-dev"
-stillheadCheckPackages="clang-format"
+stillheadTestPackages="xvfb xauth dpkg-dev file"
+stillheadCheckPackages="clang-format git"
 
 # ensure_packages name... : installs those of the named packages that are not installed.
 ensure_packages()
 {
   local missing=() package asRoot=()
   for package in "$@"; do
-    case "$(dpkg-query -W -f='${db:Status-Status}' "$package" 2>/dev/null)" in
-      *installed) ;;
-      *) missing+=( "$package" ) ;;
-    esac
+    dpkg-query -W -f='${db:Status-Status}\n' "$package" 2>/dev/null | grep -qx installed || missing+=( "$package" )
   done
   if [ ${#missing[@]} -eq 0 ]; then
     return 0
@@ -28,8 +25,8 @@ ensure_packages()
     fi
     asRoot=( sudo )
   fi
-  echo "Installing: ${missing[*]}"
+  echo "Installing (some minutes on a fresh machine): ${missing[*]}"
   "${asRoot[@]}" apt-get -o DPkg::Lock::Timeout=600 -qq update
   "${asRoot[@]}" env DEBIAN_FRONTEND=noninteractive \
-    apt-get -o DPkg::Lock::Timeout=600 -o Dpkg::Use-Pty=0 -qq install -y --no-install-recommends "${missing[@]}"
+    apt-get -o DPkg::Lock::Timeout=600 -o Dpkg::Use-Pty=0 -qq install -y --no-install-recommends "${missing[@]}" > /dev/null
 }

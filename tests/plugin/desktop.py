@@ -33,16 +33,18 @@ def screenshot(name):
     QApplication.primaryScreen().grabWindow(0).save(os.path.join(OUT, name))
 
 
-def in_plugin_manager(act):
-    """Opens the plugin manager, which blocks, and lets act() work in it as soon as it shows."""
+def in_dialog(open_dialog, is_wanted, act):
+    """Calls open_dialog(), which blocks while its dialog shows, and lets act(dialog) work in it meanwhile."""
     failures = []
+    seen = []
     timer = QTimer()
 
     def look():
         dialog = QApplication.activeModalWidget()
-        if not dialog or dialog.objectName() != "QgsPluginManagerBase":
+        if not dialog or not is_wanted(dialog):
             return
         timer.stop()
+        seen.append(dialog)
         try:
             act(dialog)
         except AssertionError as error:
@@ -51,9 +53,11 @@ def in_plugin_manager(act):
 
     timer.timeout.connect(look)
     timer.start(100)
-    iface.pluginManagerInterface().showPluginManager()
+    open_dialog()
+    timer.stop()
     if failures:
         raise failures[0]
+    check(seen, "the dialog was shown")
 
 
 def set_native_plugin(state):
@@ -66,7 +70,11 @@ def set_native_plugin(state):
         check(len(ours) == 1, "the plugin manager lists the native plugin once")
         model.setData(ours[0], state, Qt.CheckStateRole)
 
-    in_plugin_manager(tick)
+    in_dialog(
+        iface.pluginManagerInterface().showPluginManager,
+        lambda dialog: dialog.objectName() == "QgsPluginManagerBase",
+        tick,
+    )
 
 
 def check_both_enabled():
@@ -92,6 +100,23 @@ def check_menu():
     screenshot("menu.png")
     menus[0].close()
     iface.pluginMenu().close()
+
+
+def check_menu_opens_algorithms():
+    for action in stillhead_menus()[0].actions():
+        title = action.text().rstrip("…")
+        name = action.objectName().split(":")[1]
+        in_dialog(action.trigger, lambda dialog: title in dialog.windowTitle(), lambda _: screenshot(name + ".png"))
+
+
+def check_without_processing():
+    """Where the Processing plugin is off, the menu says so instead of failing."""
+    qgis.utils.active_plugins.remove("processing")
+    stillhead_menus()[0].actions()[0].trigger()
+    qgis.utils.active_plugins.append("processing")
+    message = iface.messageBar().currentItem()
+    check(message and "Processing plugin is not running" in message.text(), "a message says that Processing is off")
+    iface.messageBar().clearWidgets()
 
 
 def check_headless_first():
@@ -125,6 +150,8 @@ def main():
     try:
         check_both_enabled()
         check_menu()
+        check_menu_opens_algorithms()
+        check_without_processing()
         check_headless_first()
         check_native_first()
         screenshot("desktop.png")

@@ -1,0 +1,125 @@
+// SPDX-License-Identifier: GPL-2.0-or-later
+// One table of names per output. A field stands in its unit everywhere, so the unit is part of the name.
+#include "processing/styles/fieldaliases.h"
+
+#include "processing/parameternames.h"
+#include "processing/text/text.h"
+
+#include <qgsvectorlayer.h>
+
+#include <QMap>
+
+namespace stillhead
+{
+
+  namespace
+  {
+
+    //! %1 stands for the unit of pressure, %2 for the unit of length.
+    using Aliases = QMap<QString, const char *>;
+
+    const Aliases &aliasesOf( ResultLayer what )
+    {
+      static const Aliases spans = {
+        { field::SPAN, QT_TRANSLATE_NOOP( "Stillhead", "Span" ) },
+        { field::ROLE, QT_TRANSLATE_NOOP( "Stillhead", "Role" ) },
+        { field::DRAWN_FID, QT_TRANSLATE_NOOP( "Stillhead", "Drawn feature" ) },
+        { field::LENGTH, QT_TRANSLATE_NOOP( "Stillhead", "Length, %2" ) },
+        { field::Z_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Lowest pipe elevation, %2" ) },
+        { field::Z_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Highest pipe elevation, %2" ) },
+        { field::P_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Lowest pressure at rest, low case, %1" ) },
+        { field::P_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Highest pressure at rest, high case, %1" ) },
+        { field::BAND, QT_TRANSLATE_NOOP( "Stillhead", "Band" ) },
+        { field::BAND_TEXT, QT_TRANSLATE_NOOP( "Stillhead", "Pressure band" ) },
+        { field::STATE, QT_TRANSLATE_NOOP( "Stillhead", "State" ) },
+        { field::OVER, QT_TRANSLATE_NOOP( "Stillhead", "Over limit in the high case" ) },
+        { field::SHORT, QT_TRANSLATE_NOOP( "Stillhead", "Short in the low case" ) },
+        { field::PRESSURE_ZONE, QT_TRANSLATE_NOOP( "Stillhead", "Pressure zone" ) },
+        { field::DOUBT, QT_TRANSLATE_NOOP( "Stillhead", "Doubt, ± %1" ) },
+        { field::CLOSE_CALL, QT_TRANSLATE_NOOP( "Stillhead", "Too close to call" ) },
+      };
+      static const Aliases nodes = {
+        { field::NODE, QT_TRANSLATE_NOOP( "Stillhead", "Node" ) },
+        { field::KIND, QT_TRANSLATE_NOOP( "Stillhead", "Kind" ) },
+        { field::DEGREE, QT_TRANSLATE_NOOP( "Stillhead", "Pipes that meet" ) },
+        { field::Z, QT_TRANSLATE_NOOP( "Stillhead", "Pipe elevation, %2" ) },
+        { field::P_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Pressure at rest, low case, %1" ) },
+        { field::P_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Pressure at rest, high case, %1" ) },
+        { field::STATE, QT_TRANSLATE_NOOP( "Stillhead", "State" ) },
+        { field::PRESSURE_ZONE, QT_TRANSLATE_NOOP( "Stillhead", "Pressure zone" ) },
+      };
+      static const Aliases stretches = {
+        { field::STRETCH, QT_TRANSLATE_NOOP( "Stillhead", "Stretch" ) },
+        { field::WHAT, QT_TRANSLATE_NOOP( "Stillhead", "Over or short" ) },
+        { field::P_WORST, QT_TRANSLATE_NOOP( "Stillhead", "Worst pressure at rest, %1" ) },
+        { field::BEYOND, QT_TRANSLATE_NOOP( "Stillhead", "Past the limit by, %1" ) },
+        { field::Z_WORST, QT_TRANSLATE_NOOP( "Stillhead", "Pipe elevation there, %2" ) },
+        { field::LENGTH, QT_TRANSLATE_NOOP( "Stillhead", "Length of pipe, %2" ) },
+        { field::MAINLINES, QT_TRANSLATE_NOOP( "Stillhead", "Mainlines" ) },
+        { field::LATERALS, QT_TRANSLATE_NOOP( "Stillhead", "Laterals" ) },
+        { field::CLOSE_CALL, QT_TRANSLATE_NOOP( "Stillhead", "Too close to call" ) },
+        { field::LABEL, QT_TRANSLATE_NOOP( "Stillhead", "Label" ) },
+      };
+      static const Aliases extremes = {
+        { field::WHAT, QT_TRANSLATE_NOOP( "Stillhead", "Highest or lowest" ) },
+        { field::P, QT_TRANSLATE_NOOP( "Stillhead", "Pressure at rest, %1" ) },
+        { field::Z, QT_TRANSLATE_NOOP( "Stillhead", "Pipe elevation, %2" ) },
+        { field::PRESSURE_ZONE, QT_TRANSLATE_NOOP( "Stillhead", "Pressure zone" ) },
+        { field::STRETCH, QT_TRANSLATE_NOOP( "Stillhead", "Stretch" ) },
+        { field::DRAWN_LAYER, QT_TRANSLATE_NOOP( "Stillhead", "Drawn layer" ) },
+        { field::DRAWN_FID, QT_TRANSLATE_NOOP( "Stillhead", "Drawn feature" ) },
+        { field::DISTANCE_ALONG, QT_TRANSLATE_NOOP( "Stillhead", "Distance from the start of the drawn feature, %2" ) },
+        { field::LABEL, QT_TRANSLATE_NOOP( "Stillhead", "Label" ) },
+      };
+      static const Aliases findings = {
+        { field::FINDING, QT_TRANSLATE_NOOP( "Stillhead", "Finding" ) },
+        { field::MESSAGE, QT_TRANSLATE_NOOP( "Stillhead", "Message" ) },
+        { field::DRAWN_LAYER, QT_TRANSLATE_NOOP( "Stillhead", "Drawn layer" ) },
+        { field::DRAWN_FID, QT_TRANSLATE_NOOP( "Stillhead", "Drawn feature" ) },
+        { field::GAP, QT_TRANSLATE_NOOP( "Stillhead", "Gap, %2" ) },
+      };
+      static const Aliases bandAreas = {
+        { field::BAND, QT_TRANSLATE_NOOP( "Stillhead", "Band" ) },
+        { field::BAND_TEXT, QT_TRANSLATE_NOOP( "Stillhead", "Pressure band" ) },
+        { field::P_FROM, QT_TRANSLATE_NOOP( "Stillhead", "Pressure from, %1" ) },
+        { field::P_TO, QT_TRANSLATE_NOOP( "Stillhead", "Pressure to, %1" ) },
+        { field::AREA, QT_TRANSLATE_NOOP( "Stillhead", "Area, square %2" ) },
+      };
+      static const Aliases none;
+      switch ( what )
+      {
+      case ResultLayer::Spans:
+        return spans;
+      case ResultLayer::Nodes:
+        return nodes;
+      case ResultLayer::Stretches:
+        return stretches;
+      case ResultLayer::Extremes:
+        return extremes;
+      case ResultLayer::Findings:
+        return findings;
+      case ResultLayer::BandAreas:
+        return bandAreas;
+      case ResultLayer::Surface:
+        break;
+      }
+      return none;
+    }
+
+  } // namespace
+
+  void setFieldAliases( QgsVectorLayer &layer, ResultLayer what, const ResultStyle &style )
+  {
+    const Aliases &aliases = aliasesOf( what );
+    for ( auto alias = aliases.constBegin(); alias != aliases.constEnd(); ++alias )
+    {
+      const int index = layer.fields().lookupField( alias.key() );
+      if ( index < 0 )
+        continue;
+      QString text = Text::tr( alias.value() );
+      text.replace( QLatin1String( "%1" ), style.pressureUnit ).replace( QLatin1String( "%2" ), style.lengthUnit );
+      layer.setFieldAlias( index, text );
+    }
+  }
+
+} // namespace stillhead

@@ -1,0 +1,60 @@
+// SPDX-License-Identifier: GPL-2.0-or-later
+// Where an output is to go, known before anything is created there: what format it is, whether something is there that a
+// run would replace, and whether that is one of the run's own inputs.
+#pragma once
+
+#include "processing/reading/parametervalues.h"
+
+class QgsMapLayer;
+
+namespace stillhead
+{
+
+  class Destination
+  {
+    public:
+      //! The destination that \a values give for the output \a name.
+      Destination( const ParameterValues &values, const QString &name );
+
+      //! False where the output was not asked for.
+      bool isAsked() const { return mIsAsked; }
+
+      //! The file, blank where the output goes to memory or a database.
+      const QString &path() const { return mPath; }
+
+      bool isGeoPackage() const;
+
+      //! True where the format can hold Z and M that are no numbers.
+      bool holdsGaps() const;
+
+      //! True where the output would take the place of something, or may.
+      bool replaces() const { return mReplaces; }
+
+      /**
+       * \throws QgsProcessingException where writing would destroy \a layer, an input
+       */
+      void refuseInput( const QgsMapLayer *layer, const QString &inputName ) const;
+
+      //! \throws QgsProcessingException where the folder cannot be written to
+      void refuseUnwritable() const;
+
+      //! \throws QgsProcessingException where this output and \a other would be written over each other
+      void refuseSamePlace( const Destination &other ) const;
+
+      //! False where a GeoPackage does not hold \a rows after they were written: errors on closing show nowhere else.
+      bool holdsRows( std::size_t rows ) const;
+
+      //! Takes away what a failed run has left where nothing was before.
+      void remove() const;
+
+    private:
+      QString mName;
+      QString mPath;
+      QString mTable; //!< in the file, blank where the output is the file itself
+      bool mIsAsked = false;
+      bool mIsMemory = false;
+      bool mFileWasThere = false;
+      bool mReplaces = false;
+  };
+
+} // namespace stillhead

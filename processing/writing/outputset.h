@@ -1,0 +1,60 @@
+// SPDX-License-Identifier: GPL-2.0-or-later
+// The outputs of one run: asked about before the work, created after it, written one by one. A run that fails or is cancelled
+// while writing takes away what it has made; where something earlier was replaced already, it is finished instead.
+#pragma once
+
+#include "core/feedback/monitor.h"
+#include "processing/writing/destination.h"
+#include "processing/writing/resulttable.h"
+
+#include <qgsprocessingfeedback.h>
+
+#include <map>
+#include <vector>
+
+namespace stillhead
+{
+
+  class OutputSet
+  {
+    public:
+      //! \param names the outputs that the algorithm has, rasters included
+      OutputSet( const ParameterValues &values, const QStringList &names );
+      ~OutputSet();
+      OutputSet( const OutputSet & ) = delete;
+      OutputSet &operator=( const OutputSet & ) = delete;
+
+      bool isAsked( const QString &name ) const { return mDestinations.at( name ).isAsked(); }
+      bool isGeoPackage( const QString &name ) const { return mDestinations.at( name ).isGeoPackage(); }
+
+      /**
+       * Checks that no destination is an input and that all can be written.
+       * \throws QgsProcessingException
+       */
+      void check( const std::map<QString, const QgsMapLayer *> &inputs ) const;
+
+      //! \throws QgsProcessingException where a table has gaps that its format cannot hold. Nothing is created yet.
+      void checkFormats( const std::vector<ResultTable> &tables ) const;
+
+      /**
+       * Writes \a table.
+       * \returns the id of the layer, as results and models know it
+       * \throws QgsProcessingException, Cancelled
+       */
+      QString write( const ResultTable &table, const QgsCoordinateReferenceSystem &crs, QgsProcessingFeedback &feedback,
+        double fromPercent, double toPercent );
+
+      //! Says that the output \a name, which somebody else writes, is there from now on.
+      void noteWritten( const QString &name ) { mWritten.push_back( name ); }
+
+      //! All is written and stays.
+      void commit() { mWritten.clear(); }
+
+    private:
+      const ParameterValues &mValues;
+      std::map<QString, Destination> mDestinations;
+      bool mReplaces = false;
+      std::vector<QString> mWritten;
+  };
+
+} // namespace stillhead

@@ -1,0 +1,100 @@
+// SPDX-License-Identifier: GPL-2.0-or-later
+// What cannot be stored is a warning: the figures are written already.
+#include "processing/writing/resultfinish.h"
+
+#include "processing/styles/resultstyler.h"
+#include "processing/styles/storedstyle.h"
+
+#include <qgsexception.h>
+#include <qgsmaplayer.h>
+#include <qgsprocessingutils.h>
+#include <qgsproviderregistry.h>
+#include <qgsrasterlayer.h>
+
+#include <QDir>
+#include <QFileInfo>
+
+namespace stillhead
+{
+
+  namespace
+  {
+
+    class Finisher : public ResultStyler
+    {
+      public:
+        explicit Finisher( const WrittenLayer &written, const ResultStyle &style )
+          : ResultStyler( written.what, style )
+          , mMetadata( written.metadata )
+        {}
+
+        void postProcessLayer( QgsMapLayer *layer, QgsProcessingContext &context, QgsProcessingFeedback *feedback ) override
+        {
+          ResultStyler::postProcessLayer( layer, context, feedback );
+          if ( layer )
+            layer->setMetadata( mMetadata );
+        }
+
+      private:
+        QgsLayerMetadata mMetadata;
+    };
+
+    //! An error text, blank where all is well.
+    QString storeMetadata( const WrittenLayer &written )
+    {
+      QString error;
+      try
+      {
+        QgsProviderRegistry::instance()->saveLayerMetadata( QStringLiteral( "ogr" ), written.id, written.metadata, error );
+      }
+      catch ( const QgsException &e )
+      {
+        error = e.what();
+      }
+      return error;
+    }
+
+    //! A raster keeps style and metadata in files beside it, which the application reads by itself.
+    void storeBeside( const WrittenLayer &written, const ResultStyle &style )
+    {
+      QgsRasterLayer layer( written.id );
+      if ( !layer.isValid() )
+        return;
+      styleResult( layer, written.what, style );
+      layer.setMetadata( written.metadata );
+      const QFileInfo file( written.id );
+      const QString base = file.dir().filePath( file.completeBaseName() );
+      bool stored = false;
+      layer.saveNamedStyle( base + QStringLiteral( ".qml" ), stored );
+      layer.saveNamedMetadata( base + QStringLiteral( ".qmd" ), stored );
+    }
+
+  } // namespace
+
+  void finishOnLoading( const WrittenLayer &layer, const ResultStyle &style, QgsProcessingContext &context )
+  {
+    if ( context.willLoadLayerOnCompletion( layer.id ) )
+      context.layerToLoadOnCompletionDetails( layer.id ).setPostProcessor( new Finisher( layer, style ) );
+  }
+
+  void finishNow( const std::vector<WrittenLayer> &layers, const ResultStyle &style, QgsProcessingContext &context,
+    QgsProcessingFeedback &feedback )
+  {
+    for ( const WrittenLayer &written : layers )
+    {
+      if ( written.inGeoPackage )
+      {
+        for ( const QString &error : { storeDefaultStyle( written.id, written.what, style ), storeMetadata( written ) } )
+        {
+          if ( !error.isEmpty() )
+            feedback.pushWarning( error );
+        }
+      }
+      if ( written.what == ResultLayer::Surface )
+        storeBeside( written, style );
+      if ( QgsMapLayer *layer = QgsProcessingUtils::mapLayerFromString( written.id, context, false ) )
+        Finisher( written, style ).postProcessLayer( layer, context, &feedback );
+    }
+  }
+
+} // namespace stillhead
