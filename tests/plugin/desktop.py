@@ -105,9 +105,11 @@ def check_menu():
 
 def check_menu_opens_algorithms():
     for action in stillhead_menus()[0].actions():
-        title = action.text().rstrip("…")
+        title = action.text().rstrip("…").lower()
         name = action.objectName().split(":")[1]
-        in_dialog(action.trigger, lambda dialog: dialog.windowTitle().lower() == title.lower(), lambda _: screenshot(name + ".png"))
+        in_dialog(
+            action.trigger, lambda dialog: dialog.windowTitle().lower() == title, lambda _: screenshot(name + ".png")
+        )
 
 
 def check_without_processing():
