@@ -79,11 +79,12 @@ namespace stillhead
     surface.id = QgsProcessingParameters::parameterAsOutputLayer(
       mValues.definition( output::SURFACE ), mValues.values(), mValues.context() );
     surface.what = ResultLayer::Surface;
-    surface.metadata = resultMetadata( facts(), mValues.definition( output::SURFACE )->description() );
+    surface.metadata = resultMetadata( facts(), mValues.definition( output::SURFACE )->description(), layerNameOf( surface.id ) );
     writeSurfaceFile( surface.id, mInput, mTerrain, mUnits, monitor );
     finishOnLoading( surface, mStyle, mValues.context() );
     mWritten.push_back( surface );
     outputs.commit();
+    mFeedback.setProgress( 100.0 );
     results.insert( output::SURFACE, surface.id );
 
     const RestingWater high = restingWater( mInput.levels.highM, mInput.coverM, mUnits );

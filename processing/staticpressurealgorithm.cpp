@@ -131,11 +131,13 @@ namespace stillhead
     layer.source.reset( parameterAsSource( parameters, name, context ) );
     layer.keys = keys;
     if ( !layer.source )
+    {
+      const QString given = parameters.value( name ).toString();
       throw QgsProcessingException(
-        parameters.value( name ).isValid()
-          ? Text::tr( "%1 (“%2”) cannot be opened as a layer of lines; check the file and its path." )
-              .arg( name, parameters.value( name ).toString() )
-          : Text::tr( "%1 is not given; choose a layer of lines." ).arg( name ) );
+        given.isEmpty() ? Text::tr( "%1 is not given; choose a layer of lines." ).arg( name )
+                        : Text::tr( "%1 (“%2”) cannot be opened as a layer of lines; check the file and its path." )
+                            .arg( name, given ) );
+    }
     layer.expressions = createExpressionContext( parameters, context, layer.source.get() );
     return layer;
   }

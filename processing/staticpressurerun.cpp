@@ -184,6 +184,7 @@ namespace stillhead
     writeSurface( outputs, runFacts, results );
     writeTables( outputs, tables, runFacts, results );
     outputs.commit();
+    mFeedback.setProgress( 100.0 );
     results.insert( output::SUMMARY, summary );
     addNumbers( results );
     mFeedback.pushInfo( summary );
@@ -204,7 +205,7 @@ namespace stillhead
     written.id = QgsProcessingParameters::parameterAsOutputLayer(
       mValues.definition( output::SURFACE ), mValues.values(), mValues.context() );
     written.what = ResultLayer::Surface;
-    written.metadata = resultMetadata( facts, mValues.definition( output::SURFACE )->description() );
+    written.metadata = resultMetadata( facts, mValues.definition( output::SURFACE )->description(), layerNameOf( written.id ) );
     writeSurfaceFile( written.id, input, mTerrain, mUnits, monitor );
     outputs.noteWritten( output::SURFACE );
     finishOnLoading( written, mStyle, mValues.context() );
@@ -226,7 +227,7 @@ namespace stillhead
       WrittenLayer written;
       written.id = outputs.write( table, mDrawn.crs, mFeedback, from, to );
       written.what = table.what;
-      written.metadata = resultMetadata( facts, mValues.definition( table.output )->description() );
+      written.metadata = resultMetadata( facts, mValues.definition( table.output )->description(), layerNameOf( written.id ) );
       written.inGeoPackage = outputs.isGeoPackage( table.output );
       finishOnLoading( written, mStyle, mValues.context() );
       results.insert( table.output, written.id );

@@ -1,6 +1,6 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
 // Whoever finishes the unit that is next in order takes it, and those behind it that are ready; no thread is kept for
-// that alone. A unit is begun only when its slot (unit modulo slots) is free again.
+// that alone. A unit is begun only when its slot (unit modulo places) is free again.
 #include "core/feedback/orderedpipeline.h"
 
 #include <algorithm>
@@ -24,7 +24,7 @@ namespace stillhead
           , mMonitor( monitor )
           , mFrom( from )
           , mTo( to )
-          , mReady( std::max<std::size_t>( 1, pipeline.slots ), false )
+          , mReady( std::max<std::size_t>( 1, pipeline.places ), false )
         {
         }
 
@@ -121,7 +121,7 @@ namespace stillhead
     {
       Run run( pipeline, monitor, from, to );
       const std::size_t used = std::min<std::size_t>(
-        { pipeline.units, std::max( 1u, pipeline.threads ), std::max<std::size_t>( 1, pipeline.slots ) } );
+        { pipeline.units, std::max( 1u, pipeline.threads ), std::max<std::size_t>( 1, pipeline.places ) } );
       std::vector<std::thread> helpers;
       for ( std::size_t i = 1; i < used; ++i )
         helpers.emplace_back( [&run] { run.work( false ); } );

@@ -11,12 +11,12 @@
 namespace stillhead
 {
 
-  //! What a pipeline does with its units; \a slot (below `slots`) names the place that holds the result.
+  //! What a pipeline does with its units; \a slot (below `places`) names the place that holds the result.
   struct OrderedPipeline
   {
       std::size_t units = 0;
       unsigned threads = 1;
-      std::size_t slots = 2; //!< Results that may be held at once; at least 1
+      std::size_t places = 2; //!< Results that may be held at once; at least 1
       //! Makes the result of \a unit in \a slot; several at once, each in its own slot.
       std::function<void( std::size_t unit, std::size_t slot )> make;
       //! Takes the result of \a unit out of \a slot; units in rising order, one at a time, in any thread.

@@ -223,8 +223,8 @@ namespace stillhead
     OrderedPipeline pipeline;
     pipeline.units = layout.units;
     pipeline.threads = threadCount( request.threads );
-    pipeline.slots = std::clamp<std::size_t>( request.memoryBytes / unitBytes, 1, pipeline.threads + 2 );
-    std::vector<std::unique_ptr<Unit>> slots( pipeline.slots );
+    pipeline.places = std::clamp<std::size_t>( request.memoryBytes / unitBytes, 1, pipeline.threads + 2 );
+    std::vector<std::unique_ptr<Unit>> slots( pipeline.places );
     pipeline.make = [&]( std::size_t unit, std::size_t slot ) {
       if ( !slots[slot] )
         slots[slot] = std::make_unique<Unit>( layout, bands );

@@ -193,7 +193,7 @@ namespace stillhead
           for ( std::size_t i = 0; i < elevationsM.size(); ++i )
           {
             CutPiece point;
-            point.lowestM = point.highestM = elevationsM[i];
+            point.lowestM = point.highestM = point.middleM = elevationsM[i];
             point.known = !std::isnan( elevationsM[i] );
             const int zone = mResult.zoneMap.ofNode[i];
             const Role role = mResult.drawing.lines[static_cast<std::size_t>( mResult.network.nodes[i].on.line )].role;

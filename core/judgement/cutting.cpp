@@ -41,61 +41,101 @@ namespace stillhead
   //! The state of one walk along a span.
   struct Cutter::Walk
   {
+      //! A piece in the making. What is passed within a millimetre of its start is kept apart, for it decides nothing.
+      struct Open
+      {
+          CutPiece piece {};
+          CutPiece start {};
+          bool decided = false;
+      };
+
       std::vector<CutPiece> &pieces;
       const std::vector<double> &cutsM;
       double endM;
-      CutPiece current {};
+      Open current {};
+      Open closed {};           //!< the last piece, before it was closed
       std::size_t interval = 0; //!< number of cut elevations below the pipe
+      std::size_t flatOn = NOT_FLAT;
       double lastCutElevationM = NO_ELEVATION;
+
+      static constexpr std::size_t NOT_FLAT = static_cast<std::size_t>( -1 );
+
+      static void forget( CutPiece &piece ) { piece.lowestM = piece.highestM = NO_ELEVATION; }
+
+      static void include( CutPiece &piece, double alongM, double elevationM )
+      {
+        if ( !( piece.lowestM <= elevationM ) )
+        {
+          piece.lowestM = elevationM;
+          piece.lowestAtM = alongM;
+        }
+        if ( !( piece.highestM >= elevationM ) )
+        {
+          piece.highestM = elevationM;
+          piece.highestAtM = alongM;
+        }
+      }
+
+      static void include( CutPiece &piece, const CutPiece &part )
+      {
+        if ( std::isnan( part.lowestM ) )
+          return;
+        include( piece, part.lowestAtM, part.lowestM );
+        include( piece, part.highestAtM, part.highestM );
+      }
+
+      void include( double alongM, double elevationM ) { include( current.piece, alongM, elevationM ); }
 
       void open( double alongM, bool known )
       {
         current = {};
-        current.fromM = alongM;
-        current.known = known;
-        current.lowestM = current.highestM = NO_ELEVATION;
-        current.lowestAtM = current.highestAtM = alongM;
+        current.piece.fromM = alongM;
+        current.piece.known = known;
+        current.piece.lowestAtM = current.piece.highestAtM = alongM;
+        forget( current.piece );
+        forget( current.start );
+      }
+
+      void decide()
+      {
+        if ( !current.decided )
+          current.piece.middleM = 0.5 * ( current.piece.lowestM + current.piece.highestM );
+        current.decided = true;
       }
 
       void close( double alongM )
       {
-        current.toM = alongM;
-        pieces.push_back( current );
-      }
-
-      void include( double alongM, double elevationM )
-      {
-        if ( !( current.lowestM <= elevationM ) )
-        {
-          current.lowestM = elevationM;
-          current.lowestAtM = alongM;
-        }
-        if ( !( current.highestM >= elevationM ) )
-        {
-          current.highestM = elevationM;
-          current.highestAtM = alongM;
-        }
+        closed = current;
+        decide();
+        include( current.piece, current.start );
+        current.piece.toM = alongM;
+        pieces.push_back( current.piece );
       }
 
       void cutAt( double alongM, double elevationM )
       {
         include( alongM, elevationM );
-        if ( alongM - current.fromM < LEAST_SPAN_M )
+        if ( alongM - current.piece.fromM < LEAST_SPAN_M )
         {
+          include( current.start, current.piece );
           // Out of an interval and back within a millimetre: the first of the two cuts is taken back.
           if ( lastCutElevationM == elevationM && !pieces.empty() && pieces.back().known )
           {
-            const CutPiece passed = current;
-            current = pieces.back();
+            include( closed.start, current.start );
+            current = closed;
             pieces.pop_back();
-            include( passed.lowestAtM, passed.lowestM );
-            include( passed.highestAtM, passed.highestM );
             lastCutElevationM = NO_ELEVATION;
+            return;
           }
+          forget( current.piece );
+          include( alongM, elevationM );
           return;
         }
         if ( endM - alongM < LEAST_SPAN_M )
+        {
+          decide();
           return;
+        }
         close( alongM );
         open( alongM, true );
         include( alongM, elevationM );
@@ -114,11 +154,31 @@ namespace stillhead
         lastCutElevationM = NO_ELEVATION;
         if ( endM - alongM < LEAST_SPAN_M )
           return;
-        if ( alongM - current.fromM >= LEAST_SPAN_M )
+        if ( alongM - current.piece.fromM >= LEAST_SPAN_M )
           close( alongM );
         else
-          alongM = current.fromM;
+          alongM = current.piece.fromM;
         open( alongM, known );
+      }
+
+      //! The cut elevation on which \a piece lies for at least a millimetre, NOT_FLAT if there is none.
+      std::size_t liesOn( const Quadratic &piece, double lengthM ) const
+      {
+        const auto far = []( double differenceM ) { return std::abs( differenceM ) > BEYOND_ROUNDING_M; };
+        if ( far( piece.to - piece.from ) || far( 0.25 * piece.bend ) || lengthM < LEAST_SPAN_M )
+          return NOT_FLAT;
+        const auto first = std::lower_bound( cutsM.begin(), cutsM.end(), piece.from - BEYOND_ROUNDING_M );
+        const bool on = first != cutsM.end() && !far( piece.from - *first ) && !far( piece.to - *first );
+        return on ? static_cast<std::size_t>( first - cutsM.begin() ) : NOT_FLAT;
+      }
+
+      //! Pipe begins (\a cut) or ends (NOT_FLAT) to lie on a cut elevation; it goes on toward \a towardM.
+      void changeFlat( std::size_t cut, double alongM, double towardM )
+      {
+        const std::size_t edge = cut == NOT_FLAT ? flatOn : cut;
+        cutAt( alongM, cutsM[edge] );
+        flatOn = cut;
+        interval = towardM > cutsM[edge] ? edge + 1 : edge;
       }
 
       //! Follows \a piece, monotone from share \a low to \a high.
@@ -169,14 +229,24 @@ namespace stillhead
         const Quadratic quadratic = quadraticOf( profile, i );
         const double fromElevationM = low <= 0.0 ? quadratic.from : quadratic.at( low );
         const double toElevationM = high >= 1.0 ? quadratic.to : quadratic.at( high );
+        const double turn = quadratic.turnsInside() ? quadratic.turn() : low;
+        const std::size_t flatOn = walk.liesOn( quadratic, alongAt( high ) - alongAt( low ) );
         if ( !known )
         {
-          walk.current.known = walk.current.known || !splitUnknown;
+          walk.current.piece.known = walk.current.piece.known || !splitUnknown;
           walk.enter( fromElevationM );
           walk.include( alongAt( low ), fromElevationM );
+          walk.flatOn = flatOn;
         }
-        const double turn = quadratic.turnsInside() ? quadratic.turn() : low;
-        if ( turn > low && turn < high )
+        else if ( flatOn != walk.flatOn )
+        {
+          walk.changeFlat( flatOn, alongAt( low ), turn > low ? quadratic.at( turn ) : toElevationM );
+        }
+        if ( flatOn != Walk::NOT_FLAT )
+        {
+          walk.include( alongAt( high ), toElevationM );
+        }
+        else if ( turn > low && turn < high )
         {
           walk.follow( quadratic, low, turn, quadratic.at( turn ), alongAt );
           walk.follow( quadratic, turn, high, toElevationM, alongAt );

@@ -19,7 +19,10 @@ namespace stillhead
    */
   std::vector<double> cutElevationsM( const Zone &zone, Role role, const Limits &limits, double specificWeightNPerM3 );
 
-  //! Pipe between two cuts: all of it lies between two neighbouring cut elevations, or has no elevation.
+  /**
+   * Pipe between two cuts: all of it lies between two neighbouring cut elevations, or has no elevation. Only where a cut
+   * would lie within a millimetre of another it is not made, and that millimetre counts for the extremes alone.
+   */
   struct CutPiece
   {
       double fromM = 0.0;
@@ -28,6 +31,7 @@ namespace stillhead
       double lowestAtM = 0.0;
       double highestM = 0.0;
       double highestAtM = 0.0;
+      double middleM = 0.0; //!< an elevation between the cut elevations: the one that decides what the piece is
       bool known = false;
   };
 
@@ -37,7 +41,7 @@ namespace stillhead
     public:
       /**
        * Cuts the part of \a profile between \a fromM and \a toM at \a elevationsM (rising). A cut nearer than 1 mm to the end of
-       * a piece is not made. With \a splitUnknown false pipe with and without elevation stays together.
+       * a piece is not made. Pipe that lies on a cut elevation is a piece of its own. With \a splitUnknown false pipe with and without elevation stays together.
        */
       const std::vector<CutPiece> &cut(
         const Profile &profile, double fromM, double toM, const std::vector<double> &elevationsM, bool splitUnknown );

@@ -56,6 +56,7 @@ namespace stillhead
     piece.zone = zoneNumber;
     piece.lowestM = cut.known ? cut.lowestM : NO_ELEVATION;
     piece.highestM = cut.known ? cut.highestM : NO_ELEVATION;
+    piece.middleM = cut.known ? cut.middleM : NO_ELEVATION;
     piece.lowestAtM = cut.lowestAtM;
     piece.highestAtM = cut.highestAtM;
     piece.pressureLowPa = NO_ELEVATION;
@@ -73,15 +74,14 @@ namespace stillhead
     piece.pressureLowPa = specificWeightNPerM3 * ( zone.levels.lowM - cut.highestM );
     piece.pressureHighPa = specificWeightNPerM3 * ( zone.levels.highM - cut.lowestM );
 
-    const double middleM = 0.5 * ( cut.lowestM + cut.highestM );
-    const double highPa = specificWeightNPerM3 * ( zone.levels.highM - middleM );
-    const double lowPa = specificWeightNPerM3 * ( zone.levels.lowM - middleM );
+    const double highPa = specificWeightNPerM3 * ( zone.levels.highM - cut.middleM );
+    const double lowPa = specificWeightNPerM3 * ( zone.levels.lowM - cut.middleM );
     const double most = limits.mostFor( role );
     const double least = limits.leastFor( role );
     piece.band = bandOf( highPa, limits.bandsPa );
     piece.over = exceeds( highPa, most );
     const bool under = fallsShort( lowPa, least );
-    const bool above = middleM - zone.levels.lowM > EQUAL_LEVEL_M;
+    const bool above = cut.middleM - zone.levels.lowM > EQUAL_LEVEL_M;
     piece.isShort = under || above;
     if ( piece.over )
       piece.state = under ? State::OverAndUnder : State::OverLimit;

@@ -10,7 +10,7 @@ namespace stillhead
 
   /**
    * The piece of \a span that \a cut is, judged by pressure alone; whether water reaches it is settled later (settleSummits).
-   * Because all of it lies between two neighbouring limits, any of its elevations decides; the middle one is taken.
+   * Because all of it lies between two neighbouring limits, any of its elevations decides; CutPiece::middleM is taken.
    */
   Piece judgedPiece( const CutPiece &cut, int span, int zoneNumber, const Zone &zone, Role role, const Limits &limits,
     double specificWeightNPerM3 );

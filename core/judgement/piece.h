@@ -31,6 +31,7 @@ namespace stillhead
       double lowestAtM = 0.0;      //!< where, along the line
       double highestM = 0.0;       //!< highest pipe elevation on the piece
       double highestAtM = 0.0;     //!< where, along the line
+      double middleM = 0.0;        //!< the elevation between the limits that decides what the piece is
       double pressureLowPa = 0.0;  //!< lowest pressure of the low case (at the highest pipe)
       double pressureHighPa = 0.0; //!< highest pressure of the high case (at the lowest pipe)
       int zone = -1;               //!< pressure zone

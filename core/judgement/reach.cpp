@@ -134,7 +134,7 @@ namespace stillhead
 
   bool liesAbove( const Piece &piece, double levelM )
   {
-    return 0.5 * ( piece.lowestM + piece.highestM ) - levelM > EQUAL_LEVEL_M;
+    return piece.middleM - levelM > EQUAL_LEVEL_M;
   }
 
   Reach lowCaseReach( const PieceGraph &graph, const std::vector<Zone> &zones )

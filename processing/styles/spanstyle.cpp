@@ -111,8 +111,7 @@ namespace stillhead
     {
       QgsSimpleLineSymbolLayer *pipe = lineLayer( Qt::black, widthMm, Pass::Pipe );
       setExpression( *pipe, compat::Symbol::StrokeColor,
-        QStringLiteral( "CASE WHEN \"state\" = 'above static level' THEN '#ffffff' "
-                        "WHEN \"state\" = 'past a summit' THEN '#000000' ELSE %1 END" )
+        QStringLiteral( "CASE WHEN \"state\" IN ( 'above static level', 'past a summit' ) THEN '#000000' ELSE %1 END" )
           .arg( pipeColorByBand( bandColors( style.bandCount() ) ) ) );
       return rule( lineSymbol( { pipe } ),
         QStringLiteral( "\"role\" = '%1' AND \"state\" NOT IN ( 'no source', 'no terrain' )" ).arg( role ), label );
@@ -146,7 +145,7 @@ namespace stillhead
     {
       QList<QgsSymbolLayer *> layers = casing( Qt::black, STATE_CASING_MM );
       layers << strokesAcross(
-        lineSymbol( { lineLayer( Qt::white, 0.7, Pass::Casing ) } ), STATE_CASING_MM, 2.4, 90.0, Pass::Mark );
+        lineSymbol( { lineLayer( Qt::white, 1.0, Pass::Hatch ) } ), STATE_CASING_MM, 2.4, 0.0, Pass::Hatch );
       return lineSymbol( layers );
     }
 
@@ -184,10 +183,10 @@ namespace stillhead
 
     std::unique_ptr<QgsSymbol> closeCallSymbol( const ResultStyle &style )
     {
-      QgsSimpleLineSymbolLayer *stroke = lineLayer( Qt::black, 0.3, Pass::Hatch );
+      QgsSimpleLineSymbolLayer *stroke = lineLayer( Qt::black, 0.25, Pass::Hatch );
       setExpression( *stroke, compat::Symbol::StrokeColor, pipeColorByBand( bandColors( style.bandCount() ) ) );
       return lineSymbol( { strokesAcross(
-        lineSymbol( { stroke } ), 1.4 * casingWidths( style.bandCount() ).last(), 1.0, 45.0, Pass::Hatch ) } );
+        lineSymbol( { stroke } ), 1.4 * casingWidths( style.bandCount() ).last(), 1.6, 45.0, Pass::Hatch ) } );
     }
 
     QString limitsText( double limit, double lateralLimit, const ResultStyle &style )

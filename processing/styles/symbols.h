@@ -50,7 +50,7 @@ namespace stillhead
   //! The marker along the line, in the pass of marks.
   QgsSymbolLayer *markersAlong( std::unique_ptr<QgsMarkerSymbol> marker, const Spacing &spacing );
 
-  //! Strokes of \a line across the pipe, \a lengthMm long, at \a angle degrees to it.
+  //! Strokes of \a line across the pipe, \a lengthMm long, turned by \a angle degrees from square to it.
   QgsSymbolLayer *strokesAcross(
     std::unique_ptr<QgsLineSymbol> line, double lengthMm, double intervalMm, double angle, Pass pass );
 

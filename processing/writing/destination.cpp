@@ -67,12 +67,14 @@ namespace stillhead
       GDALClose( file );
     }
 
-    //! Two spellings of one file.
+    //! Two spellings of one file, which need not be there yet.
     bool sameFile( const QString &a, const QString &b )
     {
       const QFileInfo first( a );
       const QFileInfo second( b );
-      return first.exists() && second.exists() && first.canonicalFilePath() == second.canonicalFilePath();
+      if ( first.exists() && second.exists() )
+        return first.canonicalFilePath() == second.canonicalFilePath();
+      return QDir::cleanPath( first.absoluteFilePath() ) == QDir::cleanPath( second.absoluteFilePath() );
     }
 
   } // namespace
@@ -127,7 +129,8 @@ namespace stillhead
       return;
     const QVariantMap parts =
       QgsProviderRegistry::instance()->decodeUri( layer->dataProvider()->name(), layer->dataProvider()->dataSourceUri() );
-    if ( !sameFile( mPath, parts.value( QStringLiteral( "path" ) ).toString() ) )
+    const QString inputPath = parts.value( QStringLiteral( "path" ) ).toString();
+    if ( inputPath.isEmpty() || !sameFile( mPath, inputPath ) )
       return;
     const QString inputTable = parts.value( QStringLiteral( "layerName" ) ).toString();
     // A file given as such is replaced as a whole.
@@ -158,7 +161,7 @@ namespace stillhead
 
   void Destination::refuseSamePlace( const Destination &other ) const
   {
-    const bool samePath = !mPath.isEmpty() && QFileInfo( mPath ) == QFileInfo( other.mPath );
+    const bool samePath = !mPath.isEmpty() && !other.mPath.isEmpty() && sameFile( mPath, other.mPath );
     const bool sameTable = mTable.compare( other.mTable, Qt::CaseInsensitive ) == 0;
     if ( samePath && ( sameTable || mTable.isEmpty() || other.mTable.isEmpty() ) )
       throw QgsProcessingException(

@@ -114,7 +114,8 @@ namespace stillhead
     }
 
     // Names that stay as they are come first, so that no renamed one takes theirs.
-    QSet<QString> taken;
+    // Many formats make a key of this name by themselves.
+    QSet<QString> taken { field::FID };
     for ( const QString &name : reserved )
       taken << name.toLower();
     std::vector<bool> keeps;

@@ -42,10 +42,14 @@ namespace stillhead
     //! An error text, blank where all is well.
     QString storeMetadata( const WrittenLayer &written )
     {
+      // Without its name the layer is not found, and nothing is said.
+      const QString uri = written.id.contains( QLatin1String( "|layername=" ) )
+                            ? written.id
+                            : QStringLiteral( "%1|layername=%2" ).arg( written.id, layerNameOf( written.id ) );
       QString error;
       try
       {
-        QgsProviderRegistry::instance()->saveLayerMetadata( QStringLiteral( "ogr" ), written.id, written.metadata, error );
+        QgsProviderRegistry::instance()->saveLayerMetadata( QStringLiteral( "ogr" ), uri, written.metadata, error );
       }
       catch ( const QgsException &e )
       {
@@ -71,6 +75,13 @@ namespace stillhead
 
   } // namespace
 
+  QString layerNameOf( const QString &id )
+  {
+    const QVariantMap parts = QgsProviderRegistry::instance()->decodeUri( QStringLiteral( "ogr" ), id );
+    const QString name = parts.value( QStringLiteral( "layerName" ) ).toString();
+    return name.isEmpty() ? QFileInfo( id ).completeBaseName() : name;
+  }
+
   void finishOnLoading( const WrittenLayer &layer, const ResultStyle &style, QgsProcessingContext &context )
   {
     if ( context.willLoadLayerOnCompletion( layer.id ) )
@@ -84,7 +95,8 @@ namespace stillhead
     {
       if ( written.inGeoPackage )
       {
-        for ( const QString &error : { storeDefaultStyle( written.id, written.what, style ), storeMetadata( written ) } )
+        // Metadata first: the session keeps what it saw when a file was opened, and styling opens it.
+        for ( const QString &error : { storeMetadata( written ), storeDefaultStyle( written.id, written.what, style ) } )
         {
           if ( !error.isEmpty() )
             feedback.pushWarning( error );

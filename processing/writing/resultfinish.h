@@ -23,6 +23,9 @@ namespace stillhead
       bool inGeoPackage = false; //!< which keeps style and metadata
   };
 
+  //! The name by which a file knows the layer \a id; a GeoPackage wants its layers' identifiers to differ.
+  QString layerNameOf( const QString &id );
+
   //! Sees to it that the application styles \a layer when it loads it. Call it while the work is done.
   void finishOnLoading( const WrittenLayer &layer, const ResultStyle &style, QgsProcessingContext &context );
 

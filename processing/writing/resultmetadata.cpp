@@ -68,12 +68,12 @@ namespace stillhead
     return lines;
   }
 
-  QgsLayerMetadata resultMetadata( const RunFacts &facts, const QString &title )
+  QgsLayerMetadata resultMetadata( const RunFacts &facts, const QString &title, const QString &identifier )
   {
     QgsLayerMetadata metadata;
     metadata.setType( QStringLiteral( "dataset" ) );
     metadata.setTitle( title );
-    metadata.setIdentifier( QStringLiteral( "stillhead" ) );
+    metadata.setIdentifier( identifier );
     QStringList paragraphs;
     if ( !facts.summary.isEmpty() )
       paragraphs << facts.summary;

@@ -27,7 +27,7 @@ namespace stillhead
   //! The facts as lines, one fact each.
   QStringList factLines( const RunFacts &facts );
 
-  //! The facts as metadata of a layer called \a title.
-  QgsLayerMetadata resultMetadata( const RunFacts &facts, const QString &title );
+  //! The facts as metadata of the layer \a identifier, called \a title.
+  QgsLayerMetadata resultMetadata( const RunFacts &facts, const QString &title, const QString &identifier );
 
 } // namespace stillhead

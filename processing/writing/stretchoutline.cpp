@@ -11,6 +11,9 @@
 #include <QTransform>
 
 #include <algorithm>
+#include <cmath>
+#include <utility>
+#include <vector>
 
 namespace stillhead
 {
@@ -72,10 +75,13 @@ namespace stillhead
         }
         void end() { mLines->addGeometry( new QgsLineString( mX, mY ) ); }
 
-        //! Ends join within a tolerance but stay where they are: the way to the node keeps the outline in one piece.
-        void addJoint( const PlanPoint &end, const PlanPoint &node )
+        /**
+         * Ends join within a tolerance but stay where they are. Where that is wider than the outline, the way to the node
+         * keeps it in one piece.
+         */
+        void addJoint( const PlanPoint &end, const PlanPoint &node, double outlineM )
         {
-          if ( end == node )
+          if ( std::hypot( mPlane.x( end ) - mPlane.x( node ), mPlane.y( end ) - mPlane.y( node ) ) < outlineM )
             return;
           begin();
           add( end );
@@ -102,26 +108,36 @@ namespace stillhead
     const PlanPoint origin = result.drawing.placeAt( context.lineOf( worst ), worst.fromM );
     const LocalPlane plane( origin, measure.scaleAt( origin ) );
     StretchLines lines( plane );
-    for ( const int number : stretch.pieces )
+    std::vector<std::pair<PlanPoint, int>> joints;
+    // Neighbouring pieces of a line go in as one: cuts would only be places where the outline has to be noded.
+    for ( std::size_t i = 0; i < stretch.pieces.size(); )
     {
-      const Piece &piece = result.pieces[static_cast<std::size_t>( number )];
+      const Piece &piece = result.pieces[static_cast<std::size_t>( stretch.pieces[i] )];
       const CanonicalLine &line = context.lineOf( piece );
-      const Span &span = result.network.spans[static_cast<std::size_t>( piece.span )];
-      const PlanPoint from = result.drawing.placeAt( line, piece.fromM );
-      const PlanPoint to = result.drawing.placeAt( line, piece.toM );
+      double toM = piece.fromM;
       lines.begin();
-      lines.add( from );
+      for ( ; i < stretch.pieces.size(); ++i )
+      {
+        const Piece &next = result.pieces[static_cast<std::size_t>( stretch.pieces[i] )];
+        if ( &context.lineOf( next ) != &line || next.fromM != toM )
+          break;
+        toM = next.toM;
+        const Span &span = result.network.spans[static_cast<std::size_t>( next.span )];
+        if ( next.fromM <= span.fromM )
+          joints.emplace_back( result.drawing.placeAt( line, next.fromM ), span.fromNode );
+        if ( next.toM >= span.toM )
+          joints.emplace_back( result.drawing.placeAt( line, next.toM ), span.toNode );
+      }
+      lines.add( result.drawing.placeAt( line, piece.fromM ) );
       const auto first = result.drawing.alongM.begin() + static_cast<std::ptrdiff_t>( line.first );
       const auto last = first + static_cast<std::ptrdiff_t>( line.count );
-      for ( auto along = std::upper_bound( first, last, piece.fromM ); along != last && *along < piece.toM; ++along )
+      for ( auto along = std::upper_bound( first, last, piece.fromM ); along != last && *along < toM; ++along )
         lines.add( result.drawing.vertices[static_cast<std::size_t>( along - result.drawing.alongM.begin() )] );
-      lines.add( to );
+      lines.add( result.drawing.placeAt( line, toM ) );
       lines.end();
-      if ( piece.fromM <= span.fromM )
-        lines.addJoint( from, result.network.nodes[static_cast<std::size_t>( span.fromNode )].place );
-      if ( piece.toM >= span.toM )
-        lines.addJoint( to, result.network.nodes[static_cast<std::size_t>( span.toNode )].place );
     }
+    for ( const auto &[end, node] : joints )
+      lines.addJoint( end, result.network.nodes[static_cast<std::size_t>( node )].place, distanceM );
     QgsGeometry outline = lines.take().buffer( distanceM, SEGMENTS );
     outline.convertToSingleType();
     outline.transform( plane.back() );

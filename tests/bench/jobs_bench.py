@@ -44,65 +44,44 @@ def make_terrain(path, cells):
 
 
 def make_lines(path, count, cells):
-    """A comb of mainlines off one trunk and ten laterals on each, 109 m long on average, with bends about every 10 m."""
+    """Rows of mainlines off one trunk; every mainline is 200 m long and has ten laterals of 100 m, bent every 10 m."""
     srs = osr.SpatialReference()
     srs.ImportFromEPSG(EPSG)
     random = numpy.random.default_rng(11)
     source = ogr.GetDriverByName("GPKG").CreateDataSource(path)
-    mains = max(1, count // 11)
-    gap = (cells - 200.0) / mains
-    length = min(cells - 200.0, 1000.0)
-    blocks = max(1, int((cells - 200.0) // length))
-    per_row = blocks
-    rows = -(-mains // per_row)
-    gap = (cells - 200.0) / rows
     layers = {n: source.CreateLayer(n, srs, ogr.wkbLineString) for n in ("mainlines", "laterals")}
     for layer in layers.values():
         layer.CreateField(ogr.FieldDefn("name", ogr.OFTString))
 
-    def add(layer, name, points):
+    def add(layer, name, xs, ys):
         feature = ogr.Feature(layers[layer].GetLayerDefn())
         line = ogr.Geometry(ogr.wkbLineString)
-        for px, py in points:
+        for px, py in zip(xs, ys):
             line.AddPoint_2D(EAST + px, NORTH + py)
         feature.SetGeometry(line)
         feature["name"] = name
         layers[layer].CreateFeature(feature)
+        return line.Length()
 
+    mains = max(1, count // 11)
+    blocks = max(1, int((cells - 200) // 245))
+    rows = -(-mains // blocks)
+    gap = (cells - 400.0) / max(1, rows - 1)
     source.StartTransaction()
-    drawn = 0
-    ends = []
-    for row in range(rows):
-        y = 100.0 + row * gap
-        for block in range(per_row):
-            if drawn >= mains:
-                break
-            x0 = 100.0 + block * length
-            steps = int(length // 10)
-            xs = x0 + numpy.linspace(0, length, steps + 1)
-            ys = y + numpy.concatenate(([0.0], numpy.cumsum(random.normal(0, 0.05, steps - 1)), [0.0]))
-            ys[-1] = y
-            add("mainlines", f"main {drawn}", list(zip(xs, ys)))
-            for number in range(10):
-                at = 3 + number * (steps - 6) // 10
-                px, py = xs[at], ys[at]
-                reach = 9
-                drift = numpy.cumsum(random.normal(0, 0.3, reach))
-                step = 1.4 if number % 2 else -1.4
-                span = min(abs(step) * 5, gap / (reach + 2)) * (1 if number % 2 else -1)
-                # Laterals run beside their main: long enough, and clear of the next one.
-                points = [(px, py)] + [(px + 1 + k * 9.5 * (1 if at * 2 < steps else -1) + drift[k] * 0.1,
-                                        py + span * 0.4 * (number + 1) / 3 + 0.02 * k) for k in range(reach)]
-                add("laterals", f"lateral {drawn}-{number}", points)
-            drawn += 1
-        ends.append((100.0, y))
-    add("mainlines", "trunk", ends if len(ends) > 1 else [(100.0, 50.0), (100.0, 100.0)])
-    source.CommitTransaction()
     total = 0.0
-    for layer in layers.values():
-        layer.ResetReading()
-        for feature in layer:
-            total += feature.GetGeometryRef().Length()
+    for number in range(mains):
+        x0, y0 = 100.0 + number % blocks * 200.0, 200.0 + number // blocks * gap
+        xs = x0 + numpy.arange(21) * 10.0
+        ys = y0 + numpy.concatenate(([0.0], random.normal(0, 0.5, 19), [0.0]))
+        total += add("mainlines", f"main {number}", xs, ys)
+        for lateral in range(10):
+            at = 1 + 2 * (lateral // 2) * 2
+            way = 1.0 if lateral % 2 else -1.0
+            steps = numpy.arange(11) * 10.0 * way
+            total += add("laterals", f"lateral {number}-{lateral}", xs[at] + numpy.concatenate(([0.0], random.normal(0, 0.5, 10))), ys[at] + steps)
+    trunk = 200.0 + numpy.arange(rows) * gap
+    total += add("mainlines", "trunk", numpy.full(rows + 1, 100.0), numpy.concatenate(([150.0], trunk)))
+    source.CommitTransaction()
     return total
 
 
@@ -113,7 +92,10 @@ class Tool:
         os.makedirs(os.path.join(folder, "run"), mode=0o700, exist_ok=True)
         self.command = shutil.which("qgis_process.bin") or shutil.which("qgis_process")
         self.log = os.path.join(folder, "log.txt")
-        self.call("plugins", "enable", "stillhead_headless")
+        marker = os.path.join(folder, "config", "enabled")
+        if not os.path.exists(marker):
+            self.call("plugins", "enable", "stillhead_headless")
+            open(marker, "w").close()
 
     def call(self, *arguments):
         """Seconds and peak memory (MiB) of one run of the tool."""
@@ -141,7 +123,7 @@ def ours(tool, folder, lines, terrain):
         os.remove(result)
     sinks = {name: f'ogr:dbname="{result}" table="{name.lower()}" (geom)' for name in ("SPANS", "NODES", "STRETCHES", "EXTREMES", "FINDINGS")}
     seconds, memory = tool.run("stillhead:staticpressure", MAINS=f"{lines}|layername=mainlines", LATERALS=f"{lines}|layername=laterals",
-                               TERRAIN=terrain, SOURCE=f"{EAST + 100},{NORTH + 100} [EPSG:{EPSG}]", SOURCE_VALUE=500, SOURCE_LOW=450,
+                               TERRAIN=terrain, SOURCE=f"{EAST + 100},{NORTH + 150} [EPSG:{EPSG}]", SOURCE_VALUE=500, SOURCE_LOW=450,
                                PRESSURE_UNIT=1, LENGTH_UNIT=1, **sinks)
     return seconds, memory, vertices_in(result, "spans")
 

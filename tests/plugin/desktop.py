@@ -40,10 +40,11 @@ def in_dialog(open_dialog, is_wanted, act):
     timer = QTimer()
 
     def look():
-        dialog = QApplication.activeModalWidget()
-        if not dialog or not is_wanted(dialog):
+        shown = [w for w in QApplication.topLevelWidgets() if w.isVisible() and is_wanted(w)]
+        if not shown:
             return
         timer.stop()
+        dialog = shown[0]
         seen.append(dialog)
         try:
             act(dialog)
@@ -104,9 +105,11 @@ def check_menu():
 
 def check_menu_opens_algorithms():
     for action in stillhead_menus()[0].actions():
-        title = action.text().rstrip("…")
+        title = action.text().rstrip("…").lower()
         name = action.objectName().split(":")[1]
-        in_dialog(action.trigger, lambda dialog: title in dialog.windowTitle(), lambda _: screenshot(name + ".png"))
+        in_dialog(
+            action.trigger, lambda dialog: dialog.windowTitle().lower() == title, lambda _: screenshot(name + ".png")
+        )
 
 
 def check_without_processing():
