@@ -62,22 +62,20 @@ namespace stillhead
     return sets;
   }
 
-  void PieceGraph::visitTouching( const std::function<void( int, int )> &visit ) const
+  void PieceGraph::visitPlaces( const std::function<void( int, const std::vector<int> & )> &visit ) const
   {
+    std::vector<int> here;
     for ( std::size_t i = 1; i < mPieces.size(); ++i )
     {
-      if ( mPieces[i].span == mPieces[i - 1].span )
-        visit( static_cast<int>( i ) - 1, static_cast<int>( i ) );
+      if ( mPieces[i].span != mPieces[i - 1].span )
+        continue;
+      here = { static_cast<int>( i ) - 1, static_cast<int>( i ) };
+      visit( -1, here );
     }
-    std::vector<int> here;
-    for ( std::size_t node = 0; node < mNetwork.nodes.size(); ++node )
+    for ( int node = 0; node < static_cast<int>( mNetwork.nodes.size() ); ++node )
     {
-      piecesAt( static_cast<int>( node ), here );
-      for ( std::size_t a = 0; a < here.size(); ++a )
-      {
-        for ( std::size_t b = a + 1; b < here.size(); ++b )
-          visit( here[a], here[b] );
-      }
+      piecesAt( node, here );
+      visit( node, here );
     }
   }
 
