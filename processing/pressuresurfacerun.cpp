@@ -23,7 +23,8 @@ namespace stillhead
     return { output::SURFACE };
   }
 
-  PressureSurfaceRun::PressureSurfaceRun( const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback )
+  PressureSurfaceRun::PressureSurfaceRun(
+    const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback )
     : mValues( values )
     , mTerrain( terrain )
     , mFeedback( feedback )
@@ -49,7 +50,8 @@ namespace stillhead
     const TerrainPoint pixel = mTerrain.source->grid().toPixel( { source.place.x, source.place.y } );
     const double groundM = source.groundElevationM.value_or( reader.elevationAtM( pixel ) );
     if ( source.kind != SourceKind::WaterLevel && std::isnan( groundM ) )
-      throw QgsProcessingException( refusalText( { Refusal::Reason::SourceNoTerrain, 0.0 }, mSource.reachM, mUnits ) );
+      throw QgsProcessingException(
+        refusalText( { Refusal::Reason::SourceNoTerrain, 0.0, {}, {}, {} }, {}, mSource.reachM, mUnits ) );
     mInput.levels = staticLevels( source, groundM, mUnits.specificWeightNPerM3() );
     if ( !std::isnan( groundM ) )
       mFeedback.pushInfo( Text::tr( "Ground at the source: %1." ).arg( mUnits.lengthText( groundM, 1 ) ) );
@@ -79,7 +81,8 @@ namespace stillhead
     surface.id = QgsProcessingParameters::parameterAsOutputLayer(
       mValues.definition( output::SURFACE ), mValues.values(), mValues.context() );
     surface.what = ResultLayer::Surface;
-    surface.metadata = resultMetadata( facts(), mValues.definition( output::SURFACE )->description(), layerNameOf( surface.id ) );
+    surface.metadata =
+      resultMetadata( facts(), mValues.definition( output::SURFACE )->description(), layerNameOf( surface.id ) );
     writeSurfaceFile( surface.id, mInput, mTerrain, mUnits, monitor );
     finishOnLoading( surface, mStyle, mValues.context() );
     mWritten.push_back( surface );

@@ -123,6 +123,50 @@ namespace stillhead
     return list;
   }
 
+  ParameterList feedLayerParameters()
+  {
+    ParameterList list;
+    add( list,
+      new QgsProcessingParameterFeatureSource( parameter::SOURCES, Text::tr( "Sources (several)" ),
+        compat::sourceTypes( { compat::Source::Point } ), QVariant(), true ),
+      Text::tr(
+        "Points, in place of SOURCE, where there are several sources: fields `kind` (pressure reading, water level, "
+        "level above ground) and `value`, and as needed `name`, `system`, `low`, `elevation`, `gauge_height`, "
+        "`boost`, `boost_low`, `note`, in the chosen units. Optional." ) );
+    add( list,
+      new QgsProcessingParameterFeatureSource(
+        parameter::DEVICES, Text::tr( "Devices" ), compat::sourceTypes( { compat::Source::Point } ), QVariant(), true ),
+      Text::tr(
+        "Points on the pipe: field `kind` (regulator, booster, check valve, closed valve, control valve), and as "
+        "needed "
+        "`name`, `system`, `set` (regulator: outlet pressure while water runs), `rise` (lock-up rise), `boost`, "
+        "`boost_low`, `elevation`, `direction` (from the source, start to end, end to start), in the chosen units. "
+        "Optional." ) );
+    return list;
+  }
+
+  ParameterList lockupParameter()
+  {
+    ParameterList list;
+    addAdvanced( list, optionalNumber( parameter::LOCKUP_RISE, Text::tr( "Lock-up rise of regulators" ) ),
+      Text::tr(
+        "How far a regulator's outlet rises above its setting at no flow, where it has no `rise` of its own: see its "
+        "maker's sheet. In the pressure unit. Unset: 10 psi, 70 kPa, 0.7 bar, 7 m or 25 ft of water." ) );
+    return list;
+  }
+
+  ParameterList failedOpenParameter()
+  {
+    ParameterList list;
+    addAdvanced( list,
+      choice( parameter::FAILED_OPEN, Text::tr( "What if regulators fail open" ),
+        { Text::tr( "Not asked" ), Text::tr( "Each one in turn" ), Text::tr( "All at once" ) } ),
+      Text::tr(
+        "Gives every span the highest pressure it would see if a regulator passed all pressure (`p_failed_open`), and "
+        "the regulator that causes it. Default: not asked." ) );
+    return list;
+  }
+
   ParameterList coverParameter()
   {
     ParameterList list;
@@ -136,14 +180,15 @@ namespace stillhead
     ParameterList list;
     QgsProcessingParameterNumber *cover = number( parameter::COVER, coverLabel(), 0.0 );
     cover->setIsDynamic( true );
-    cover->setDynamicPropertyDefinition( QgsPropertyDefinition(
-      parameter::COVER, Text::tr( "Depth of cover" ), QgsPropertyDefinition::Double ) );
+    cover->setDynamicPropertyDefinition(
+      QgsPropertyDefinition( parameter::COVER, Text::tr( "Depth of cover" ), QgsPropertyDefinition::Double ) );
     cover->setDynamicLayerParameterName( parameter::MAINS );
     add( list, cover,
       Text::tr( "In the length unit; pressure is taken at this depth. A drawn feature's own `cover` field goes before "
                 "it where it is set. Default: 0, at the ground surface." ) );
     add( list,
-      new QgsProcessingParameterBoolean( parameter::USE_LINE_Z, Text::tr( "Lines carry surveyed pipe elevations" ), false ),
+      new QgsProcessingParameterBoolean(
+        parameter::USE_LINE_Z, Text::tr( "Lines carry surveyed pipe elevations" ), false ),
       Text::tr( "Take the drawn Z as the elevation of the pipe, in place of terrain and cover, straight between "
                 "vertices. A line without usable Z falls back to the terrain, with a finding. Default: no." ) );
     add( list,
@@ -188,8 +233,7 @@ namespace stillhead
     addAdvanced( list,
       optionalNumber( parameter::LATERAL_MOST, Text::tr( "Highest acceptable static pressure of laterals" ) ),
       Text::tr( "In the pressure unit. Unset: as for all pipe." ) );
-    addAdvanced( list,
-      number( parameter::TERRAIN_RMSE, Text::tr( "Error of the terrain (root mean square)" ), 0.0 ),
+    addAdvanced( list, number( parameter::TERRAIN_RMSE, Text::tr( "Error of the terrain (root mean square)" ), 0.0 ),
       Text::tr( "Vertical error of the terrain in the length unit. Default: 0." ) );
     addAdvanced( list, number( parameter::READING_ERROR, Text::tr( "Error of the reading (±, at 95 %)" ), 0.0 ),
       Text::tr( "Of the gauge or water level, in the pressure unit. Default: 0." ) );

@@ -23,6 +23,15 @@ namespace stillhead
   //! SOURCE and what is known about it. Without \a network there is no pipe to reach and no SOURCE_REACH.
   ParameterList sourceParameters( bool network );
 
+  //! SOURCES and DEVICES, layers of points.
+  ParameterList feedLayerParameters();
+
+  //! LOCKUP_RISE.
+  ParameterList lockupParameter();
+
+  //! FAILED_OPEN.
+  ParameterList failedOpenParameter();
+
   //! COVER, one depth for all.
   ParameterList coverParameter();
 

@@ -9,9 +9,9 @@
 #include "processing/parameternames.h"
 #include "processing/reading/layercrs.h"
 #include "processing/reading/limitsreader.h"
+#include "processing/reading/sourcelayer.h"
 #include "processing/reading/unitsreader.h"
 #include "processing/surfaceoutput.h"
-#include "processing/text/refusaltext.h"
 #include "processing/text/summarytext.h"
 #include "processing/text/text.h"
 
@@ -33,8 +33,8 @@ namespace stillhead
     constexpr double SURFACE_TO = 90.0;
     constexpr double WRITE_TO = 99.0;
 
-    std::unique_ptr<PlanToTerrain> wayToTerrain(
-      const QgsCoordinateReferenceSystem &lines, const QgsCoordinateReferenceSystem &terrain, const QgsCoordinateTransformContext &context )
+    std::unique_ptr<PlanToTerrain> wayToTerrain( const QgsCoordinateReferenceSystem &lines,
+      const QgsCoordinateReferenceSystem &terrain, const QgsCoordinateTransformContext &context )
     {
       // The user's choice of operation, where there is one for this direction; else PROJ's best.
       const bool chosen = !context.mustReverseCoordinateOperation( lines, terrain );
@@ -61,16 +61,19 @@ namespace stillhead
     return { output::SPANS, output::NODES, output::STRETCHES, output::EXTREMES, output::FINDINGS, output::SURFACE };
   }
 
-  StaticPressureRun::StaticPressureRun( const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback )
+  StaticPressureRun::StaticPressureRun(
+    const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback )
     : mValues( values )
     , mTerrain( terrain )
     , mFeedback( feedback )
     , mUnits( readUnits( values ) )
     , mLimits( readLimits( values, mUnits ) )
     , mStyle( resultStyle( mLimits, mUnits ) )
-  {}
+  {
+  }
 
-  void StaticPressureRun::read( const std::vector<DrawnLayer> &layers )
+  void StaticPressureRun::read( const std::vector<DrawnLayer> &layers, const QgsProcessingFeatureSource *sources,
+    const QgsProcessingFeatureSource *devices )
   {
     FeedbackMonitor monitor( &mFeedback, 0.0, READ_TO );
     DrawingOptions options;
@@ -78,11 +81,66 @@ namespace stillhead
     options.metresPerZ = metresPerLineZ( mValues, mTerrain );
     options.reservedFields = spanFieldNames();
     mDrawn = readDrawing( layers, options, mUnits, mValues, mFeedback, monitor );
-    mSource = readSource( mValues, mUnits, mDrawn.crs, mFeedback );
+    readFeeds( sources, devices );
     mMeasure = makePlanMeasure( crsDefinition( mDrawn.crs ) );
     mFeedback.pushInfo( Text::tr( "%1 drawn features in %2; lengths and tolerances are measured on the ground." )
                           .arg( mDrawn.features.size() )
                           .arg( crsText( mDrawn.crs ) ) );
+  }
+
+  void StaticPressureRun::readFeeds(
+    const QgsProcessingFeatureSource *sources, const QgsProcessingFeatureSource *devices )
+  {
+    const QgsCoordinateTransformContext transforms = mValues.context().transformContext();
+    if ( sources && mValues.isSet( parameter::SOURCE ) )
+      throw QgsProcessingException( Text::tr( "SOURCE and SOURCES are both given; give only one of them." ) );
+    if ( sources )
+    {
+      const double reachM = readDistance( mValues, parameter::SOURCE_REACH, mUnits ).value_or( SourceInput().reachM );
+      mSources = readSources( *sources, reachM, mUnits, mDrawn.crs, transforms, mDrawn.drawing );
+    }
+    else
+    {
+      mSources.push_back( readSource( mValues, mUnits, mDrawn.crs, mFeedback ) );
+    }
+    if ( devices )
+    {
+      const double risePa =
+        readPressure( mValues, parameter::LOCKUP_RISE, mUnits ).value_or( usualRegulatorMarginPa( mUnits ) );
+      mDevices = readDevices( *devices, risePa, mUnits, mDrawn.crs, transforms, mDrawn.drawing );
+    }
+    for ( const SourceInput &source : mSources )
+      mNames.sources << source.name;
+    mNames.devices = mDevices.names;
+  }
+
+  StaticJob StaticPressureRun::job( const PlanToTerrain &planToTerrain ) const
+  {
+    StaticJob job;
+    job.drawing = &mDrawn.drawing;
+    job.measure = mMeasure.get();
+    job.planToTerrain = &planToTerrain;
+    job.terrain = mTerrain.cache.get();
+    for ( const SourceInput &source : mSources )
+      job.sources.push_back( source.source );
+    job.devices = mDevices.devices;
+    job.sourceReachM = mSources.front().reachM;
+    job.useLineZ = mValues.boolean( parameter::USE_LINE_Z );
+    job.joins.toleranceM = readDistance( mValues, parameter::JOIN_TOLERANCE, mUnits ).value_or( job.joins.toleranceM );
+    job.joins.joinCrossings = mValues.boolean( parameter::JOIN_CROSSINGS );
+    job.limits = mLimits;
+    job.terrainRmseM = readDistance( mValues, parameter::TERRAIN_RMSE, mUnits ).value_or( 0.0 );
+    job.readingErrorPa = readPressure( mValues, parameter::READING_ERROR, mUnits ).value_or( 0.0 );
+    job.leastDropPa = usualRegulatorMarginPa( mUnits );
+    job.failedOpen = static_cast<FailedOpen>( mValues.choice( parameter::FAILED_OPEN ) );
+    job.specificWeightNPerM3 = mUnits.specificWeightNPerM3();
+    job.threads = mTerrain.threads;
+    return job;
+  }
+
+  RefusalNames StaticPressureRun::refusalNames() const
+  {
+    return { mNames.sources, mNames.devices, [this]( int line ) { return featureText( line, mDrawn ); } };
   }
 
   void StaticPressureRun::solve()
@@ -91,42 +149,38 @@ namespace stillhead
     FeedbackMonitor monitor( &mFeedback, READ_TO, SOLVE_TO );
     const std::unique_ptr<PlanToTerrain> planToTerrain =
       wayToTerrain( mDrawn.crs, mTerrain.crs, mValues.context().transformContext() );
-    StaticJob job;
-    job.drawing = &mDrawn.drawing;
-    job.measure = mMeasure.get();
-    job.planToTerrain = planToTerrain.get();
-    job.terrain = mTerrain.cache.get();
-    job.source = mSource.source;
-    job.sourceReachM = mSource.reachM;
-    job.useLineZ = mValues.boolean( parameter::USE_LINE_Z );
-    job.joins.toleranceM = readDistance( mValues, parameter::JOIN_TOLERANCE, mUnits ).value_or( job.joins.toleranceM );
-    job.joins.joinCrossings = mValues.boolean( parameter::JOIN_CROSSINGS );
-    job.limits = mLimits;
-    job.terrainRmseM = readDistance( mValues, parameter::TERRAIN_RMSE, mUnits ).value_or( 0.0 );
-    job.readingErrorPa = readPressure( mValues, parameter::READING_ERROR, mUnits ).value_or( 0.0 );
-    job.specificWeightNPerM3 = mUnits.specificWeightNPerM3();
-    job.threads = mTerrain.threads;
     try
     {
-      mResult = solveStatics( job, monitor );
+      mResult = solveStatics( job( *planToTerrain ), monitor );
     }
     catch ( const Refusal &refusal )
     {
-      throw QgsProcessingException( refusalText( refusal, mSource.reachM, mUnits ) );
+      throw QgsProcessingException( refusalText( refusal, refusalNames(), mSources.front().reachM, mUnits ) );
     }
-    logSource();
+    logSources();
     logFindings();
   }
 
-  void StaticPressureRun::logSource() const
+  void StaticPressureRun::logSources() const
   {
-    const SourceReport &report = mResult.source;
-    mFeedback.pushInfo( Text::tr( "The source joins the pipe %1 away." ).arg( mUnits.lengthText( report.distanceM, 1 ) ) );
-    if ( mSource.source.groundElevationM && !std::isnan( report.terrainGroundM ) )
-      mFeedback.pushInfo( Text::tr( "Ground at the source: %1 surveyed, which is used; %2 by the terrain; difference %3." )
-                            .arg( mUnits.lengthText( report.usedGroundM, 1 ), mUnits.lengthText( report.terrainGroundM, 1 ),
-                              mUnits.lengthText( report.usedGroundM - report.terrainGroundM, 1 ) ) );
-    else if ( mSource.source.groundElevationM )
+    for ( std::size_t i = 0; i < mSources.size(); ++i )
+      logSource( i );
+  }
+
+  void StaticPressureRun::logSource( std::size_t number ) const
+  {
+    const SourceReport &report = mResult.sources[number];
+    const SourceInput &input = mSources[number];
+    if ( !input.name.isEmpty() )
+      mFeedback.pushInfo( Text::tr( "Source “%1”, %2:" ).arg( input.name, sourceText( input.source, mUnits ) ) );
+    mFeedback.pushInfo(
+      Text::tr( "The source joins the pipe %1 away." ).arg( mUnits.lengthText( report.distanceM, 1 ) ) );
+    if ( input.source.groundElevationM && !std::isnan( report.terrainGroundM ) )
+      mFeedback.pushInfo(
+        Text::tr( "Ground at the source: %1 surveyed, which is used; %2 by the terrain; difference %3." )
+          .arg( mUnits.lengthText( report.usedGroundM, 1 ), mUnits.lengthText( report.terrainGroundM, 1 ),
+            mUnits.lengthText( report.usedGroundM - report.terrainGroundM, 1 ) ) );
+    else if ( input.source.groundElevationM )
       mFeedback.pushInfo( Text::tr( "Ground at the source: %1 surveyed; the terrain has none there." )
                             .arg( mUnits.lengthText( report.usedGroundM, 1 ) ) );
     else if ( !std::isnan( report.terrainGroundM ) )
@@ -135,7 +189,7 @@ namespace stillhead
     mFeedback.pushInfo( Text::tr( "Static level: elevation %1 in the high case, %2 in the low case (%3)." )
                           .arg( mUnits.lengthText( report.levels.highM, 1 ), mUnits.lengthText( report.levels.lowM, 1 ),
                             mUnits.constantText() ) );
-    if ( mSource.source.kind == SourceKind::WaterLevel && mSource.source.high < report.usedGroundM )
+    if ( input.source.kind == SourceKind::WaterLevel && input.source.high < report.usedGroundM )
       mFeedback.pushWarning( Text::tr( "The water level lies below the ground at the source; make sure that it is an "
                                        "elevation, not a depth." ) );
   }
@@ -157,8 +211,17 @@ namespace stillhead
     RunFacts facts;
     facts.algorithm = Text::tr( "static pressure along pipes" );
     facts.summary = summary;
-    facts.source = sourceText( mSource.source, mUnits );
-    facts.sourceNote = mSource.note;
+    QStringList sources;
+    QStringList notes;
+    for ( const SourceInput &source : mSources )
+    {
+      const QString text = sourceText( source.source, mUnits );
+      sources << ( source.name.isEmpty() ? text : QStringLiteral( "%1: %2" ).arg( source.name, text ) );
+      if ( !source.note.isEmpty() )
+        notes << source.note;
+    }
+    facts.source = sources.join( QStringLiteral( "; " ) );
+    facts.sourceNote = notes.join( QStringLiteral( "; " ) );
     facts.terrain = mTerrain.description();
     facts.constant = mUnits.constantText();
     facts.parameters = parameterLines( mValues.values(), staticPressureLayers() );
@@ -167,7 +230,8 @@ namespace stillhead
 
   QVariantMap StaticPressureRun::write()
   {
-    const ResultContext context { mResult, mDrawn, *mMeasure, mUnits, mLimits, mStyle, mTerrain.unit.metresPerUnit };
+    const ResultContext context { mResult, mDrawn, *mMeasure, mUnits, mLimits, mNames, mStyle,
+      mTerrain.unit.metresPerUnit };
     OutputSet outputs( mValues, staticPressureLayers() );
     std::vector<ResultTable> tables;
     for ( ResultTable &table : allTables( context ) )
@@ -178,7 +242,7 @@ namespace stillhead
     outputs.checkFormats( tables );
 
     QVariantMap results;
-    const QString summary = summaryText( context, mSource.source );
+    const QString summary = summaryText( context, mSources.front().source );
     const RunFacts runFacts = facts( summary );
     // The longest work first: a cancel then finds nothing replaced yet.
     writeSurface( outputs, runFacts, results );
@@ -196,8 +260,8 @@ namespace stillhead
     if ( !outputs.isAsked( output::SURFACE ) )
       return;
     SurfaceInput input;
-    input.levels = mResult.source.levels;
-    input.hasLow = mSource.source.low.has_value();
+    input.levels = mResult.sources.front().levels;
+    input.hasLow = mSources.front().source.low.has_value();
     if ( !QgsProcessingParameters::isDynamic( mValues.values(), parameter::COVER ) )
       input.coverM = mUnits.metres( mValues.number( parameter::COVER ) );
     FeedbackMonitor monitor( &mFeedback, SOLVE_TO, SURFACE_TO );
@@ -205,7 +269,8 @@ namespace stillhead
     written.id = QgsProcessingParameters::parameterAsOutputLayer(
       mValues.definition( output::SURFACE ), mValues.values(), mValues.context() );
     written.what = ResultLayer::Surface;
-    written.metadata = resultMetadata( facts, mValues.definition( output::SURFACE )->description(), layerNameOf( written.id ) );
+    written.metadata =
+      resultMetadata( facts, mValues.definition( output::SURFACE )->description(), layerNameOf( written.id ) );
     writeSurfaceFile( written.id, input, mTerrain, mUnits, monitor );
     outputs.noteWritten( output::SURFACE );
     finishOnLoading( written, mStyle, mValues.context() );
@@ -227,7 +292,8 @@ namespace stillhead
       WrittenLayer written;
       written.id = outputs.write( table, mDrawn.crs, mFeedback, from, to );
       written.what = table.what;
-      written.metadata = resultMetadata( facts, mValues.definition( table.output )->description(), layerNameOf( written.id ) );
+      written.metadata =
+        resultMetadata( facts, mValues.definition( table.output )->description(), layerNameOf( written.id ) );
       written.inGeoPackage = outputs.isGeoPackage( table.output );
       finishOnLoading( written, mStyle, mValues.context() );
       results.insert( table.output, written.id );
@@ -240,11 +306,11 @@ namespace stillhead
   {
     const Totals &totals = mResult.totals;
     results.insert( output::SPAN_COUNT, static_cast<qlonglong>( mResult.pieces.size() ) );
-    results.insert( output::NODE_COUNT, static_cast<qlonglong>( mResult.network.nodes.size() ) );
+    results.insert( output::NODE_COUNT, static_cast<qlonglong>( nodeRows( mResult ).size() ) );
     results.insert( output::STRETCH_COUNT, static_cast<qlonglong>( mResult.stretches.size() ) );
     results.insert( output::FINDING_COUNT, static_cast<qlonglong>( mResult.findings.size() ) );
-    results.insert( output::STATIC_LEVEL_HIGH, mUnits.lengthValue( mResult.source.levels.highM ) );
-    results.insert( output::STATIC_LEVEL_LOW, mUnits.lengthValue( mResult.source.levels.lowM ) );
+    results.insert( output::STATIC_LEVEL_HIGH, mUnits.lengthValue( mResult.sources.front().levels.highM ) );
+    results.insert( output::STATIC_LEVEL_LOW, mUnits.lengthValue( mResult.sources.front().levels.lowM ) );
     results.insert( output::P_LOWEST, mUnits.pressureValue( totals.lowestPa ) );
     results.insert( output::P_HIGHEST, mUnits.pressureValue( totals.highestPa ) );
     results.insert( output::LENGTH_TOTAL, mUnits.lengthValue( totals.lengthM ) );

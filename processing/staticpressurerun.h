@@ -4,9 +4,12 @@
 
 #include "core/job/staticjob.h"
 #include "processing/displayunits.h"
+#include "processing/reading/devicelayer.h"
 #include "processing/reading/drawingreader.h"
 #include "processing/reading/sourcereader.h"
 #include "processing/reading/terrainreader.h"
+#include "processing/text/findingtext.h"
+#include "processing/text/refusaltext.h"
 #include "processing/writing/outputset.h"
 #include "processing/writing/resultfinish.h"
 #include "processing/writing/resultmetadata.h"
@@ -26,8 +29,12 @@ namespace stillhead
       //! Reads all that needs no layer. \throws QgsProcessingException
       StaticPressureRun( const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback );
 
-      //! Reads the drawing and the source. \throws QgsProcessingException, Cancelled
-      void read( const std::vector<DrawnLayer> &layers );
+      /**
+       * Reads the drawing, the sources (from \a sources if given) and the devices (from \a devices if given).
+       * \throws QgsProcessingException, Cancelled
+       */
+      void read( const std::vector<DrawnLayer> &layers, const QgsProcessingFeatureSource *sources,
+        const QgsProcessingFeatureSource *devices );
 
       //! Computes. \throws QgsProcessingException, Cancelled
       void solve();
@@ -40,8 +47,13 @@ namespace stillhead
 
     private:
       void writeSurface( OutputSet &outputs, const RunFacts &facts, QVariantMap &results );
-      void writeTables( OutputSet &outputs, const std::vector<ResultTable> &tables, const RunFacts &facts, QVariantMap &results );
-      void logSource() const;
+      void writeTables(
+        OutputSet &outputs, const std::vector<ResultTable> &tables, const RunFacts &facts, QVariantMap &results );
+      void readFeeds( const QgsProcessingFeatureSource *sources, const QgsProcessingFeatureSource *devices );
+      StaticJob job( const PlanToTerrain &planToTerrain ) const;
+      RefusalNames refusalNames() const;
+      void logSources() const;
+      void logSource( std::size_t number ) const;
       void logFindings() const;
       RunFacts facts( const QString &summary ) const;
       void addNumbers( QVariantMap &results ) const;
@@ -53,7 +65,9 @@ namespace stillhead
       Limits mLimits;
       ResultStyle mStyle;
       DrawnInput mDrawn;
-      SourceInput mSource;
+      std::vector<SourceInput> mSources;
+      DeviceInput mDevices;
+      FeedNames mNames;
       std::unique_ptr<PlanMeasure> mMeasure;
       StaticResult mResult;
       std::vector<WrittenLayer> mWritten;

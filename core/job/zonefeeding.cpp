@@ -203,6 +203,8 @@ namespace stillhead
             tellStatus( standing );
             tellBypass( standing );
           }
+          if ( device.kind == DeviceKind::Booster && !device.boostLowPa )
+            add( FindingCode::PumpDutyNotGiven, standing );
           if ( device.kind == DeviceKind::CheckValve && !std::isnan( standing.inletHighPa ) )
             add( FindingCode::PressureMayBeTrapped, standing );
         }

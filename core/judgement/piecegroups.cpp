@@ -35,30 +35,10 @@ namespace stillhead
     }
   }
 
-  template <typename Visit> void PieceGraph::visitPlaces( Visit visit ) const
-  {
-    std::vector<int> here;
-    for ( std::size_t node = 0; node < mNetwork.nodes.size(); ++node )
-    {
-      piecesAt( static_cast<int>( node ), here );
-      visit( here );
-    }
-    std::vector<int> beyond;
-    for ( const DeviceLink &link : mNetwork.links )
-    {
-      if ( !link.passes )
-        continue;
-      piecesAt( link.fromNode, here );
-      piecesAt( link.toNode, beyond );
-      here.insert( here.end(), beyond.begin(), beyond.end() );
-      visit( here );
-    }
-  }
-
   DisjointSets PieceGraph::groups( const std::function<bool( int )> &belongs ) const
   {
     DisjointSets sets( mPieces.size() );
-    visitPlaces( [&]( const std::vector<int> &here ) {
+    visitPlaces( [&]( int, const std::vector<int> &here ) {
       int first = -1;
       for ( const int piece : here )
       {
@@ -70,29 +50,34 @@ namespace stillhead
           first = piece;
       }
     } );
-    for ( std::size_t i = 1; i < mPieces.size(); ++i )
-    {
-      const int piece = static_cast<int>( i );
-      if ( mPieces[i].span == mPieces[i - 1].span && belongs( piece - 1 ) && belongs( piece ) )
-        sets.join( piece - 1, piece );
-    }
     return sets;
   }
 
-  void PieceGraph::visitTouching( const std::function<void( int, int )> &visit ) const
+  void PieceGraph::visitPlaces( const std::function<void( int, const std::vector<int> & )> &visit ) const
   {
+    std::vector<int> here;
     for ( std::size_t i = 1; i < mPieces.size(); ++i )
     {
-      if ( mPieces[i].span == mPieces[i - 1].span )
-        visit( static_cast<int>( i ) - 1, static_cast<int>( i ) );
+      if ( mPieces[i].span != mPieces[i - 1].span )
+        continue;
+      here = { static_cast<int>( i ) - 1, static_cast<int>( i ) };
+      visit( -1, here );
     }
-    visitPlaces( [&]( const std::vector<int> &here ) {
-      for ( std::size_t a = 0; a < here.size(); ++a )
-      {
-        for ( std::size_t b = a + 1; b < here.size(); ++b )
-          visit( here[a], here[b] );
-      }
-    } );
+    for ( int node = 0; node < static_cast<int>( mNetwork.nodes.size() ); ++node )
+    {
+      piecesAt( node, here );
+      visit( node, here );
+    }
+    std::vector<int> beyond;
+    for ( const DeviceLink &link : mNetwork.links )
+    {
+      if ( !link.passes )
+        continue;
+      piecesAt( link.fromNode, here );
+      piecesAt( link.toNode, beyond );
+      here.insert( here.end(), beyond.begin(), beyond.end() );
+      visit( link.fromNode, here );
+    }
   }
 
 } // namespace stillhead

@@ -32,13 +32,13 @@ namespace stillhead
       //! Sets of pieces for which \a belongs is true that touch each other; the others stay alone.
       DisjointSets groups( const std::function<bool( int )> &belongs ) const;
 
-      //! Calls \a visit( a, b ) for every two pieces that touch.
-      void visitTouching( const std::function<void( int, int )> &visit ) const;
+      /**
+       * Calls \a visit( node, pieces ) for every place where pieces end: at each node, at each device that lets water pass
+       * (both sides together), and (node −1) at each cut within a span.
+       */
+      void visitPlaces( const std::function<void( int, const std::vector<int> & )> &visit ) const;
 
     private:
-      //! Calls \a visit( pieces ) with all pieces that meet at one place.
-      template <typename Visit> void visitPlaces( Visit visit ) const;
-
       const Network &mNetwork;
       const std::vector<Piece> &mPieces;
       Adjacency mAdjacency;

@@ -84,25 +84,27 @@ namespace stillhead
             Summit &summit = found[summits.find( i )];
             if ( summit.highest < 0 || piece( i ).highestM > piece( summit.highest ).highestM )
               summit.highest = i;
-            const Span &span = mGraph.network().spans[static_cast<std::size_t>( piece( i ).span )];
-            for ( const int node : { span.fromNode, span.toNode } )
-              summit.wetSide =
-                summit.wetSide || mGraph.network().nodes[static_cast<std::size_t>( node )].kind == NodeKind::Source;
           }
           if ( found.empty() )
             return;
-          const auto touch = [&]( int blocked, int other ) {
-            if ( !isBlocked( blocked ) )
+          mGraph.visitPlaces( [&]( int node, const std::vector<int> &here ) {
+            Summit *summit = nullptr; // all that is blocked at one place is one summit
+            bool wet = node >= 0 && mGraph.network().nodes[static_cast<std::size_t>( node )].kind == NodeKind::Source;
+            int dry = -1;
+            for ( const int number : here )
+            {
+              if ( isBlocked( number ) )
+                summit = &found[summits.find( number )];
+              else if ( isDry( number ) )
+                dry = beyond.find( number );
+              else
+                wet = wet || zone( number ).fed;
+            }
+            if ( !summit )
               return;
-            Summit &summit = found[summits.find( blocked )];
-            if ( isDry( other ) )
-              summit.dryGroups.insert( beyond.find( other ) );
-            else if ( !isBlocked( other ) && zone( other ).fed )
-              summit.wetSide = true;
-          };
-          mGraph.visitTouching( [&]( int a, int b ) {
-            touch( a, b );
-            touch( b, a );
+            summit->wetSide = summit->wetSide || wet;
+            if ( dry >= 0 )
+              summit->dryGroups.insert( dry );
           } );
           for ( const auto &[group, summit] : found )
           {

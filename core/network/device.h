@@ -37,7 +37,7 @@ namespace stillhead
       std::optional<double> setPa;      //!< outlet pressure while water runs; a control valve without it only passes
       double risePa = 0.0;              //!< lock-up rise: lock-up is set + rise
       double boostPa = 0.0;             //!< added by a booster at no flow
-      double boostLowPa = 0.0;          //!< added while running
+      std::optional<double> boostLowPa; //!< added while running; unset: as boostPa
       std::optional<double> elevationM; //!< surveyed; unset: the pipe there
       DeviceDirection direction = DeviceDirection::FromTheSource;
 

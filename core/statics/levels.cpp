@@ -132,7 +132,9 @@ namespace stillhead
       return std::min( inletLevelM, elevationM + outletPa / specificWeightNPerM3 );
     }
     if ( device.kind == DeviceKind::Booster && inletLevelM >= elevationM )
-      return inletLevelM + ( which == Case::High ? device.boostPa : device.boostLowPa ) / specificWeightNPerM3;
+      return inletLevelM
+        + ( which == Case::High ? device.boostPa : device.boostLowPa.value_or( device.boostPa ) )
+        / specificWeightNPerM3;
     return inletLevelM;
   }
 

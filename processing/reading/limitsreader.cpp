@@ -21,6 +21,7 @@ namespace stillhead
     {
         double least;
         double most;
+        double regulatorMargin; //!< of LOCKUP_RISE and LEAST_DROP
         std::vector<double> bands;
     };
 
@@ -28,11 +29,11 @@ namespace stillhead
     const Preset &presetFor( PressureUnit unit )
     {
       static const std::array<Preset, 5> presets { {
-        { 30, 80, { 30, 45, 60, 80, 100 } },
-        { 200, 550, { 200, 300, 400, 550, 700 } },
-        { 2, 5.5, { 2, 3, 4, 5.5, 7 } },
-        { 20, 55, { 20, 30, 40, 55, 70 } },
-        { 70, 185, { 70, 105, 140, 185, 230 } },
+        { 30, 80, 10, { 30, 45, 60, 80, 100 } },
+        { 200, 550, 70, { 200, 300, 400, 550, 700 } },
+        { 2, 5.5, 0.7, { 2, 3, 4, 5.5, 7 } },
+        { 20, 55, 7, { 20, 30, 40, 55, 70 } },
+        { 70, 185, 25, { 70, 105, 140, 185, 230 } },
       } };
       return presets[static_cast<std::size_t>( unit )];
     }
@@ -114,6 +115,11 @@ namespace stillhead
     else
       limits.bandsPa = toPascals( preset.bands, units );
     return limits;
+  }
+
+  double usualRegulatorMarginPa( const DisplayUnits &units )
+  {
+    return units.pascals( presetFor( units.pressureUnit() ).regulatorMargin );
   }
 
 } // namespace stillhead

@@ -15,4 +15,7 @@ namespace stillhead
    */
   Limits readLimits( const ParameterValues &values, const DisplayUnits &units );
 
+  //! What LOCKUP_RISE and LEAST_DROP are where they are unset.
+  double usualRegulatorMarginPa( const DisplayUnits &units );
+
 } // namespace stillhead

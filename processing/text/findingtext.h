@@ -7,11 +7,23 @@
 #include "processing/reading/drawingreader.h"
 
 #include <QString>
+#include <QStringList>
 
 namespace stillhead
 {
 
-  QString findingText( const Finding &finding, const DrawnInput &drawn, const DisplayUnits &units );
+  //! How sources and devices are called in sentences.
+  struct FeedNames
+  {
+      QStringList sources; //!< one blank name for the single source
+      QStringList devices;
+  };
+
+  QString findingText(
+    const Finding &finding, const DrawnInput &drawn, const FeedNames &names, const DisplayUnits &units );
+
+  //! "mainlines feature 12" for a drawn line; blank for −1.
+  QString featureText( int line, const DrawnInput &drawn );
 
   //! `mainlines` or `laterals`.
   QString drawnLayerName( Role role );

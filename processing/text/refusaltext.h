@@ -6,10 +6,22 @@
 #include "processing/displayunits.h"
 
 #include <QString>
+#include <QStringList>
+
+#include <functional>
 
 namespace stillhead
 {
 
-  QString refusalText( const Refusal &refusal, double sourceReachM, const DisplayUnits &units );
+  //! How sources, devices and drawn lines are called in sentences.
+  struct RefusalNames
+  {
+      QStringList sources; //!< blank for the single source
+      QStringList devices;
+      std::function<QString( int line )> line;
+  };
+
+  QString refusalText(
+    const Refusal &refusal, const RefusalNames &names, double sourceReachM, const DisplayUnits &units );
 
 } // namespace stillhead

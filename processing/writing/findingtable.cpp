@@ -50,11 +50,12 @@ namespace stillhead
         }
         QgsAttributes attributes;
         attributes << QString::fromLatin1( findingName( finding.code ) )
-                   << findingText( finding, context.drawn, context.units ) << layer << fid
+                   << findingText( finding, context.drawn, context.names, context.units ) << layer << fid
                    << context.units.lengthValue( finding.gapM );
         features[i - first].setAttributes( attributes );
         if ( std::isfinite( finding.place.x ) && std::isfinite( finding.place.y ) )
-          features[i - first].setGeometry( QgsGeometry( std::make_unique<QgsPoint>( finding.place.x, finding.place.y ) ) );
+          features[i - first].setGeometry(
+            QgsGeometry( std::make_unique<QgsPoint>( finding.place.x, finding.place.y ) ) );
       }
     };
     return table;

@@ -8,10 +8,12 @@
 #include "processing/qgiscompat.h"
 #include "processing/reading/drawingreader.h"
 #include "processing/styles/resultstyle.h"
+#include "processing/text/findingtext.h"
 
 #include <qgsfeature.h>
 
 #include <functional>
+#include <vector>
 
 namespace stillhead
 {
@@ -37,6 +39,7 @@ namespace stillhead
       const PlanMeasure &measure;
       const DisplayUnits &units;
       const Limits &limits;
+      const FeedNames &names;
       const ResultStyle &style;
       double metresPerZ; //!< of the terrain: the unit of Z in geometries
 
@@ -67,6 +70,16 @@ namespace stillhead
 
   //! A point with Z and M that stays one although they may be no numbers.
   QgsGeometry pointZM( const PlanPoint &place, double z, double m );
+
+  //! A row of NODES: a node, and the device that stands there (−1: none; index into StaticResult::devices).
+  struct NodeRow
+  {
+      int node = -1;
+      int device = -1;
+  };
+
+  //! A device that passes water is one row, its outlet's; a closed valve two, one a side.
+  std::vector<NodeRow> nodeRows( const StaticResult &result );
 
   ResultTable spanTable( const ResultContext &context );
   ResultTable nodeTable( const ResultContext &context );

@@ -34,6 +34,8 @@ namespace stillhead
       fields.append( QgsField( field::PRESSURE_ZONE, compat::Field::Int ) );
       fields.append( QgsField( field::DOUBT, compat::Field::Double ) );
       fields.append( QgsField( field::CLOSE_CALL, compat::Field::Bool ) );
+      fields.append( QgsField( field::P_FAILED_OPEN, compat::Field::Double ) );
+      fields.append( QgsField( field::FAILED_OPEN_CAUSE, compat::Field::String ) );
       return fields;
     }
 
@@ -54,7 +56,28 @@ namespace stillhead
         }
     };
 
-    void appendOwn( QgsAttributes &attributes, const ResultContext &context, const SpanWords &words, std::size_t number )
+    //! The larger of the doubts of both cases.
+    double doubtOf( const ResultContext &context, const Piece &piece )
+    {
+      const Zone &zone = context.result.zones[static_cast<std::size_t>( piece.zone )];
+      return std::max( zone.doubtHighPa, zone.doubtLowPa );
+    }
+
+    void appendFailure( QgsAttributes &attributes, const ResultContext &context, const Piece &piece )
+    {
+      if ( context.result.failures.empty() || std::isnan( piece.pressureHighPa ) )
+      {
+        attributes << QVariant() << QVariant();
+        return;
+      }
+      const ZoneFailure &failure = context.result.failures[static_cast<std::size_t>( piece.zone )];
+      attributes << context.units.pressureValue(
+        context.units.specificWeightNPerM3() * ( failure.levelM - piece.lowestM ) );
+      attributes << ( failure.device < 0 ? QVariant() : QVariant( context.names.devices.value( failure.device ) ) );
+    }
+
+    void appendOwn(
+      QgsAttributes &attributes, const ResultContext &context, const SpanWords &words, std::size_t number )
     {
       const Piece &piece = context.result.pieces[number];
       const DrawnFeature &feature = context.featureOf( context.lineOf( piece ) );
@@ -73,9 +96,9 @@ namespace stillhead
       attributes << QVariant( piece.over );
       attributes << QVariant( piece.isShort );
       attributes << oneBased( piece.zone );
-      attributes << ( figures ? context.units.pressureValue( context.result.zones[static_cast<std::size_t>( piece.zone )].doubtPa )
-                              : QVariant() );
+      attributes << ( figures ? context.units.pressureValue( doubtOf( context, piece ) ) : QVariant() );
       attributes << QVariant( piece.closeCall );
+      appendFailure( attributes, context, piece );
     }
 
     QgsGeometry lineOf( const ResultContext &context, const std::vector<PieceVertex> &vertices )
@@ -116,7 +139,8 @@ namespace stillhead
     table.hasGaps = std::any_of( context.result.pieces.begin(), context.result.pieces.end(),
       []( const Piece &piece ) { return std::isnan( piece.pressureHighPa ); } );
     const SpanWords words( context );
-    table.make = [&context, words, width = table.fields.count()]( std::size_t first, std::size_t last, QgsFeature *features ) {
+    table.make = [&context, words, width = table.fields.count()](
+                   std::size_t first, std::size_t last, QgsFeature *features ) {
       std::vector<PieceVertex> vertices;
       for ( std::size_t i = first; i < last; ++i )
       {

@@ -31,7 +31,8 @@ namespace stillhead
         LocalPlane( const PlanPoint &origin, const GroundScale &scale )
           : mOrigin( origin )
           , mScale( scale )
-        {}
+        {
+        }
 
         double x( const PlanPoint &place ) const
         {
@@ -61,7 +62,8 @@ namespace stillhead
         explicit StretchLines( const LocalPlane &plane )
           : mPlane( plane )
           , mLines( std::make_unique<QgsMultiLineString>() )
-        {}
+        {
+        }
 
         void begin()
         {
