@@ -79,17 +79,17 @@ namespace stillhead
           mNow.needM = std::max( mNow.needM, needM );
         }
 
-        //! A regulator can stand no lower than \a elevationM here; its set pressure cannot be negative.
+        //! A regulator may stand at \a elevationM, if it can hold a level that suits all below.
         void stand( double elevationM )
         {
-          if ( elevationM < mNow.topM )
+          if ( elevationM + LEAST_SET_M <= mNow.topM )
             mNow.unregulated = std::min( mNow.unregulated, 1 + mNow.count );
         }
 
         void mend( double elevationM, Role role )
         {
           mNow.topM = std::min( mNow.topM, elevationM + mRules.standM( role ) );
-          mNow.unregulated = 1 + ( elevationM < mNow.topM ? mNow.count : mNow.unregulated );
+          mNow.unregulated = 1 + ( elevationM + LEAST_SET_M <= mNow.topM ? mNow.count : mNow.unregulated );
         }
 
         void noteBreak( const ForestPart &part, double elevationM )

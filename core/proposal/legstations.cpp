@@ -94,6 +94,19 @@ namespace stillhead
           return false;
         }
 
+        //! At an inner boundary; where the pipe jumps (a surveyed step) at its lower side.
+        void standBetween( std::size_t boundary, std::vector<Station> &stations ) const
+        {
+          const ForestPart *above = boundary > 0 ? &mLeg.segments[boundary - 1] : nullptr;
+          const ForestPart *below = boundary < mLeg.segments.size() ? &mLeg.segments[boundary] : nullptr;
+          const bool useAbove =
+            above && above->known && !( below && below->known && below->elevation.from <= above->elevation.to );
+          if ( useAbove )
+            stations.push_back( { boundary, above->toM, above->elevation.to, above->zone, above->role } );
+          else if ( below && below->known )
+            stations.push_back( { boundary, below->fromM, below->elevation.from, below->zone, below->role } );
+        }
+
         //! Stubs near joints are not judged: a regulator within one is written at the stub's end.
         void collect()
         {
@@ -110,12 +123,8 @@ namespace stillhead
               first = hint ? i : first;
             else if ( at >= mToM )
               last = hint && last == count ? i : last;
-            else if ( i < count && mLeg.segments[i].known )
-              inside.push_back(
-                { i, alongM, mLeg.segments[i].elevation.from, mLeg.segments[i].zone, mLeg.segments[i].role } );
-            else if ( i > 0 && mLeg.segments[i - 1].known )
-              inside.push_back( { i, alongM, mLeg.segments[i - 1].elevation.to, mLeg.segments[i - 1].zone,
-                mLeg.segments[i - 1].role } );
+            else
+              standBetween( i, inside );
           }
           stationAt( mLimb.standFromM, first, mLeg.stations );
           mLeg.stations.insert( mLeg.stations.end(), inside.begin(), inside.end() );

@@ -44,7 +44,7 @@ namespace stillhead
       LevelSet feeds;
       for ( LevelRange range : outlets.ranges() )
       {
-        range.lowM = std::max( range.lowM, place.elevationM );
+        range.lowM = std::max( range.lowM, place.elevationM + LEAST_SET_M );
         // Where any level will do no regulator is wanted.
         if ( range.isEmpty() || range.highM == ANY_LEVEL_M )
           continue;
@@ -72,7 +72,7 @@ namespace stillhead
       LevelSet feeds;
       for ( const LevelRange &range : outlets.ranges() )
       {
-        const double lowM = std::max( range.lowM, place.elevationM );
+        const double lowM = std::max( range.lowM, place.elevationM + LEAST_SET_M );
         if ( range.highM < ANY_LEVEL_M && lowM <= range.highM )
           feeds.unite( { lowM, ANY_LEVEL_M } );
       }
@@ -89,11 +89,10 @@ namespace stillhead
   LevelRange outletRange( const StandPlace &place, const StaticLevels &inlet, bool keep, const ProposalRules &rules )
   {
     const double e = place.elevationM;
-    if ( !keep )
-      return { e, inlet.lowM };
-    if ( rules.mostRatio <= 0.0 )
-      return { e, inlet.lowM - rules.dropM() };
-    return { std::max( e, e + ( inlet.highM - e ) / rules.mostRatio ), inlet.lowM - rules.dropM() };
+    LevelRange range { e + LEAST_SET_M, inlet.lowM - ( keep ? rules.dropM() : 0.0 ) };
+    if ( keep && rules.mostRatio > 0.0 )
+      range.lowM = std::max( range.lowM, e + ( inlet.highM - e ) / rules.mostRatio );
+    return range;
   }
 
   Outlet bestOutlet( const StandPlace &place, const LevelSet &levels, const LevelRange &range, bool keepStep,

@@ -10,6 +10,9 @@ namespace stillhead
   //! Two levels nearer than this are one; the judging of pipe allows more (EQUAL_TO_LIMIT of a pressure).
   constexpr double SAME_LEVEL_M = EQUAL_LEVEL_M;
 
+  //! A set pressure is at least this height of water: a regulator set to nothing is a closed valve.
+  constexpr double LEAST_SET_M = 0.01;
+
   struct ProposalRules
   {
       Limits limits;
