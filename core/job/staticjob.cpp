@@ -103,7 +103,7 @@ namespace stillhead
           SourceReport &report = mResult.source;
           const std::optional<NearestPipe> pipe =
             nearestPipe( mResult.drawing, *mJob.measure, source.place, mJob.joins.toleranceM );
-          if ( !pipe || pipe->distanceM > mJob.sourceReachM )
+          if ( !pipe || !( pipe->distanceM <= mJob.sourceReachM ) )
             throw Refusal { Refusal::Reason::SourceTooFar, pipe ? pipe->distanceM : NOT_A_FIGURE };
           report.on = pipe->on;
           report.distanceM = pipe->distanceM;
