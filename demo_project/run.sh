@@ -100,7 +100,7 @@ write_desktop_profile()
 {
   local folder="$session/desktop/profiles/default/QGIS"
   mkdir -p "$folder"
-  if [ ! -f "$folder/QGIS3.ini" ]; then
+  if ! grep -qsF "searchPathsForPlugins=$build/plugins" "$folder/QGIS3.ini"; then
     cat > "$folder/QGIS3.ini" << INI
 [app]
 news_feed\\disabled=true
