@@ -107,6 +107,7 @@ def lowest_on_kite_hill():
         "point_n( $geometry, array_find( @heights, array_max( @heights ) ) + 1 ) )")
     label.placement = QgsPalLayerSettings.OrderedPositionsAroundPoint
     label.dist = 3.5
+    label.displayAll = True
     label.priority = 9
     layer.setLabeling(QgsVectorLayerSimpleLabeling(label))
     layer.setLabelsEnabled(True)

@@ -1,6 +1,7 @@
 # SPDX-License-Identifier: GPL-2.0-or-later
 # The map sheet of the demo park: an A3 print layout with map, legend in plain words, scale, north, what was read where,
 # and the cautions. Its texts come from the run itself, so the sheet never says what the run did not find.
+import datetime
 import json
 import os
 import textwrap
@@ -8,7 +9,7 @@ import textwrap
 from qgis.core import (
     QgsLayoutItemLabel, QgsLayoutItemLegend, QgsLayoutItemMap, QgsLayoutItemPolygon, QgsLayoutItemScaleBar,
     QgsLayoutPoint, QgsLayoutSize, QgsLegendRenderer, QgsLegendStyle, QgsMapLayerLegendUtils,
-    QgsPrintLayout, QgsRectangle, QgsFillSymbol, QgsUnitTypes)
+    QgsMarkerSymbol, QgsPrintLayout, QgsRectangle, QgsFillSymbol, QgsUnitTypes)
 from qgis.PyQt.QtCore import QPointF, QRectF, QSizeF, Qt
 from qgis.PyQt.QtGui import QColor, QFont, QPolygonF
 
@@ -104,7 +105,7 @@ def add(project):
     label(layout, "reading", "", QRectF(10, 255, 95, 38), 7.5)
     label(layout, "summary title", "Answer", QRectF(110, 250, 150, 5), 9.0, True)
     label(layout, "summary", "", QRectF(110, 255, 150, 38), 7.5)
-    label(layout, "caution title", "Mind", QRectF(265, 250, 145, 5), 9.0, True)
+    label(layout, "caution title", "Please note", QRectF(265, 250, 145, 5), 9.0, True)
     label(layout, "caution", "", QRectF(265, 255, 145, 38), 7.5)
     project.layoutManager().addLayout(layout)
     fill(layout, project)
@@ -130,20 +131,34 @@ def fill_texts(layout, run):
         f"Static level: elevation {found['STATIC_LEVEL_HIGH']:.1f} ft high case, {found['STATIC_LEVEL_LOW']:.1f} ft low case.",
         "Ground: terrain.tif, bare earth as supplied, 1 m cells, heights in feet. Cover 2 ft over mainlines, 1 ft over "
         "laterals.",
-        f"Terrain error {given['TERRAIN_RMSE']} ft, reading ± {given['READING_ERROR']} psi.")))
+        f"Terrain error {given['TERRAIN_RMSE']} ft, reading ± {given['READING_ERROR']} psi.",
+        f"Stillhead {run['provider_details']['version']}, {datetime.date.today().isoformat()}. Screening, not a design for "
+        "water that runs.")))
     layout.itemById("summary").setText(answer)
     layout.itemById("caution").setText("\n".join(cautions + [COLOUR_NOTE]))
+
+
+def in_place(symbol):
+    """A point symbol without the offset that it has on the map; nothing for others."""
+    if not isinstance(symbol, QgsMarkerSymbol):
+        return None
+    symbol = symbol.clone()
+    for part in symbol.symbolLayers():
+        part.setOffset(QPointF())
+    return symbol
 
 
 def add_to_legend(legend, layer, title, shown, size=QSizeF()):
     """Adds the nodes of a layer's legend that `shown` names, under a title, wrapped to the width of the strip."""
     node = legend.model().rootGroup().addLayer(layer)
     texts = [each.data(0) for each in layer.legend().createLayerTreeModelLegendNodes(node)]
+    items = layer.renderer().legendSymbolItems()
     order = [index for index, text in enumerate(texts) if shown(text)]
     QgsMapLayerLegendUtils.setLegendNodeOrder(node, order)
     for index in order:
         QgsMapLayerLegendUtils.setLegendNodeUserLabel(node, index, textwrap.fill(texts[index], LEGEND_WIDTH))
         QgsMapLayerLegendUtils.setLegendNodeSymbolSize(node, index, size)
+        QgsMapLayerLegendUtils.setLegendNodeCustomSymbol(node, index, in_place(items[index].symbol()))
     node.setCustomProperty("legend/title-label", title)
     QgsLegendRenderer.setNodeLegendStyle(node, QgsLegendStyle.Subgroup if title else QgsLegendStyle.Hidden)
     legend.model().refreshLayerLegend(node)

@@ -89,7 +89,7 @@ main_job()
     --MAINS="park/planning.gpkg|layername=mainlines" --LATERALS="park/planning.gpkg|layername=laterals" \
     --TERRAIN=park/terrain.tif \
     --SOURCE="320040,110380 [EPSG:32631]" --SOURCE_KIND=0 --SOURCE_VALUE=71 --SOURCE_LOW=62 --GAUGE_HEIGHT=2.5 \
-    --SOURCE_NOTE="Lamp Row meter, gauge on the test cock behind it; 71 psi at night, 62 psi at the summer peak" \
+    --SOURCE_NOTE="Lamp Row meter, gauge on the test cock behind it: 71 psi on 13 January 2026, 5 am, 62 psi on 14 July 2026, 7 pm" \
     --LEAST=30 --MOST=80 --BANDS=30,45,60,80,100 --TERRAIN_RMSE=0.3 --READING_ERROR=1 \
     --SPANS="$( sink spans )" --NODES="$( sink nodes )" --STRETCHES="$( sink stretches )" \
     --EXTREMES="$( sink extremes )" --FINDINGS="$( sink findings )" --SURFACE=out/surface.tif > out/run.json
@@ -100,7 +100,7 @@ write_desktop_profile()
 {
   local folder="$session/desktop/profiles/default/QGIS"
   mkdir -p "$folder"
-  if [ ! -f "$folder/QGIS3.ini" ]; then
+  if ! grep -qsF "searchPathsForPlugins=$build/plugins" "$folder/QGIS3.ini"; then
     cat > "$folder/QGIS3.ini" << INI
 [app]
 news_feed\\disabled=true

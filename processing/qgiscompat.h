@@ -339,4 +339,14 @@ namespace stillhead::compat
 #endif
   }
 
+  //! Labels are moved apart where there is room and overlap where there is none, but none is left out.
+  inline void keepEveryLabel( QgsPalLayerSettings &settings )
+  {
+#if _QGIS_VERSION_INT >= 32600
+    settings.placementSettings().setOverlapHandling( Qgis::LabelOverlapHandling::AllowOverlapIfRequired );
+#else
+    settings.displayAll = true;
+#endif
+  }
+
 } // namespace stillhead::compat

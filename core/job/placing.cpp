@@ -85,7 +85,7 @@ namespace stillhead
   {
     const Source &source = mJob.sources[static_cast<std::size_t>( number )];
     const auto pipe = nearestPipe( mDrawing, *mJob.measure, source.place, source.system, mJob.joins.toleranceM );
-    if ( !pipe || pipe->distanceM > mJob.sourceReachM )
+    if ( !pipe || !( pipe->distanceM <= mJob.sourceReachM ) )
       throw Refusal { Refusal::Reason::SourceTooFar, pipe ? pipe->distanceM : NOT_A_FIGURE, { number }, {}, {} };
     SourceReport report;
     report.on = pipe->on;

@@ -42,6 +42,24 @@ namespace stillhead
     return cuts;
   }
 
+  namespace
+  {
+    //! A piece with figures has an elevation at every vertex: up to a millimetre without one at its ends takes that beside it.
+    void fillEnds( std::vector<ProfileVertex> &vertices, std::size_t first )
+    {
+      for ( std::size_t i = first + 1; i < vertices.size(); ++i )
+      {
+        if ( std::isnan( vertices[i].elevationM ) )
+          vertices[i].elevationM = vertices[i - 1].elevationM;
+      }
+      for ( std::size_t i = vertices.size() - 1; i > first; --i )
+      {
+        if ( std::isnan( vertices[i - 1].elevationM ) )
+          vertices[i - 1].elevationM = vertices[i].elevationM;
+      }
+    }
+  } // namespace
+
   LineOutcome LineJudge::judge( std::size_t number, std::vector<double> &nodeElevationsM )
   {
     const CanonicalLine &line = mInput.drawing.lines[number];
@@ -74,6 +92,8 @@ namespace stillhead
       const double *const last = std::lower_bound( first, drawnM + line.count, piece.toM );
       appendDrawnProfile(
         mProfile, piece.fromM, piece.toM, first, static_cast<std::size_t>( last - first ), outcome.vertices );
+      if ( !std::isnan( piece.pressureHighPa ) )
+        fillEnds( outcome.vertices, piece.firstVertex );
       piece.vertexCount = static_cast<unsigned>( outcome.vertices.size() ) - piece.firstVertex;
       outcome.pieces.push_back( piece );
     }

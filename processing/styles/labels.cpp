@@ -38,6 +38,7 @@ namespace stillhead
     settings.placement = compat::LabelPlacement::OrderedPositionsAroundPoint;
     settings.dist = 3.5;
     settings.priority = 10;
+    compat::keepEveryLabel( settings );
     auto *callout = new QgsSimpleLineCallout();
     callout->setEnabled( true );
     callout->setMinimumLength( 5.0 );
@@ -51,7 +52,7 @@ namespace stillhead
     QgsPalLayerSettings settings;
     settings.drawLabels = false;
     settings.obstacleSettings().setIsObstacle( true );
-    settings.obstacleSettings().setFactor( 2.0 );
+    settings.obstacleSettings().setFactor( 1.0 );
     layer.setLabeling( new QgsVectorLayerSimpleLabeling( settings ) );
     layer.setLabelsEnabled( true );
   }

@@ -1,7 +1,8 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
 // The colours and casing widths of the pressure bands: light and narrow for low pressure, dark and wide for high, so
-// that lightness and width carry the order without hue. Our own ramp; tests/processing/testpalette.cpp checks it in
-// grey and as simulated for three kinds of colour vision.
+// that lightness and width carry the order without hue. Our own ramp. How it was checked, and is again on every run
+// (tests/processing/styles/testpalette.cpp): lightness L* is 84, 72, 61, 50, 38, 20, steps of 10 or more in grey print;
+// as simulated for protan, deutan and tritan sight the nearest two bands stay 11.9 apart (CIE 1976), 15.6 in normal sight.
 #pragma once
 
 #include <QColor>

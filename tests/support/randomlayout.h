@@ -3,8 +3,10 @@
 // cross, double, close on themselves and come in several systems.
 #pragma once
 
+#include "tests/support/memoryterrain.h"
 #include "tests/support/networksketch.h"
 
+#include <cmath>
 #include <random>
 
 namespace stillhead::test
@@ -18,6 +20,7 @@ namespace stillhead::test
       int stride = 6;       //!< a leg leads no farther than this many places along each axis
       double jitterM = 0.0; //!< ends miss their place by up to this, each way
       bool systems = false;
+      bool duplicates = true; //!< now and then a line is drawn twice
   };
 
   class RandomLayout
@@ -72,10 +75,36 @@ namespace stillhead::test
           if ( legs > 1 && chance( 0.15 ) )
             vertices.push_back( vertices.front() );
           addLine( drawing, vertices, line );
-          if ( chance( 0.05 ) )
+          if ( options.duplicates && chance( 0.05 ) )
             addLine( drawing, vertices, line );
         }
         return drawing;
+      }
+
+      /**
+       * Hills of a few metres around 100 m over the whole layout and some metres beyond, in pixels of \a pixelM with a roughness
+       * of their own and \a holes groups of pixels without elevation.
+       */
+      MemoryTerrain hills( const LayoutOptions &options, double pixelM, int holes )
+      {
+        const double extent = options.gridM * ( options.places - 1 ) + 10.0;
+        const int side = static_cast<int>( extent / pixelM ) + 2;
+        const double waves[] { between( 0.05, 0.2 ), between( 0.05, 0.2 ), between( 0.0, 6.0 ), between( 0.0, 6.0 ) };
+        const double height = between( 2.0, 15.0 );
+        const double roughness = between( 0.0, 1.0 );
+        MemoryTerrain terrain =
+          MemoryTerrain::sampled( side, side, centresAt( -5.0, extent - 5.0, pixelM ), [&]( double x, double y ) {
+            return 100.0 + height * std::sin( waves[0] * x + waves[2] ) * std::cos( waves[1] * y + waves[3] )
+              + between( -roughness, roughness );
+          } );
+        for ( int i = 0; i < holes; ++i )
+        {
+          const int column = whole( 0, side - 3 );
+          const int row = whole( 0, side - 3 );
+          for ( int k = 0; k < 4; ++k )
+            terrain.set( column + k % 2, row + k / 2, NODATA );
+        }
+        return terrain;
       }
 
     private:

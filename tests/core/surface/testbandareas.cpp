@@ -375,7 +375,7 @@ void TestBandAreas::anyRaster()
   QFETCH( bool, whole );
   std::mt19937 random( 7 );
   std::uniform_real_distribution<double> unit( 0.0, 1.0 );
-  for ( int run = 0; run < 10; ++run )
+  for ( int run = 0; run < 4; ++run )
   {
     std::vector<double> pressures;
     for ( int i = 0; i < columns * rows; ++i )
