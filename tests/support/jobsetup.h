@@ -42,9 +42,10 @@ namespace stillhead::test
         : drawing( drawn )
         , terrain( std::make_unique<MemoryTerrain>( 2, 2, std::vector<double>( 4, 0.0 ), centresAt( -1e6, 1e6, 2e6 ) ) )
       {
-        job.source.kind = SourceKind::WaterLevel;
-        job.source.high = 100.0;
-        job.source.low = 100.0;
+        job.sources.resize( 1 );
+        job.sources.front().kind = SourceKind::WaterLevel;
+        job.sources.front().high = 100.0;
+        job.sources.front().low = 100.0;
         job.specificWeightNPerM3 = EXACT_N_PER_M3;
         setLimits( 20000.0, 60000.0 );
         job.threads = 1;
@@ -65,8 +66,8 @@ namespace stillhead::test
 
       void setLevels( double highM, double lowM )
       {
-        job.source.high = highM;
-        job.source.low = lowM;
+        job.sources.front().high = highM;
+        job.sources.front().low = lowM;
       }
 
       StaticResult solve( Monitor &monitor )
@@ -236,7 +237,7 @@ namespace stillhead::test
     for ( const double value : { totals.lengthM, totals.withinM, totals.overM, totals.shortM, totals.noSourceM,
             totals.noTerrainM, totals.closeCallM, totals.lowestPa, totals.highestPa } )
       sums += " " + bits( value );
-    rows << sums << "levels " + bits( result.source.levels.highM ) + " " + bits( result.source.levels.lowM );
+    rows << sums << "levels " + bits( result.sources.front().levels.highM ) + " " + bits( result.sources.front().levels.lowM );
     rows.sort();
     return rows;
   }

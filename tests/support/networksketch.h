@@ -217,10 +217,13 @@ namespace stillhead::test
     Joined result;
     Monitor monitor;
     result.drawing = canonicalDrawing( drawing, measure, threads, result.findings, monitor );
-    std::optional<SourcePlace> sourcePlace;
+    std::vector<PlaceOnLine> places;
     if ( source )
-      sourcePlace = SourcePlace { nearestPipe( result.drawing, measure, *source, options.toleranceM )->on };
-    result.network = joinLines( result.drawing, measure, options, sourcePlace, threads, result.findings, monitor );
+      places.push_back( nearestPipe( result.drawing, measure, *source, 0, options.toleranceM )->on );
+    std::vector<int> nodes;
+    result.network = joinLines( result.drawing, measure, options, places, nodes, threads, result.findings, monitor );
+    for ( const int node : nodes )
+      result.network.nodes[static_cast<std::size_t>( node )].kind = NodeKind::Source;
     return result;
   }
 

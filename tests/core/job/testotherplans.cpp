@@ -58,7 +58,7 @@ namespace
     setup.terrain =
       std::make_unique<MemoryTerrain>( random.hills( layoutOptions(), 2.0, static_cast<int>( seed % 3 ) ) );
     setup.setLevels( 112.0, 110.0 );
-    setup.job.source.place = setup.drawing.vertices.front();
+    setup.job.sources.front().place = setup.drawing.vertices.front();
     setup.job.specificWeightNPerM3 = 9797.85;
     setup.setLimits( 40000.0, 120000.0 );
     setup.job.limits.bandsPa = { 40000.0, 80000.0, 120000.0 };
@@ -111,7 +111,7 @@ void TestOtherPlans::farAway()
     const PlanPoint shift { 612345.6875, 4567890.3125 };
     for ( PlanPoint &p : setup.drawing.vertices )
       p = { p.x + shift.x, p.y + shift.y };
-    setup.job.source.place = setup.drawing.vertices.front();
+    setup.job.sources.front().place = setup.drawing.vertices.front();
     std::array<double, 6> placement = setup.terrain->grid().geoTransform();
     placement[0] += shift.x;
     placement[3] += shift.y;
@@ -144,7 +144,7 @@ void TestOtherPlans::turnedAndInFeet()
       p = { ( map.matrix.yy * x - map.matrix.xy * y ) / determinant,
         ( map.matrix.xx * y - map.matrix.yx * x ) / determinant };
     }
-    setup.job.source.place = setup.drawing.vertices.front();
+    setup.job.sources.front().place = setup.drawing.vertices.front();
     const test::FixedScaleMeasure measure( map.matrix );
     setup.job.measure = &measure;
     setup.job.planToTerrain = &map;

@@ -37,11 +37,11 @@ namespace
         setup.terrain =
           std::make_unique<MemoryTerrain>( random.hills( options, random.between( 0.7, 3.0 ), random.whole( 0, 3 ) ) );
         setup.terrain->setBlock( 8 );
-        setup.job.source.place = besideALeg( random );
+        setup.job.sources.front().place = besideALeg( random );
         const double level = random.between( 98.0, 112.0 );
         // Now and then the cases lie farther apart than the limits: over in the one, under in the other.
         setup.setLevels( level, level - ( seed % 5 == 1 ? random.between( 8.0, 12.0 ) : random.between( 0.0, 3.0 ) ) );
-        setup.job.source.kind = SourceKind::WaterLevel;
+        setup.job.sources.front().kind = SourceKind::WaterLevel;
         setup.job.sourceReachM = 1000.0;
         setup.job.specificWeightNPerM3 = 9797.85;
         setup.setLimits( 20000.0, 90000.0 );
@@ -71,9 +71,9 @@ namespace
         BruteJob job;
         job.drawing = &setup.drawing;
         job.terrain = setup.terrain.get();
-        job.source = setup.job.source.place;
-        job.levelHighM = setup.job.source.high;
-        job.levelLowM = *setup.job.source.low;
+        job.source = setup.job.sources.front().place;
+        job.levelHighM = setup.job.sources.front().high;
+        job.levelLowM = *setup.job.sources.front().low;
         job.limits = setup.job.limits;
         job.specificWeightNPerM3 = setup.job.specificWeightNPerM3;
         job.doubtPa = setup.job.readingErrorPa;
@@ -199,7 +199,7 @@ void TestRandomLayouts::sameBitsFromAnyNumberOfThreadsAndCache()
   JobSetup setup( random.drawing( options ) );
   setup.terrain = std::make_unique<MemoryTerrain>( random.hills( options, 2.5, 20 ) );
   setup.terrain->setBlock( 16 );
-  setup.job.source.place = { 200.0, 200.0 };
+  setup.job.sources.front().place = { 200.0, 200.0 };
   setup.job.sourceReachM = 1000.0;
   setup.setLevels( 110.0, 107.0 );
   setup.setLimits( 2000.0, 9000.0 );

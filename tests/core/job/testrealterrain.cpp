@@ -33,9 +33,9 @@ namespace
     setup.terrain = std::make_unique<MemoryTerrain>( test::realTerrain( terrain.toStdString() ) );
     setup.terrain->setBlock( 32 );
     setup.job.specificWeightNPerM3 = test::CONVENTIONAL_N_PER_M3;
-    setup.job.source.kind = SourceKind::WaterLevel;
+    setup.job.sources.front().kind = SourceKind::WaterLevel;
     setup.job.sourceReachM = 10.0;
-    setup.job.source.place = drawing.vertices.front();
+    setup.job.sources.front().place = drawing.vertices.front();
     return setup;
   }
 
@@ -223,7 +223,7 @@ void TestRealTerrain::states()
   JobSetup setup = realJob( terrain, drawingOf( QTest::currentDataTag() ) );
   const bool olinda = terrain.startsWith( "olinda" );
   // Water that stands amid the hill, so that all states but no terrain occur: below it pressure in plenty, above none.
-  setup.job.source.place = lowestVertex( setup.drawing, *setup.terrain );
+  setup.job.sources.front().place = lowestVertex( setup.drawing, *setup.terrain );
   Range ground;
   for ( const PlanPoint &p : setup.drawing.vertices )
   {
@@ -240,12 +240,12 @@ void TestRealTerrain::states()
   BruteJob job;
   job.drawing = &setup.drawing;
   job.terrain = setup.terrain.get();
-  job.source = setup.job.source.place;
-  job.levelHighM = setup.job.source.high;
-  job.levelLowM = *setup.job.source.low;
+  job.source = setup.job.sources.front().place;
+  job.levelHighM = setup.job.sources.front().high;
+  job.levelLowM = *setup.job.sources.front().low;
   job.limits = setup.job.limits;
   job.specificWeightNPerM3 = weight;
-  job.doubtPa = result.zones[0].doubtPa;
+  job.doubtPa = result.zones[0].doubtHighPa;
   job.stepM = olinda ? 5.0 : 0.25;
   const BruteForce brute( job );
   std::map<State, int> compared;

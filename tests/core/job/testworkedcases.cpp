@@ -51,8 +51,8 @@ namespace
   double pressureFromReading( double readingPa, double fromM, double toM )
   {
     JobSetup setup = pipeBetween( fromM, toM );
-    setup.job.source.kind = SourceKind::PressureReading;
-    setup.job.source.groundElevationM = fromM;
+    setup.job.sources.front().kind = SourceKind::PressureReading;
+    setup.job.sources.front().groundElevationM = fromM;
     setup.setLevels( readingPa, readingPa );
     return pressureAt( setup.solve(), 100, 0 );
   }
@@ -99,8 +99,8 @@ namespace
     JobSetup setup( drawing );
     setup.terrain = std::make_unique<MemoryTerrain>( MemoryTerrain::sampled(
       561, 21, test::centresAt( -10, 10, 1 ), []( double x, double ) { return 58.0 - 0.05 * x; } ) );
-    setup.job.source.kind = SourceKind::PressureReading;
-    setup.job.source.gaugeHeightM = 0.9;
+    setup.job.sources.front().kind = SourceKind::PressureReading;
+    setup.job.sources.front().gaugeHeightM = 0.9;
     setup.setLevels( 690000.0, 620000.0 );
     setup.job.specificWeightNPerM3 = CONVENTIONAL_N_PER_M3;
     setup.setLimits( 200000.0, 550000.0 );
@@ -251,8 +251,8 @@ void TestWorkedCases::elevationWhereAPressureStands()
   QFETCH( double, psi );
   QFETCH( double, elevationFt );
   JobSetup setup = pipeBetween( 450 * FOOT, 700 * FOOT );
-  setup.job.source.kind = SourceKind::PressureReading;
-  setup.job.source.groundElevationM = 500 * FOOT;
+  setup.job.sources.front().kind = SourceKind::PressureReading;
+  setup.job.sources.front().groundElevationM = 500 * FOOT;
   setup.setLevels( 70 * PSI, 70 * PSI );
   setup.setLimits( -1e6, 1e6 );
   setup.job.limits.bandsPa = { psi * PSI };
@@ -306,8 +306,8 @@ void TestWorkedCases::fallingPipeReachesItsLimit()
   setup.planar = PlanarMeasure( FOOT );
   setup.job.useLineZ = true;
   setup.job.specificWeightNPerM3 = CONVENTIONAL_N_PER_M3;
-  setup.job.source.kind = SourceKind::PressureReading;
-  setup.job.source.groundElevationM = 500 * FOOT;
+  setup.job.sources.front().kind = SourceKind::PressureReading;
+  setup.job.sources.front().groundElevationM = 500 * FOOT;
   setup.setLevels( 60 * PSI, 60 * PSI );
   setup.setLimits( 30 * PSI, 80 * PSI );
   const StaticResult result = setup.solve();
@@ -358,8 +358,8 @@ void TestWorkedCases::otterbankStations()
   const auto look = [&]( double alongM, double elevationM ) {
     if ( std::abs( alongM - station * FOOT ) > 1e-6 )
       return;
-    highPsi = CONVENTIONAL_N_PER_M3 * ( result.source.levels.highM - elevationM ) / PSI;
-    lowPsi = CONVENTIONAL_N_PER_M3 * ( result.source.levels.lowM - elevationM ) / PSI;
+    highPsi = CONVENTIONAL_N_PER_M3 * ( result.sources.front().levels.highM - elevationM ) / PSI;
+    lowPsi = CONVENTIONAL_N_PER_M3 * ( result.sources.front().levels.lowM - elevationM ) / PSI;
   };
   for ( const Piece &piece : result.pieces )
   {
@@ -435,10 +435,10 @@ void TestWorkedCases::otterbankCeilingAndFloor()
 void TestWorkedCases::callowayLevels()
 {
   const StaticResult result = calloway().solve();
-  STILLHEAD_NEAR( result.source.levels.lowM, 122.122, 0.51e-3 );
-  STILLHEAD_NEAR( result.source.levels.highM, 129.260, 0.51e-3 );
-  STILLHEAD_NEAR( result.source.terrainGroundM, 58.0, 1e-12 );
-  STILLHEAD_NEAR( result.source.usedGroundM, 58.0, 1e-12 );
+  STILLHEAD_NEAR( result.sources.front().levels.lowM, 122.122, 0.51e-3 );
+  STILLHEAD_NEAR( result.sources.front().levels.highM, 129.260, 0.51e-3 );
+  STILLHEAD_NEAR( result.sources.front().terrainGroundM, 58.0, 1e-12 );
+  STILLHEAD_NEAR( result.sources.front().usedGroundM, 58.0, 1e-12 );
 }
 
 void TestWorkedCases::callowayUnregulated()
@@ -450,11 +450,11 @@ void TestWorkedCases::callowayUnregulated()
   // Bottom: ground 31 m.
   STILLHEAD_NEAR( pressureAt( result, 540, 0 ) / 1000.0, 969.5, 0.51e-1 );
   STILLHEAD_NEAR( result.totals.highestPa / 1000.0, 969.5, 0.51e-1 );
-  STILLHEAD_NEAR( kPa( 540, result.source.levels.lowM ), 899.5, 0.51e-1 );
+  STILLHEAD_NEAR( kPa( 540, result.sources.front().levels.lowM ), 899.5, 0.51e-1 );
   // All of x 0 to 160 is over 550 kPa even by day.
-  STILLHEAD_NEAR( kPa( 0, result.source.levels.lowM ), 634.7, 0.51e-1 );
-  STILLHEAD_NEAR( kPa( 160, result.source.levels.lowM ), 713.2, 0.51e-1 );
-  STILLHEAD_NEAR( kPa( 160, result.source.levels.highM ), 783.2, 0.51e-1 );
+  STILLHEAD_NEAR( kPa( 0, result.sources.front().levels.lowM ), 634.7, 0.51e-1 );
+  STILLHEAD_NEAR( kPa( 160, result.sources.front().levels.lowM ), 713.2, 0.51e-1 );
+  STILLHEAD_NEAR( kPa( 160, result.sources.front().levels.highM ), 783.2, 0.51e-1 );
   QCOMPARE( result.pieces.size(), std::size_t( 1 ) );
   QVERIFY( result.pieces[0].state == State::OverLimit );
   STILLHEAD_NEAR( result.pieces[0].pressureLowPa / 1000.0, 634.7, 0.51e-1 );

@@ -96,7 +96,7 @@ void TestCutting::elevationsWithDoubt()
   Zone zone;
   zone.fed = true;
   zone.levels = { 150.0, 140.0 };
-  zone.doubtPa = 1000.0;
+  zone.doubtHighPa = zone.doubtLowPa = 1000.0;
   Limits limits;
   limits.leastPa = 20000.0;
   limits.mostPa = 50000.0;

@@ -30,7 +30,7 @@ namespace
     Zone zone;
     zone.fed = true;
     zone.levels = { highM, lowM };
-    zone.doubtPa = doubtPa;
+    zone.doubtHighPa = zone.doubtLowPa = doubtPa;
     return zone;
   }
 

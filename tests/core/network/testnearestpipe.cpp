@@ -24,7 +24,7 @@ namespace
     std::vector<Finding> findings;
     Monitor monitor;
     const CanonicalDrawing canonical = canonicalDrawing( drawing, measure, 1, findings, monitor );
-    const std::optional<NearestPipe> pipe = nearestPipe( canonical, measure, place, toleranceM );
+    const std::optional<NearestPipe> pipe = nearestPipe( canonical, measure, place, 0, toleranceM );
     if ( !pipe )
       return {};
     return { canonical.lines[static_cast<std::size_t>( pipe->on.line )].drawn, pipe->on.alongM, pipe->distanceM };
@@ -108,7 +108,7 @@ void TestNearestPipe::distanceIsOnTheGround()
 
 void TestNearestPipe::noPipe()
 {
-  QVERIFY( !stillhead::nearestPipe( CanonicalDrawing(), PlanarMeasure(), { 0, 0 }, 0.1 ) );
+  QVERIFY( !stillhead::nearestPipe( CanonicalDrawing(), PlanarMeasure(), { 0, 0 }, 0, 0.1 ) );
 }
 
 QTEST_APPLESS_MAIN( TestNearestPipe )
