@@ -71,9 +71,10 @@ qgis_process_program()
   command -v qgis_process.bin || command -v qgis_process
 }
 
+# It calls enabling an enabled package a failure.
 enable_package()
 {
-  "$( qgis_process_program )" plugins enable stillhead_headless
+  "$( qgis_process_program )" plugins enable stillhead_headless || true
 }
 
 sink()

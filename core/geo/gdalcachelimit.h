@@ -14,7 +14,13 @@ namespace stillhead
     public:
       static constexpr std::int64_t DEFAULT_BYTES = 64 << 20;
 
-      //! Jobs may overlap: the cache is given back when the last of them ends.
+      /**
+       * From now on no limit is set below \a bytes: for rasters whose single blocks are so large that a smaller cache would
+       * decode them again for every window. The cache is still never made larger than the host had it.
+       */
+      static void neverBelow( std::int64_t bytes );
+
+      //! Jobs may overlap: the largest limit counts, and the cache is given back when the last of them ends.
       explicit GdalCacheLimit( std::int64_t bytes = DEFAULT_BYTES );
       ~GdalCacheLimit();
       GdalCacheLimit( const GdalCacheLimit & ) = delete;

@@ -4,6 +4,7 @@
 
 #include "core/geo/crs.h"
 #include "core/geo/gdalband.h"
+#include "core/geo/gdalcachelimit.h"
 #include "core/geo/gdalerrors.h"
 
 #include <mutex>
@@ -63,6 +64,9 @@ namespace stillhead
 
   namespace
   {
+    // Two readers and one to spare keep such a block at hand.
+    constexpr std::int64_t BLOCKS_AT_HAND = 3;
+
     std::string bandsText( int count )
     {
       return count == 1 ? "1 band" : std::to_string( count ) + " bands";
@@ -181,6 +185,8 @@ namespace stillhead
     mGrid = gridOrRefuse( dataset.get() );
     const GDALRasterBandH handle = GDALGetRasterBand( dataset.get(), band );
     GDALGetBlockSize( handle, &mBlockColumns, &mBlockRows );
+    GdalCacheLimit::neverBelow(
+      BLOCKS_AT_HAND * mBlockColumns * mBlockRows * GDALGetDataTypeSizeBytes( GDALGetRasterDataType( handle ) ) );
     mCrsDefinition = crsOf( dataset.get() );
     mHasCrs = !isPlaceholderCrs( mCrsDefinition );
     const char *unitText = GDALGetRasterUnitType( handle );

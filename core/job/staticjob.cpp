@@ -118,13 +118,13 @@ namespace stillhead
         //! Lines in the order of the tiles they begin in, so that neighbours are worked on while their terrain is at hand.
         std::vector<std::size_t> linesByTile() const
         {
-          std::vector<std::pair<std::pair<int, int>, std::size_t>> keys;
+          std::vector<std::pair<std::pair<double, double>, std::size_t>> keys;
           keys.reserve( mResult.drawing.lines.size() );
           for ( std::size_t i = 0; i < mResult.drawing.lines.size(); ++i )
           {
             const TerrainPoint pixel = pixelOf( mResult.drawing.vertices[mResult.drawing.lines[i].first] );
             const auto tile = [&]( double position, int size ) {
-              return std::isfinite( position ) ? static_cast<int>( std::floor( position / size ) ) : 0;
+              return std::isfinite( position ) ? std::floor( position / size ) : 0.0;
             };
             keys.push_back(
               { { tile( pixel.y, mJob.terrain->tileRows() ), tile( pixel.x, mJob.terrain->tileColumns() ) }, i } );

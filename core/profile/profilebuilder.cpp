@@ -108,9 +108,10 @@ namespace stillhead
       return;
     }
     const double pixels = std::hypot( to.x - from.x, to.y - from.y );
-    const double pixelsPerMetre = toM > fromM ? pixels / ( toM - fromM ) : 0.0;
-    follow( a, b, from, to, fromM, toM, line.coverM, std::min( ALLOWED_PIXELS, ALLOWED_GROUND_M * pixelsPerMetre ), 0,
-      profile );
+    // A leg too short to have a ground length has no scale of its own; nothing on it lies off by more than rounding.
+    const double allowedPixels =
+      toM > fromM ? std::min( ALLOWED_PIXELS, ALLOWED_GROUND_M * pixels / ( toM - fromM ) ) : ALLOWED_PIXELS;
+    follow( a, b, from, to, fromM, toM, line.coverM, allowedPixels, 0, profile );
   }
 
   void ProfileBuilder::walkStraight(

@@ -45,7 +45,7 @@ def ours(tool, folder, terrain, low):
 def theirs(folder, terrain):
     result = os.path.join(folder, "theirs.tif")
     remove(result)
-    return timed(["gdal_calc.py", "-A", terrain, f"--outfile={result}", "--calc=1.4210290*(260.0-A)", "--type=Float32",
+    return timed(["gdal_calc.py", "-A", terrain, f"--outfile={result}", "--calc=1.4210580*(260.0-A)", "--type=Float32",
                   "--co=COMPRESS=DEFLATE", "--co=BIGTIFF=IF_SAFER", "--quiet"], os.path.join(folder, "theirs.log"))
 
 

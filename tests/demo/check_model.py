@@ -29,7 +29,8 @@ def run(build, folder):
     terrain, planning, table = (os.path.join(folder, name) for name in ("terrain.tif", "planning.gpkg", "options.csv"))
     subprocess.run([os.path.join(DEMO, "make_terrain.py"), terrain], check=True)
     subprocess.run([os.path.join(DEMO, "make_layers.py"), planning], check=True)
-    subprocess.run([program, "plugins", "enable", "stillhead_headless"], env=environment, check=True)
+    # Enabling an enabled package counts as a failure there.
+    subprocess.run([program, "plugins", "enable", "stillhead_headless"], env=environment, check=False)
     pipes = [f"--pressure_{option}:Pipe {option}={folder}/{option}.gpkg" for option in ("today", "lowered", "raised")]
     subprocess.run([program, "run", os.path.join(DEMO, "models", "supply_options.model3"),
                     f"--MAINS={planning}|layername=mainlines", f"--LATERALS={planning}|layername=laterals",

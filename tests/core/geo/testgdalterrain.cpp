@@ -658,31 +658,55 @@ void TestGdalTerrain::realTerrainInMetresAndFeet()
 
 void TestGdalTerrain::cacheLimitIsGivenBack()
 {
+  constexpr GIntBig MIB = 1 << 20;
   const std::int64_t before = GDALGetCacheMax64();
-  GDALSetCacheMax64( 500 << 20 );
+  GDALSetCacheMax64( 500 * MIB );
   {
-    const GdalCacheLimit outer( 64 << 20 );
-    QCOMPARE( GDALGetCacheMax64(), GIntBig( 64 << 20 ) );
+    const GdalCacheLimit outer( 64 * MIB );
+    QCOMPARE( GDALGetCacheMax64(), 64 * MIB );
     {
-      const GdalCacheLimit inner( 32 << 20 );
-      QCOMPARE( GDALGetCacheMax64(), GIntBig( 64 << 20 ) );
+      const GdalCacheLimit smaller( 32 * MIB );
+      QCOMPARE( GDALGetCacheMax64(), 64 * MIB );
+      const GdalCacheLimit larger( 80 * MIB );
+      QCOMPARE( GDALGetCacheMax64(), 80 * MIB );
     }
-    QCOMPARE( GDALGetCacheMax64(), GIntBig( 64 << 20 ) );
+    QCOMPARE( GDALGetCacheMax64(), 80 * MIB );
   }
-  QCOMPARE( GDALGetCacheMax64(), GIntBig( 500 << 20 ) );
+  QCOMPARE( GDALGetCacheMax64(), 500 * MIB );
 
-  GDALSetCacheMax64( 16 << 20 );
+  GDALSetCacheMax64( 16 * MIB );
   {
-    const GdalCacheLimit larger( 64 << 20 );
-    QCOMPARE( GDALGetCacheMax64(), GIntBig( 16 << 20 ) );
+    const GdalCacheLimit larger( 64 * MIB );
+    QCOMPARE( GDALGetCacheMax64(), 16 * MIB );
   }
-  GDALSetCacheMax64( 500 << 20 );
+  GDALSetCacheMax64( 500 * MIB );
   CPLSetConfigOption( "GDAL_CACHEMAX", "400" );
   {
-    const GdalCacheLimit meant( 64 << 20 );
-    QCOMPARE( GDALGetCacheMax64(), GIntBig( 500 << 20 ) );
+    const GdalCacheLimit meant( 64 * MIB );
+    QCOMPARE( GDALGetCacheMax64(), 500 * MIB );
   }
   CPLSetConfigOption( "GDAL_CACHEMAX", nullptr );
+
+  // A raster in one block of 32 MiB: three of them fit, in a job that runs and in later ones.
+  test::SmallRaster raster;
+  raster.columns = 4096;
+  raster.rows = 2048;
+  raster.bands = { {} };
+  raster.creationOptions = { "BLOCKYSIZE=2048", "COMPRESS=DEFLATE", "SPARSE_OK=TRUE" };
+  test::create( "/vsimem/terrain/block.tif", raster );
+  {
+    const GdalCacheLimit limit( 64 * MIB );
+    const GdalTerrain terrain( "/vsimem/terrain/block.tif" );
+    QCOMPARE( terrain.blockRows(), 2048 );
+    QCOMPARE( GDALGetCacheMax64(), 96 * MIB );
+  }
+  {
+    const GdalCacheLimit limit( 64 * MIB );
+    QCOMPARE( GDALGetCacheMax64(), 96 * MIB );
+    GdalCacheLimit::neverBelow( 9000 * MIB );
+    QCOMPARE( GDALGetCacheMax64(), 500 * MIB );
+  }
+  QCOMPARE( GDALGetCacheMax64(), 500 * MIB );
   GDALSetCacheMax64( before );
 }
 

@@ -69,6 +69,7 @@ class TestStaticJob : public QObject
     void pieceLinesWithoutFigures();
     void lineThatEndsAHairOffTheTerrain();
     void nodeFigures();
+    void terrainThatCannotBeRead();
 };
 
 void TestStaticJob::refused_data()
@@ -384,6 +385,39 @@ void TestStaticJob::nodeFigures()
     STILLHEAD_SAME( figures.pressureHighPa, fed ? 1000.0 * ( 100.0 - figures.elevationM ) : test::NODATA );
     STILLHEAD_SAME( figures.pressureLowPa, fed ? 1000.0 * ( 90.0 - figures.elevationM ) : test::NODATA );
     QCOMPARE( figures.state == State::NoSource, !fed );
+  }
+}
+
+void TestStaticJob::terrainThatCannotBeRead()
+{
+  struct BrokenTerrain : public MemoryTerrain
+  {
+      using MemoryTerrain::MemoryTerrain;
+      void read( int column, int row, int columns, int rows, double *elevationsM ) const override
+      {
+        if ( column > 0 )
+          throw std::runtime_error( "block 7 is damaged" );
+        MemoryTerrain::read( column, row, columns, rows, elevationsM );
+      }
+  };
+  Drawing drawing;
+  for ( int i = 0; i < 60; ++i )
+    test::addLine( drawing, { { 10.0 * i, 1.0 }, { 10.0 * i + 10.0, 1.0 } } );
+  JobSetup setup( drawing );
+  setup.terrain =
+    std::make_unique<BrokenTerrain>( 600, 3, std::vector<double>( 1800, 50.0 ), test::centresAt( 0, 2, 1 ) );
+  for ( const unsigned threads : { 1u, 4u } )
+  {
+    setup.job.threads = threads;
+    try
+    {
+      setup.solve();
+      QFAIL( "solved" );
+    }
+    catch ( const std::runtime_error &error )
+    {
+      QCOMPARE( error.what(), "block 7 is damaged" );
+    }
   }
 }
 

@@ -82,6 +82,7 @@ class TestProfileBuilder : public QObject
     void anotherCrs_data();
     void anotherCrs();
     void whereTheTransformFails();
+    void aLegWithoutGroundLengthIsSoonFollowed();
     void rotatedAndSouthUpTerrain_data();
     void rotatedAndSouthUpTerrain();
     void memoryIsReused();
@@ -248,6 +249,32 @@ void TestProfileBuilder::whereTheTransformFails()
   QVERIFY( nowhere.profile.knots() < 2000 );
   for ( std::size_t i = 0; i + 1 < nowhere.profile.knots(); ++i )
     QVERIFY( std::isnan( nowhere.profile.bendM[i] ) );
+}
+
+// Vertices that differ by less than the measure can tell: the leg has no length to be followed by, and rounding must not
+// send the builder down all its halvings (2²⁴ places).
+void TestProfileBuilder::aLegWithoutGroundLengthIsSoonFollowed()
+{
+  static int asked;
+  asked = 0;
+  const CurvedMap counting( []( const PlanPoint &p ) -> TerrainPoint {
+    ++asked;
+    return { p.x / 3.0 + 1e-5 * p.y * p.y, p.y * 0.7 };
+  } );
+  CanonicalDrawing drawing;
+  const double x = 10.1;
+  drawing.vertices = { { x, -1.3 }, { std::nextafter( x, 11.0 ), -1.3 }, { 20.0, -1.3 } };
+  drawing.alongM = { 0.0, 0.0, 9.9 };
+  CanonicalLine line;
+  line.count = 3;
+  line.lengthM = 9.9;
+  drawing.lines = { line };
+  const MemoryTerrain terrain = plane( 40, 3 );
+  TileCache cache( terrain );
+  Profile profile;
+  ProfileBuilder( drawing, counting, cache, false ).build( drawing.lines[0], profile );
+  STILLHEAD_SAME( profile.alongM.back(), 9.9 );
+  QVERIFY( asked < 200 );
 }
 
 using GeoTransform = std::array<double, 6>;
