@@ -30,10 +30,11 @@ namespace stillhead
       Quadratic elevation; //!< from its upstream to its downstream end
       int zone = 0;        //!< index into Forest::zones
       Role role = Role::Mainline;
-      bool known = true;   //!< has an elevation
-      bool served = false; //!< today the low case reaches it and is no less than LEAST
-      bool over = false;   //!< today the high case is above MOST
-      bool mend = false;   //!< over, and not excused: a proposal must bring it within MOST
+      bool known = true;      //!< has an elevation
+      bool served = false;    //!< today the low case reaches it and is no less than LEAST
+      bool leaveOver = false; //!< given up: to mend it would cut off pipe that is served by way of it
+      bool over = false;      //!< today the high case is above MOST
+      bool mend = false;      //!< over, and not excused: a proposal must bring it within MOST
 
       double lowestM() const { return std::min( elevation.from, elevation.to ); }
       double highestM() const { return std::max( elevation.from, elevation.to ); }

@@ -12,6 +12,7 @@ namespace stillhead
   {
     constexpr double STEPS_IN_A_WINDOW = 12.0; //!< stations for each height between LEAST and MOST − rise
     constexpr double MOST_STEPS_IN_A_PART = 32.0;
+    constexpr double SAME_SHARE = 1e-9;
 
     class LegCutter
     {
@@ -65,9 +66,13 @@ namespace stillhead
           for ( const double alongM : mBreaks )
             cutAt( alongM );
           cutAt( mLimb.standFromM );
+          cutAt( mLimb.standFromM + ( mLimb.standToM < mLimb.standFromM ? -1.0 : 1.0 ) * mRules.leastApartM() );
           cutAt( mLimb.standToM );
           std::sort( shares.begin(), shares.end() );
-          shares.erase( std::unique( shares.begin(), shares.end() ), shares.end() );
+          shares.erase(
+            std::unique( shares.begin(), shares.end(), []( double a, double b ) { return b - a < SAME_SHARE; } ),
+            shares.end() );
+          shares.back() = 1.0;
           for ( std::size_t i = 0; i + 1 < shares.size(); ++i )
             mLeg.segments.push_back( part.between( shares[i], shares[i + 1] ) );
         }
@@ -79,7 +84,7 @@ namespace stillhead
         }
 
         //! The station at \a alongM, if the pipe has an elevation there.
-        bool stationAt( double alongM, std::size_t boundary, std::vector<Station> &stations ) const
+        void standAt( double alongM, std::size_t boundary, std::vector<Station> &stations ) const
         {
           const double at = distance( alongM );
           for ( const ForestPart &part : mLeg.segments )
@@ -89,9 +94,8 @@ namespace stillhead
             const double share = part.toM != part.fromM ? ( alongM - part.fromM ) / ( part.toM - part.fromM ) : 0.0;
             stations.push_back(
               { boundary, alongM, part.elevation.at( std::clamp( share, 0.0, 1.0 ) ), part.zone, part.role } );
-            return true;
+            return;
           }
-          return false;
         }
 
         //! At an inner boundary; where the pipe jumps (a surveyed step) at its lower side.
@@ -107,11 +111,10 @@ namespace stillhead
             stations.push_back( { boundary, below->fromM, below->elevation.from, below->zone, below->role } );
         }
 
-        //! Stubs near joints are not judged: a regulator within one is written at the stub's end.
+        //! A regulator within the stub at a joint is written at the stub's end.
         void collect()
         {
           const std::size_t count = mLeg.segments.size();
-          std::size_t first = 0;
           std::size_t last = count;
           std::vector<Station> inside;
           for ( std::size_t i = 0; i <= count; ++i )
@@ -120,15 +123,15 @@ namespace stillhead
             const double at = distance( alongM );
             const bool hint = isBreak( alongM );
             if ( at <= mFromM )
-              first = hint ? i : first;
-            else if ( at >= mToM )
+              continue;
+            if ( at >= mToM )
               last = hint && last == count ? i : last;
             else
               standBetween( i, inside );
           }
-          stationAt( mLimb.standFromM, first, mLeg.stations );
+          standAt( mLimb.standFromM, 0, mLeg.stations );
           mLeg.stations.insert( mLeg.stations.end(), inside.begin(), inside.end() );
-          stationAt( mLimb.standToM, last, mLeg.stations );
+          standAt( mLimb.standToM, last, mLeg.stations );
         }
 
         void thin()
@@ -140,7 +143,7 @@ namespace stillhead
           {
             const Station &station = mLeg.stations[i];
             const bool wanted = isBreak( station.alongM ) || i + 1 == mLeg.stations.size();
-            while ( wanted && !kept.empty() && tooNear( kept.back(), station ) && !isBreak( kept.back().alongM ) )
+            while ( wanted && kept.size() > 1 && tooNear( kept.back(), station ) && !isBreak( kept.back().alongM ) )
               kept.pop_back();
             if ( kept.empty() || !tooNear( kept.back(), station ) )
               kept.push_back( station );

@@ -3,7 +3,7 @@
 // or to each other than may be written.
 #pragma once
 
-#include "core/proposal/fournumbers.h"
+#include "core/proposal/fewest.h"
 #include "core/proposal/marking.h"
 
 #include <vector>

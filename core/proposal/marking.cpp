@@ -14,6 +14,9 @@ namespace stillhead
     //! With less than this between LEAST and MOST − rise no setting serves sloping pipe: it would take a regulator every few steps.
     constexpr double LEAST_WINDOW_M = 0.01;
 
+    //! Pipe that stands no set pressure at all cannot be mended.
+    constexpr double LEAST_STAND_M = 10.0 * LEAST_SET_M;
+
     class Marker
     {
       public:
@@ -26,7 +29,6 @@ namespace stillhead
         MarkedForest run()
         {
           order();
-          hangOver();
           mMarked.children = Children( mMarked.forest.limbs );
           sweep();
           return std::move( mMarked );
@@ -46,7 +48,7 @@ namespace stillhead
             const ForestPart *part = firstPartOf( mGiven.limbs[static_cast<std::size_t>( limb )] );
             return part ? std::make_tuple( part->line, part->fromM, part->toM ) : std::make_tuple( -1, 0.0, 0.0 );
           };
-          std::vector<int> order;
+          std::vector<int> &order = mMarked.given;
           order.reserve( mGiven.limbs.size() );
           std::vector<Limb> &limbs = mMarked.forest.limbs;
           limbs.reserve( mGiven.limbs.size() );
@@ -64,33 +66,6 @@ namespace stillhead
           append( -1, -1 );
           for ( std::size_t i = 0; i < order.size(); ++i )
             append( order[i], static_cast<int>( i ) );
-        }
-
-        bool holdsARegulator( const Limb &limb ) const
-        {
-          if ( limb.loop )
-            return true;
-          const auto first = mGiven.parts.begin() + static_cast<std::ptrdiff_t>( limb.firstPart );
-          return std::any_of( first, first + static_cast<std::ptrdiff_t>( limb.partCount ),
-            []( const ForestPart &part ) { return part.known; } );
-        }
-
-        void hangOver()
-        {
-          std::vector<Limb> &limbs = mMarked.forest.limbs;
-          for ( Limb &limb : limbs )
-          {
-            if ( limb.parent < 0 )
-              continue;
-            const Limb &parent = limbs[static_cast<std::size_t>( limb.parent )];
-            if ( holdsARegulator( parent ) )
-              continue;
-            // Parents come first, so the parent already hangs on something that holds one.
-            limb.parent = parent.parent;
-            limb.wayM = std::max( parent.wayM, limb.wayM - parent.boostLowM );
-            limb.boostHighM += parent.boostHighM;
-            limb.boostLowM += parent.boostLowM;
-          }
         }
 
         void sweep()
@@ -165,17 +140,13 @@ namespace stillhead
             mMarked.forest.parts.push_back( part );
             return;
           }
-          const double overBelowM =
-            mGiven.zones[static_cast<std::size_t>( part.zone )].highM - mRules.mostM( part.role );
-          const double standM = mRules.standM( part.role );
-          const double windowM = standM - mRules.leastM( part.role );
-          const bool ownFault =
-            part.served && windowM < std::min( LEAST_WINDOW_M, part.highestM() - part.lowestM() ) - SAME_LEVEL_M;
-          const double mendFromM = behind.levelM - standM;
+          const double overBelow = overBelowM( part, mGiven, mRules );
+          const bool ownFault = part.leaveOver || hasNoWindow( part, mRules );
+          const double mendFromM = behind.levelM - mRules.standM( part.role );
 
           double shares[4] = { 0.0, 1.0, 1.0, 1.0 };
           int count = 1;
-          for ( const double cutM : { overBelowM, mendFromM } )
+          for ( const double cutM : { overBelow, mendFromM } )
           {
             if ( cutM > part.lowestM() + SAME_LEVEL_M && cutM < part.highestM() - SAME_LEVEL_M )
               shares[count++] = part.shareOf( cutM );
@@ -189,11 +160,11 @@ namespace stillhead
               continue;
             ForestPart piece = count == 1 ? part : part.between( shares[i], shares[i + 1] );
             const double middleM = 0.5 * ( piece.elevation.from + piece.elevation.to );
-            piece.over = middleM < overBelowM - SAME_LEVEL_M;
+            piece.over = middleM < overBelow - SAME_LEVEL_M;
             piece.mend = piece.over && !ownFault && middleM >= mendFromM - SAME_LEVEL_M;
             mAny = mAny || piece.mend;
             if ( piece.over && !piece.mend )
-              excuse( piece, ownFault ? own : behind );
+              excuse( piece, part.leaveOver ? Need() : ( ownFault ? own : behind ) );
             mMarked.forest.parts.push_back( piece );
           }
         }
@@ -202,8 +173,8 @@ namespace stillhead
         {
           std::vector<Excused> &all = mMarked.excused;
           const double lowestAtM = piece.elevation.from <= piece.elevation.to ? piece.fromM : piece.toM;
-          if ( !all.empty() && all.back().limb == mLimb && all.back().line == piece.line
-            && all.back().fromM == piece.toM )
+          if ( !all.empty() && all.back().limb == mLimb && all.back().loop == piece.leaveOver
+            && all.back().line == piece.line && all.back().fromM == piece.toM )
           {
             Excused &last = all.back();
             last.fromM = piece.fromM;
@@ -215,7 +186,8 @@ namespace stillhead
             }
             return;
           }
-          all.push_back( { mLimb, piece.line, piece.fromM, piece.toM, piece.lowestM(), lowestAtM, piece.role, need } );
+          all.push_back( { mLimb, piece.line, piece.fromM, piece.toM, piece.lowestM(), lowestAtM, piece.role, need,
+            piece.leaveOver } );
         }
 
         const Forest &mGiven;
@@ -237,6 +209,20 @@ namespace stillhead
     need.at = { part.line, part.elevation.from >= part.elevation.to ? part.fromM : part.toM };
     need.summit = !part.served;
     return need;
+  }
+
+  bool hasNoWindow( const ForestPart &part, const ProposalRules &rules )
+  {
+    const double standM = rules.standM( part.role );
+    if ( standM < LEAST_STAND_M )
+      return true;
+    const double windowM = standM - rules.leastM( part.role );
+    return part.served && windowM < std::min( LEAST_WINDOW_M, part.highestM() - part.lowestM() ) - SAME_LEVEL_M;
+  }
+
+  double overBelowM( const ForestPart &part, const Forest &forest, const ProposalRules &rules )
+  {
+    return forest.zones[static_cast<std::size_t>( part.zone )].highM - rules.mostM( part.role );
   }
 
   Need needAbove( const Limb &limb, Need within )

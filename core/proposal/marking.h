@@ -32,6 +32,12 @@ namespace stillhead
   //! What \a part itself needs, at its highest place; \a behind: something served lies behind it.
   Need needOf( const ForestPart &part, bool behind, const ProposalRules &rules );
 
+  //! True if no level mends \a part: LEAST and MOST less the rise leave nothing between them.
+  bool hasNoWindow( const ForestPart &part, const ProposalRules &rules );
+
+  //! Pipe of \a part below this elevation is over today.
+  double overBelowM( const ForestPart &part, const Forest &forest, const ProposalRules &rules );
+
   //! What a limb needs at its upstream end, given \a within, the largest need of its own pipe and behind it.
   Need needAbove( const Limb &limb, Need within );
 
@@ -45,13 +51,15 @@ namespace stillhead
       double lowestM = 0.0; //!< elevation of its lowest place
       double lowestAtM = 0.0;
       Role role = Role::Mainline;
-      Need need; //!< the largest that is too large for it
+      Need need;         //!< the largest that is too large for it
+      bool loop = false; //!< it was given up for a loop, not for one place's need
   };
 
   struct MarkedForest
   {
       Forest forest;
       Children children { {} };
+      std::vector<int> given;       //!< of every limb: its number in the forest given
       std::vector<Need> below;      //!< of every limb: needed at its lower end by what begins there
       std::vector<Need> above;      //!< needed at its upstream end
       std::vector<bool> mustMend;   //!< of every limb: it or something behind it has pipe to mend
@@ -59,9 +67,8 @@ namespace stillhead
   };
 
   /**
-   * Cuts the parts of \a forest where they begin to be over and where they cease to be mendable, and marks them. Legs of
-   * which no elevation is known can hold no regulator: what hangs on them is hung on what they hang on. Limbs are put in
-   * an order that does not depend on the one given.
+   * Cuts the parts of \a forest where they begin to be over and where they cease to be mendable, and marks them. Limbs are
+   * put in an order that does not depend on the one given.
    */
   MarkedForest markForest( const Forest &forest, const ProposalRules &rules );
 

@@ -9,6 +9,9 @@ namespace stillhead
 
   namespace
   {
+    //! A regulator on the leg above starts anew from the cheapest choice, so much dearer ones are not wanted.
+    constexpr int MOST_EXTRA_COST = 12 * BROKEN_COST;
+
     constexpr double MOST_STEPS = 1024.0; //!< more settings than this in a range are as good as any setting
 
     //! Inlet levels from which a regulator that keeps all rules can give some level of \a outlet.
@@ -73,7 +76,7 @@ namespace stillhead
       for ( const LevelRange &range : outlets.ranges() )
       {
         const double lowM = std::max( range.lowM, place.elevationM + LEAST_SET_M );
-        if ( range.highM < ANY_LEVEL_M && lowM <= range.highM )
+        if ( range.highM < ANY_LEVEL_M && lowM <= range.highM + SAME_LEVEL_M )
           feeds.unite( { lowM, ANY_LEVEL_M } );
       }
       return feeds;
@@ -241,11 +244,10 @@ namespace stillhead
 
   void Options::tidy()
   {
-    // One more regulator above can always start anew from the cheapest choice, so dearer ones are never wanted.
     std::size_t kept = 0;
     for ( std::size_t i = 0; i < mChoices.size(); ++i )
     {
-      if ( mChoices[i].levels.isEmpty() || mChoices[i].cost > mChoices.front().cost + BROKEN_COST + KEPT_COST )
+      if ( mChoices[i].levels.isEmpty() || mChoices[i].cost > mChoices.front().cost + MOST_EXTRA_COST )
         continue;
       if ( kept > 0 && mChoices[kept - 1].levels.holds( mChoices[i].levels ) )
         continue;

@@ -113,18 +113,13 @@ namespace stillhead
         }
 
         //! The place where the regulator stands now.
-        Trial tryNow( bool &known ) const
+        Trial tryNow() const
         {
-          for ( const Station &station : mReach.leg.stations )
-          {
-            if ( station.boundary != mReach.boundary )
-              continue;
-            known = true;
-            return tryAt(
-              station.alongM, station.elevationM, station.zone, station.role, mReach.beneath[station.boundary] );
-          }
-          known = false;
-          return {};
+          const std::vector<ForestPart> &segments = mReach.leg.segments;
+          const std::size_t after = std::min( mReach.boundary, segments.size() - 1 );
+          const ForestPart &part =
+            segments[after].known || mReach.boundary == 0 ? segments[after] : segments[after - 1];
+          return tryAt( mOwn.alongM, mOwn.elevationM, part.zone, part.role, mReach.beneath[mReach.boundary] );
         }
 
         //! True if the present setting works at the place.
@@ -211,19 +206,16 @@ namespace stillhead
     Planned bestSeat( const PlanView &view, const LegReach &reach )
     {
       const Seat seat( view, reach );
-      bool known = false;
-      Trial best = seat.tryNow( known );
-      if ( !known || !best.fits )
+      Trial best = seat.tryNow();
+      if ( !best.fits )
         return view.at( reach.regulator );
-      Spot at;
-      bool moved = false;
+      Spot at { std::min( reach.boundary, reach.leg.segments.size() - 1 ), 0.0 };
       const auto attempt = [&]( std::size_t segment, double share ) {
         const Trial trial = seat.tryAt( segment, share );
         if ( !trial.fits || trial.marginM <= best.marginM + SAME_LEVEL_M )
           return;
         best = trial;
         at = { segment, share };
-        moved = true;
       };
       for ( std::size_t i = seat.firstSegment(); i < seat.endSegment(); ++i )
       {
@@ -234,15 +226,19 @@ namespace stillhead
           attempt( i, end * k / TRIES_IN_A_SEGMENT );
       }
       double step = 1.0 / TRIES_IN_A_SEGMENT;
-      for ( int round = 0; moved && round < REFINEMENTS; ++round )
+      for ( int round = 0; round < REFINEMENTS; ++round )
       {
-        const Spot middle = at;
-        const double end = seat.fedShare( middle.segment );
+        // About the best place so far, across the ends of its segment too.
+        const double middle = static_cast<double>( at.segment ) + at.share;
         for ( int k = -TRIES_IN_A_SEGMENT; k <= TRIES_IN_A_SEGMENT; ++k )
         {
-          const double share = middle.share + step * k / TRIES_IN_A_SEGMENT;
-          if ( share >= 0.0 && share <= end )
-            attempt( middle.segment, share );
+          const double place = middle + step * k / TRIES_IN_A_SEGMENT;
+          if ( place < static_cast<double>( seat.firstSegment() ) || place >= static_cast<double>( seat.endSegment() ) )
+            continue;
+          const std::size_t segment = static_cast<std::size_t>( place );
+          const double share = place - static_cast<double>( segment );
+          if ( seat.isOpen( segment ) && share <= seat.fedShare( segment ) )
+            attempt( segment, share );
         }
         step /= TRIES_IN_A_SEGMENT;
       }

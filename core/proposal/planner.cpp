@@ -22,7 +22,10 @@ namespace stillhead
         std::vector<Options> at; //!< with one allowed there
         std::vector<int> stationAt; //!< −1: none
 
-        const Options &beneath( std::size_t boundary ) const { return leg.onePlace ? bare[boundary] : below[boundary]; }
+        const Options &beneath( const Station &station ) const
+        {
+          return leg.onePlace ? bare[station.boundary] : below[station.boundary];
+        }
     };
 
     struct Task
@@ -56,13 +59,16 @@ namespace stillhead
             mBreaks[static_cast<std::size_t>( place.limb )].push_back( place.alongM );
         }
 
-        std::vector<Planned> run()
+        std::vector<Planned> run( bool &complete )
         {
           for ( std::size_t i = mMarked.forest.limbs.size(); i-- > 0; )
           {
             if ( mMarked.mustMend[i] )
               mAbove[i] = optionsAbove( static_cast<int>( i ) );
           }
+          complete = true;
+          for ( const int limb : mMarked.children.of( -1 ) )
+            complete = complete && ( !mustMend( limb ) || above( limb ).costOf( Feed() ) < NEVER );
           push( -1, Feed() );
           while ( !mTasks.empty() )
           {
@@ -114,6 +120,7 @@ namespace stillhead
         {
           const Limb &limb = limbOf( number );
           LevelRange range;
+          range.lowM = limb.wayM + limb.boostLowM;
           for ( std::size_t i = limb.firstPart; i < limb.firstPart + limb.partCount; ++i )
           {
             const ForestPart &part = mMarked.forest.parts[i];
@@ -156,7 +163,6 @@ namespace stillhead
           leg.below.resize( kept );
           leg.bare.resize( onePlace ? kept : 0 );
           leg.at.resize( kept );
-
           Options below = joint( number );
           Options at = below;
           Options bare = below;
@@ -307,13 +313,13 @@ namespace stillhead
             {
               if ( keep && !keepStep )
                 break;
-              const Outlet outlet = bestOutlet( place, leg.beneath( boundary ).levelsWithin( costBelow ),
+              const Outlet outlet = bestOutlet( place, leg.beneath( station ).levelsWithin( costBelow ),
                 outletRange( place, inlet, keep, mRules ), keepStep, mRules );
               if ( !outlet.found )
                 continue;
               candidate.regulator = { task.limb, -1, station.alongM, station.elevationM, outlet.levelM, keep };
               candidate.boundary = boundary;
-              candidate.costBelow = leg.beneath( boundary ).costOf( Feed { true, outlet.levelM, outlet.levelM } );
+              candidate.costBelow = leg.beneath( station ).costOf( Feed { true, outlet.levelM, outlet.levelM } );
               candidate.mainline = station.role == Role::Mainline;
               const double inletMarginM = mRules.mostM( station.role ) - ( inlet.highM - station.elevationM );
               candidate.marginM = std::min( inletMarginM, outlet.marginM );
@@ -358,9 +364,9 @@ namespace stillhead
   } // namespace
 
   std::vector<Planned> planRegulators(
-    const MarkedForest &marked, const FewestRegulators &fewest, const ProposalRules &rules )
+    const MarkedForest &marked, const FewestRegulators &fewest, const ProposalRules &rules, bool &complete )
   {
-    return Planner( marked, fewest, rules ).run();
+    return Planner( marked, fewest, rules ).run( complete );
   }
 
 } // namespace stillhead

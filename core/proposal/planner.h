@@ -2,7 +2,7 @@
 // Chooses legs, places and levels of the regulators: as few as can be while all rules are kept.
 #pragma once
 
-#include "core/proposal/fournumbers.h"
+#include "core/proposal/fewest.h"
 #include "core/proposal/options.h"
 
 #include <vector>
@@ -23,10 +23,10 @@ namespace stillhead
 
   /**
    * A plan for \a marked, in which every body suits one level. Regulators on one leg come from its upstream end. Among
-   * plans that cost the same it prefers mainlines, then upstream places with room to their limits; settle it afterwards
-   * with betterPlan().
+   * plans that cost the same it prefers mainlines, then places with room to their limits.
+   * \param complete receives false if something cannot be mended from the places where a regulator may be written
    */
   std::vector<Planned> planRegulators(
-    const MarkedForest &marked, const FewestRegulators &fewest, const ProposalRules &rules );
+    const MarkedForest &marked, const FewestRegulators &fewest, const ProposalRules &rules, bool &complete );
 
 } // namespace stillhead

@@ -8,6 +8,11 @@
 namespace stillhead
 {
 
+  namespace
+  {
+    constexpr double SAME_PLACE_M = 1e-6;
+  }
+
   Beneath LegReach::beneathAt(
     std::size_t segment, double share, const Forest &forest, const ProposalRules &rules ) const
   {
@@ -117,6 +122,22 @@ namespace stillhead
     mAbove.clear();
   }
 
+  ForestPart PlanView::asJudged( const Limb &limb, std::size_t first, std::size_t last, ForestPart part ) const
+  {
+    const double startM = mMarked.forest.parts[limb.firstPart].fromM;
+    const auto distance = [startM]( double alongM ) { return std::abs( alongM - startM ); };
+    const auto standsAt = [&]( std::size_t regulator, double alongM ) {
+      return std::abs( mPlan[regulator].alongM - alongM ) < SAME_PLACE_M;
+    };
+    const bool startStub =
+      standsAt( first, limb.standFromM ) && distance( part.toM ) <= distance( limb.standFromM ) + SAME_PLACE_M;
+    const bool endStub =
+      standsAt( last - 1, limb.standToM ) && distance( part.fromM ) >= distance( limb.standToM ) - SAME_PLACE_M;
+    if ( startStub || endStub )
+      part.mend = part.served = false;
+    return part;
+  }
+
   void PlanView::visitLeg( int limb, const std::function<void( const LegReach & )> &onLeg )
   {
     const auto [first, last] = regulatorsOn( limb );
@@ -133,11 +154,19 @@ namespace stillhead
       std::vector<std::size_t> boundaries;
       for ( std::size_t i = first; i < last; ++i )
       {
-        const auto station = std::min_element(
-          reach.leg.stations.begin(), reach.leg.stations.end(), [&]( const Station &a, const Station &b ) {
-            return std::abs( a.alongM - mPlan[i].alongM ) < std::abs( b.alongM - mPlan[i].alongM );
-          } );
-        boundaries.push_back( station->boundary );
+        // The leg is cut at every regulator.
+        std::size_t boundary = count;
+        double leastM = std::abs( reach.leg.segments.back().toM - mPlan[i].alongM );
+        for ( std::size_t k = count; k-- > 0; )
+        {
+          const double offM = std::abs( reach.leg.segments[k].fromM - mPlan[i].alongM );
+          if ( offM <= leastM )
+          {
+            boundary = k;
+            leastM = offM;
+          }
+        }
+        boundaries.push_back( boundary );
       }
       const bool top = r == first;
       reach.first = r > first + 1 ? boundaries[r - first - 2] : 0;
@@ -148,7 +177,7 @@ namespace stillhead
       for ( std::size_t i = count + 1; i-- > 0; )
       {
         if ( i < count )
-          now.add( reach.leg.segments[i], mMarked.forest, mRules );
+          now.add( asJudged( own, first, last, reach.leg.segments[i] ), mMarked.forest, mRules );
         for ( ; next > r && boundaries[next - 1 - first] == i; --next )
           now.passRegulator( mPlan[next - 1], mRules );
         reach.beneath[i] = now;

@@ -62,6 +62,10 @@ namespace stillhead
     private:
       std::pair<std::size_t, std::size_t> regulatorsOn( int limb ) const;
       Beneath joint( int limb ) const;
+
+      //! The stub between a joint and a regulator that is written at its end is not judged.
+      ForestPart asJudged( const Limb &limb, std::size_t first, std::size_t last, ForestPart part ) const;
+
       void visitLeg( int limb, const std::function<void( const LegReach & )> &onLeg );
 
       const MarkedForest &mMarked;

@@ -3,9 +3,10 @@
 #pragma once
 
 #include "core/proposal/beneath.h"
+#include "core/proposal/fewest.h"
 #include "core/proposal/forest.h"
-#include "core/proposal/fournumbers.h"
 #include "core/proposal/marking.h"
+#include "core/proposal/planview.h"
 #include "core/proposal/rules.h"
 
 #include <vector>
@@ -55,12 +56,16 @@ namespace stillhead
   {
       std::vector<ProposedRegulator> regulators; //!< those that feed come before those that are fed
       std::vector<Excused> excused;
-      int bound = 0;               //!< no plan has fewer
-      bool proven = false;         //!< as many as the bound, and all rules kept
-      bool rulesKept = true;       //!< LEAST_DROP, MOST_RATIO and SETTING_STEP, by all
-      std::vector<int> tornBodies; //!< bodies of looped pipe that no level suits: nothing is proposed for them
+      int bound = 0;         //!< no plan has fewer
+      bool proven = false;   //!< as many as the bound, and all rules kept
+      bool rulesKept = true; //!< LEAST_DROP, MOST_RATIO and SETTING_STEP, by all
   };
 
+  //! Figures of every regulator of \a view.
+  std::vector<ProposedRegulator> describePlan( PlanView &view );
+
+  //! The proposal for a forest in which every body suits one level.
   Proposal propose( const Forest &forest, const ProposalRules &rules );
+  Proposal proposeMarked( const MarkedForest &marked, const FewestRegulators &fewest, const ProposalRules &rules );
 
 } // namespace stillhead

@@ -84,7 +84,8 @@ namespace smalltree
   {
       double highM = 0.0;
       double lowM = 0.0;
-      bool reached = true; //!< in the low case
+      bool reached = true;    //!< in the low case
+      double arrivingM = 0.0; //!< high level just above a regulator that stands here, within a pipe
   };
 
   inline Water behind( const Valve &valve, Water water, const ProposalRules &rules )
@@ -101,8 +102,8 @@ namespace smalltree
     for ( std::size_t i = 0; i < tree.legs.size(); ++i )
     {
       const Leg &leg = tree.legs[i];
-      Water water = leg.parent < 0 ? Water { tree.source.highM, tree.source.lowM, true }
-                                   : below[static_cast<std::size_t>( leg.parent )];
+      Water water =
+        leg.parent < 0 ? Water { tree.source.highM, tree.source.lowM } : below[static_cast<std::size_t>( leg.parent )];
       static const std::vector<Valve> none;
       const std::vector<Valve> &own = valves.empty() ? none : valves[i];
       std::size_t next = 0;
@@ -117,6 +118,7 @@ namespace smalltree
           place.atM = PART_M * ( static_cast<double>( p ) + share );
           // Where two pipes meet a regulator stands at the upper end of the lower one.
           const double passedM = k == steps ? place.atM - 1e-9 : place.atM + 1e-9;
+          const double arrivingM = water.highM;
           while ( next < own.size() && own[next].atM <= passedM )
             water = behind( own[next++], water, tree.rules );
           place.elevationM = heightAt( leg.pipes[p], share );
@@ -125,6 +127,7 @@ namespace smalltree
           place.stub = place.atM < STUB_M || place.atM > lengthM - STUB_M - 1e-9;
           if ( place.known && place.elevationM > water.lowM + 1e-7 )
             water.reached = false;
+          water.arrivingM = k > 0 ? arrivingM : water.highM;
           visit( place, water );
         }
       }
@@ -157,6 +160,10 @@ namespace smalltree
         need = std::max( need, place.elevationM + tree.rules.leastM( place.role ) );
       else if ( place.known && need > NO_LEVEL_M )
         need = std::max( need, place.elevationM );
+      // Serving ends between two places where the pipe is just too high for it.
+      const bool onward = i + 1 < places.size() && places[i + 1].leg == place.leg && places[i + 1].atM > place.atM;
+      if ( onward && place.known && places[i + 1].known && place.served != places[i + 1].served )
+        need = std::max( need, tree.source.lowM );
       place.excused = place.over && need > place.elevationM + tree.rules.standM( place.role ) + 1e-9;
       const bool first = i == 0 || places[i - 1].leg != place.leg;
       if ( first && tree.legs[leg].parent >= 0 )
@@ -179,7 +186,8 @@ namespace smalltree
       if ( !place.known || ( place.stub && !stubs ) || !fault.empty() )
         return;
       const std::string where = " on leg " + std::to_string( place.leg ) + " at " + std::to_string( place.atM );
-      if ( known.over && !known.excused && water.highM > place.elevationM + tree.rules.mostM( place.role ) + 1e-6 )
+      if ( known.over && !known.excused
+        && ( stubs ? water.arrivingM : water.highM ) > place.elevationM + tree.rules.mostM( place.role ) + 1e-6 )
         fault = "over" + where;
       if ( known.served
         && ( !water.reached || water.lowM < place.elevationM + tree.rules.leastM( place.role ) - 1e-6 ) )

@@ -144,8 +144,8 @@ namespace
         for ( std::size_t i = 0; i < mTree.legs.size(); ++i )
         {
           const int parent = mTree.legs[i].parent;
-          Water water = parent < 0 ? Water { mTree.source.highM, mTree.source.lowM, true }
-                                   : below[static_cast<std::size_t>( parent )];
+          Water water =
+            parent < 0 ? Water { mTree.source.highM, mTree.source.lowM } : below[static_cast<std::size_t>( parent )];
           for ( const Valve &valve : valves[i] )
           {
             const double setM = valve.levelM - valve.elevationM;

@@ -1,0 +1,38 @@
+// SPDX-License-Identifier: GPL-2.0-or-later
+// Sorts the pipe of a body that no single level suits: what is low and must be held lower, and what is not.
+#pragma once
+
+#include "core/proposal/growforest.h"
+#include "core/proposal/marking.h"
+
+#include <vector>
+
+namespace stillhead
+{
+
+  //! A run of an edge's parts that are all low or all not.
+  struct BodyPiece
+  {
+      int edge = -1;
+      int fromNode = -1;
+      int toNode = -1;
+      std::vector<ForestPart> parts;
+      bool low = false;
+      bool fromJoint = true; //!< begins at a node of the graph, not within its edge
+      bool toJoint = true;
+  };
+
+  struct BodyPieces
+  {
+      std::vector<BodyPiece> pieces;
+      std::vector<bool> lowNode; //!< of every node: it lies in the low part
+  };
+
+  /**
+   * Pieces of the body \a limb of \a marked; ends of pieces within an edge become new nodes of \a graph. Pipe that low pipe
+   * cuts off goes with it if it needs no more than that stands; else the shortest low pipe on the way to it is left over.
+   */
+  BodyPieces sortBody(
+    PipeGraph &graph, const GrownForest &grown, const MarkedForest &marked, int limb, const ProposalRules &rules );
+
+} // namespace stillhead
