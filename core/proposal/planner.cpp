@@ -2,7 +2,7 @@
 // A sweep from the ends up finds what everything costs; a walk from the sources down spends it.
 #include "core/proposal/planner.h"
 
-#include "core/proposal/legstations.h"
+#include "core/proposal/legoptions.h"
 
 #include <algorithm>
 #include <cmath>
@@ -12,21 +12,8 @@ namespace stillhead
 
   namespace
   {
-    //! What lies below the boundaries of a leg.
-    struct LegOptions
-    {
-        SegmentedLeg leg;
-        std::vector<Options> below; //!< at every boundary, without a regulator there
-        std::vector<Options>
-          bare;                  //!< likewise, with none farther down the leg either; only where there is room for one
-        std::vector<Options> at; //!< with one allowed there
-        std::vector<int> stationAt; //!< −1: none
-
-        const Options &beneath( const Station &station ) const
-        {
-          return leg.onePlace ? bare[station.boundary] : below[station.boundary];
-        }
-    };
+    //! So far on from the first place that would do a better one is looked for.
+    constexpr int MOST_LIMBS_LOOKED_AT = 100;
 
     struct Task
     {
@@ -145,51 +132,10 @@ namespace stillhead
           return { highest->elevationM, mMarked.forest.zones[static_cast<std::size_t>( highest->zone )] };
         }
 
-        StandPlace placeOf( const Station &station ) const
-        {
-          return { station.elevationM, mMarked.forest.zones[static_cast<std::size_t>( station.zone )] };
-        }
-
         LegOptions legOptions( int number, bool keepAll ) const
         {
-          LegOptions leg;
-          leg.leg = segmentLeg( mMarked.forest, limbOf( number ), mBreaks[static_cast<std::size_t>( number )], mRules );
-          const std::size_t count = leg.leg.segments.size();
-          leg.stationAt.assign( count + 1, -1 );
-          for ( std::size_t i = 0; i < leg.leg.stations.size(); ++i )
-            leg.stationAt[leg.leg.stations[i].boundary] = static_cast<int>( i );
-          const bool onePlace = leg.leg.onePlace;
-          const std::size_t kept = keepAll ? count + 1 : 1;
-          leg.below.resize( kept );
-          leg.bare.resize( onePlace ? kept : 0 );
-          leg.at.resize( kept );
-          Options below = joint( number );
-          Options at = below;
-          Options bare = below;
-          double needM = mMarked.below[static_cast<std::size_t>( number )].levelM;
-          for ( std::size_t i = count + 1; i-- > 0; )
-          {
-            if ( i < count )
-            {
-              const ForestPart &part = leg.leg.segments[i];
-              needM = std::max( needM, needOf( part, needM > NO_LEVEL_M, mRules ).levelM );
-              const LevelRange range { needM, part.mend ? part.lowestM() + mRules.standM( part.role ) : ANY_LEVEL_M };
-              at.pass( range, !part.mend );
-              below = at;
-              if ( onePlace )
-                bare.pass( range, !part.mend );
-            }
-            if ( leg.stationAt[i] >= 0 )
-              at.standOver( onePlace ? bare : below,
-                placeOf( leg.leg.stations[static_cast<std::size_t>( leg.stationAt[i] )] ), 1, mRules );
-            if ( !keepAll && i > 0 )
-              continue;
-            leg.below[i] = below;
-            leg.at[i] = at;
-            if ( onePlace )
-              leg.bare[i] = bare;
-          }
-          return leg;
+          return optionsOfLeg( mMarked.forest, limbOf( number ), mBreaks[static_cast<std::size_t>( number )],
+            joint( number ), mMarked.below[static_cast<std::size_t>( number )].levelM, keepAll, mRules );
         }
 
         //! Tasks for what begins at the lower end of \a limb and is not free.
@@ -210,7 +156,8 @@ namespace stillhead
         {
           Candidate best;
           bool found = false;
-          for ( bool onward = true; onward; )
+          int sinceFound = 0;
+          for ( bool onward = true; onward && sinceFound < MOST_LIMBS_LOOKED_AT; sinceFound += found ? 1 : 0 )
           {
             const Limb &limb = limbOf( task.limb );
             if ( task.boundary == 0 && !task.stood )
@@ -302,7 +249,7 @@ namespace stillhead
         bool candidateAt( const Task &task, const LegOptions &leg, std::size_t boundary, Candidate &candidate ) const
         {
           const Station &station = leg.leg.stations[static_cast<std::size_t>( leg.stationAt[boundary] )];
-          const StandPlace place = placeOf( station );
+          const StandPlace place = placeOf( station, mMarked.forest );
           const StaticLevels inlet = task.feed.levels( place.today, mRules.riseM() );
           for ( const bool keep : { true, false } )
           {
