@@ -33,6 +33,8 @@ namespace stillhead
           const Limb &body = mMarked.forest.limbs[index( limb )];
           const bool fromSource = body.parent < 0 && body.inlets.empty();
           mLevelM = fromSource ? ANY_LEVEL_M : mMarked.above[index( limb )].levelM + body.boostLowM;
+          for ( const Inlet &inlet : body.inlets )
+            mLevelM = std::max( mLevelM, inlet.elevationM + LEAST_SET_M );
           const LimbOrigin &origin = originOf( limb );
           for ( const int edge : origin.edges )
             takeApart( edge );
@@ -45,9 +47,11 @@ namespace stillhead
           }
           do
           {
-            mFed = joinedWith( origin.entries );
+            mWet = joinedWith( origin.entries, false );
+            mFed = joinedWith( origin.entries, true );
           }
-          while ( settleEnclosed() );
+          while ( settleCutOff() );
+          takeInEnclosed();
           chooseNodes( origin.entries );
           return { std::move( mPieces ), std::move( mLowNode ) };
         }
@@ -60,8 +64,7 @@ namespace stillhead
         {
           if ( !part.known || part.leaveOver || hasNoWindow( part, mRules ) )
             return NO_LEVEL_M;
-          return std::min( overBelowM( part, mMarked.forest, mRules ), mLevelM - mRules.standM( part.role ) )
-            - SAME_LEVEL_M;
+          return std::min( overBelowM( part, mMarked.forest, mRules ), mLevelM - mRules.standM( part.role ) );
         }
 
         void takeApart( int number )
@@ -74,24 +77,29 @@ namespace stillhead
           {
             const ForestPart &part = mGraph.parts[p];
             const double lowM = lowBelowM( part );
-            if ( lowM > part.lowestM() + SAME_LEVEL_M && lowM < part.highestM() - SAME_LEVEL_M )
+            const double dryM = mMarked.forest.zones[index( part.zone )].lowM;
+            double shares[4] = { 0.0, 1.0, 1.0, 1.0 };
+            int count = 1;
+            for ( const double cutM : { lowM, dryM } )
             {
-              const double share = part.shareOf( lowM );
-              append( part.between( 0.0, share ), lowM );
-              append( part.between( share, 1.0 ), lowM );
+              if ( part.known && cutM > part.lowestM() + SAME_LEVEL_M && cutM < part.highestM() - SAME_LEVEL_M )
+                shares[count++] = part.shareOf( cutM );
             }
-            else
-            {
-              append( part, lowM );
-            }
+            if ( count == 3 && shares[2] < shares[1] )
+              std::swap( shares[1], shares[2] );
+            shares[count] = 1.0;
+            for ( int i = 0; i < count; ++i )
+              append( count == 1 ? part : part.between( shares[i], shares[i + 1] ), lowM, dryM );
           }
           mPieces.back().toNode = edge.toNode;
         }
 
-        void append( const ForestPart &part, double lowM )
+        void append( const ForestPart &part, double lowM, double dryM )
         {
-          const bool low = part.known && 0.5 * ( part.elevation.from + part.elevation.to ) < lowM;
-          if ( !mPieces.back().parts.empty() && low != mPieces.back().low )
+          const double middleM = 0.5 * ( part.elevation.from + part.elevation.to );
+          const bool low = part.known && middleM < lowM - 0.1 * SAME_LEVEL_M;
+          const bool dry = part.known && middleM > dryM + SAME_LEVEL_M;
+          if ( !mPieces.back().parts.empty() && ( low != mPieces.back().low || dry != mPieces.back().dry ) )
           {
             const int node = mGraph.nodeCount++;
             BodyPiece next;
@@ -101,6 +109,7 @@ namespace stillhead
             mPieces.push_back( next );
           }
           mPieces.back().low = low;
+          mPieces.back().dry = dry;
           mPieces.back().parts.push_back( part );
         }
 
@@ -128,8 +137,8 @@ namespace stillhead
           return piece.fromNode == node ? piece.toNode : piece.fromNode;
         }
 
-        //! Nodes joined with \a open by pipe that is not low.
-        std::vector<bool> joinedWith( std::vector<int> open ) const
+        //! Nodes joined with \a open by pipe that is not low, and (unless \a throughDry) not dry.
+        std::vector<bool> joinedWith( std::vector<int> open, bool throughDry ) const
         {
           std::vector<bool> joined( mAt.size(), false );
           for ( const int node : open )
@@ -141,7 +150,7 @@ namespace stillhead
             for ( const std::size_t i : mAt[index( node )] )
             {
               const int other = otherEnd( mPieces[i], node );
-              if ( mPieces[i].low || joined[index( other )] )
+              if ( mPieces[i].low || ( mPieces[i].dry && !throughDry ) || joined[index( other )] )
                 continue;
               joined[index( other )] = true;
               open.push_back( other );
@@ -150,36 +159,39 @@ namespace stillhead
           return joined;
         }
 
-        //! Deals with one place that low pipe cuts off; false if there is none left.
-        bool settleEnclosed()
+        //! Deals with one place that is served only by way of low pipe; false if there is none left.
+        bool settleCutOff()
         {
           for ( std::size_t start = 0; start < mAt.size(); ++start )
           {
-            if ( mAt[start].empty() || mFed[start] )
+            if ( mAt[start].empty() || mWet[start] )
               continue;
-            const std::vector<bool> enclosed = joinedWith( { static_cast<int>( start ) } );
+            const std::vector<bool> region = joinedWith( { static_cast<int>( start ) }, false );
             double needM = NO_LEVEL_M;
+            bool enclosed = true;
             std::vector<std::size_t> own;
             for ( std::size_t node = 0; node < mAt.size(); ++node )
             {
-              if ( !enclosed[node] )
+              if ( !region[node] )
                 continue;
               needM = std::max( needM, mNeedM[node] );
+              enclosed = enclosed && !mFed[node];
               for ( const std::size_t i : mAt[node] )
               {
-                if ( !mPieces[i].low )
-                  own.push_back( i );
+                if ( mPieces[i].low || mPieces[i].dry )
+                  continue;
+                own.push_back( i );
+                for ( const ForestPart &part : mPieces[i].parts )
+                  needM = std::max( needM, needOf( part, false, mRules ).levelM );
               }
             }
-            for ( const std::size_t i : own )
+            if ( needM == NO_LEVEL_M )
+              continue;
+            if ( !enclosed || needM > mStandM + SAME_LEVEL_M )
             {
-              for ( const ForestPart &part : mPieces[i].parts )
-                needM = std::max( needM, needOf( part, false, mRules ).levelM );
-            }
-            if ( needM > mStandM + SAME_LEVEL_M )
-            {
-              leaveWayTo( enclosed );
-              return true;
+              if ( leaveWayTo( region ) )
+                return true;
+              continue;
             }
             for ( const std::size_t i : own )
               mPieces[i].low = true;
@@ -189,8 +201,15 @@ namespace stillhead
           return false;
         }
 
-        //! Leaves over the shortest low pipe by which \a goal can be reached.
-        void leaveWayTo( const std::vector<bool> &goal )
+        //! What low pipe encloses and nobody needs goes with it.
+        void takeInEnclosed()
+        {
+          for ( BodyPiece &piece : mPieces )
+            piece.low = piece.low || !mFed[index( piece.fromNode )];
+        }
+
+        //! Leaves over the shortest low pipe by which water reaches \a goal; false if there is no such way.
+        bool leaveWayTo( const std::vector<bool> &goal )
         {
           using Entry = std::pair<double, int>;
           std::priority_queue<Entry, std::vector<Entry>, std::greater<Entry>> open;
@@ -205,7 +224,7 @@ namespace stillhead
           };
           for ( std::size_t node = 0; node < mAt.size(); ++node )
           {
-            if ( mFed[node] )
+            if ( mWet[node] )
               reach( static_cast<int>( node ), 0.0, mPieces.size() );
           }
           while ( !open.empty() )
@@ -222,16 +241,19 @@ namespace stillhead
                 at = otherEnd( piece, at );
                 leaveOver( piece );
               }
-              return;
+              return true;
             }
             for ( const std::size_t i : mAt[index( node )] )
             {
+              if ( mPieces[i].dry )
+                continue;
               double ownM = 0.0;
               for ( const ForestPart &part : mPieces[i].parts )
                 ownM += mPieces[i].low ? part.lengthM() : 0.0;
               reach( otherEnd( mPieces[i], node ), length + ownM, i );
             }
           }
+          return false;
         }
 
         void leaveOver( BodyPiece &piece ) const
@@ -270,7 +292,8 @@ namespace stillhead
         std::vector<BodyPiece> mPieces;
         std::vector<std::vector<std::size_t>> mAt; //!< pieces at every node
         std::vector<double> mNeedM;
-        std::vector<bool> mFed;
+        std::vector<bool> mFed; //!< nodes that pipe which is not low joins with where water comes in
+        std::vector<bool> mWet; //!< and water passes it
         std::vector<bool> mLowNode;
     };
   } // namespace

@@ -10,7 +10,7 @@
 namespace stillhead
 {
 
-  //! A run of an edge's parts that are all low or all not.
+  //! A run of an edge's parts that are all low or all not, all dry or all not.
   struct BodyPiece
   {
       int edge = -1;
@@ -18,6 +18,7 @@ namespace stillhead
       int toNode = -1;
       std::vector<ForestPart> parts;
       bool low = false;
+      bool dry = false;      //!< above the static level of the low case: water does not pass
       bool fromJoint = true; //!< begins at a node of the graph, not within its edge
       bool toJoint = true;
   };
@@ -30,7 +31,8 @@ namespace stillhead
 
   /**
    * Pieces of the body \a limb of \a marked; ends of pieces within an edge become new nodes of \a graph. Pipe that low pipe
-   * cuts off goes with it if it needs no more than that stands; else the shortest low pipe on the way to it is left over.
+   * encloses goes with it if it needs no more than that stands. What is served only by way of low pipe otherwise keeps that
+   * way: the shortest low pipe on it is left over.
    */
   BodyPieces sortBody(
     PipeGraph &graph, const GrownForest &grown, const MarkedForest &marked, int limb, const ProposalRules &rules );

@@ -156,6 +156,8 @@ namespace stillhead
             if ( part.mend )
               topM = std::min( topM, part.lowestM() + mRules.standM( part.role ) );
           }
+          for ( const Inlet &inlet : limb.inlets )
+            needM = std::max( needM, inlet.elevationM + LEAST_SET_M );
           // A cut through the body can serve all its legs and all its pipe at once.
           int forced = raiseNeed( needM );
           if ( topM < needM - SAME_LEVEL_M )

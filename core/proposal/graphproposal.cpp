@@ -15,19 +15,19 @@ namespace stillhead
 
   Proposal proposeOnGraph( PipeGraph graph, const ProposalRules &rules )
   {
-    int bound = -1;
     for ( int round = 0;; ++round )
     {
       const GrownForest grown = growForest( graph );
       const MarkedForest marked = markForest( grown.forest, rules );
       const FewestRegulators fewest = fewestRegulators( marked, rules );
-      if ( bound < 0 )
-        bound = fewest.total;
       if ( fewest.tornBodies.empty() )
       {
         Proposal proposal = proposeMarked( marked, fewest, rules );
-        proposal.bound = bound;
-        proposal.proven = proposal.rulesKept && static_cast<int>( proposal.regulators.size() ) == bound;
+        // The bound is that of the pipe uncut; what was given up on the way is left aside.
+        if ( round > 0 )
+          proposal.bound =
+            fewestRegulators( markForest( growForest( withoutCuts( graph ) ).forest, rules ), rules ).total;
+        proposal.proven = proposal.rulesKept && static_cast<int>( proposal.regulators.size() ) == proposal.bound;
         return proposal;
       }
       if ( round < MOST_ROUNDS )

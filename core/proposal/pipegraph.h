@@ -38,4 +38,7 @@ namespace stillhead
       std::vector<ForestPart> parts;
   };
 
+  //! \a graph with the ends of every cut joined again, as if no regulator stood there.
+  PipeGraph withoutCuts( const PipeGraph &graph );
+
 } // namespace stillhead
