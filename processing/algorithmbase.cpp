@@ -78,7 +78,8 @@ namespace stillhead
     }
     catch ( const std::bad_alloc & )
     {
-      throw QgsProcessingException( Text::tr( "The machine has not enough memory for this job; run it on parts of the drawing." ) );
+      throw QgsProcessingException(
+        Text::tr( "The machine has not enough memory for this job; run it on parts of the drawing." ) );
     }
     catch ( const std::exception &e )
     {

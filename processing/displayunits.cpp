@@ -20,7 +20,8 @@ namespace stillhead
     {
       // "−0" would claim a sign that rounding took away.
       static const QString digits = QStringLiteral( "123456789" );
-      const bool isZero = std::none_of( number.cbegin(), number.cend(), []( QChar c ) { return digits.contains( c ); } );
+      const bool isZero =
+        std::none_of( number.cbegin(), number.cend(), []( QChar c ) { return digits.contains( c ); } );
       if ( number.startsWith( '-' ) )
         number.replace( 0, 1, isZero ? QString() : QString( QChar( 0x2212 ) ) );
       return number;
@@ -45,7 +46,8 @@ namespace stillhead
     , mSpecificWeightNPerM3( waterSpecificWeightNPerM3( waterCelsius ) )
     , mPascalsPerUnit( pascalsPer( pressureUnit, mSpecificWeightNPerM3 ) )
     , mMetresPerUnit( metresPer( lengthUnit ) )
-  {}
+  {
+  }
 
   QVariant DisplayUnits::pressureValue( double pascals ) const
   {
@@ -61,16 +63,16 @@ namespace stillhead
   {
     switch ( mPressureUnit )
     {
-      case PressureUnit::Psi:
-        return QStringLiteral( "psi" );
-      case PressureUnit::Kilopascal:
-        return QStringLiteral( "kPa" );
-      case PressureUnit::Bar:
-        return QStringLiteral( "bar" );
-      case PressureUnit::MetreOfWater:
-        return Text::tr( "m of water" );
-      case PressureUnit::FootOfWater:
-        return Text::tr( "ft of water" );
+    case PressureUnit::Psi:
+      return QStringLiteral( "psi" );
+    case PressureUnit::Kilopascal:
+      return QStringLiteral( "kPa" );
+    case PressureUnit::Bar:
+      return QStringLiteral( "bar" );
+    case PressureUnit::MetreOfWater:
+      return Text::tr( "m of water" );
+    case PressureUnit::FootOfWater:
+      return Text::tr( "ft of water" );
     }
     return QString();
   }

@@ -20,7 +20,8 @@ namespace stillhead
         : mFeedback( feedback )
         , mFromPercent( fromPercent )
         , mToPercent( toPercent )
-      {}
+      {
+      }
 
       bool cancelled() const override { return mFeedback && mFeedback->isCanceled(); }
 

@@ -37,7 +37,8 @@ namespace stillhead
 
   QStringList PressureSurfaceAlgorithm::tags() const
   {
-    return Text::tr( "irrigation,static,pressure,surface,raster,terrain,elevation,water,psi,kPa,head,slope" ).split( ',' );
+    return Text::tr( "irrigation,static,pressure,surface,raster,terrain,elevation,water,psi,kPa,head,slope" )
+      .split( ',' );
   }
 
   QgsProcessingAlgorithm *PressureSurfaceAlgorithm::createInstance() const
@@ -90,11 +91,13 @@ namespace stillhead
       PressureSurfaceRun run( values, *mTerrain, feedbackOr( feedback, silent ) );
       if ( values.isSet( parameter::AREA ) )
       {
-        const std::unique_ptr<QgsProcessingFeatureSource> area( parameterAsSource( parameters, parameter::AREA, context ) );
+        const std::unique_ptr<QgsProcessingFeatureSource> area(
+          parameterAsSource( parameters, parameter::AREA, context ) );
         if ( !area )
-          throw QgsProcessingException( Text::tr( "AREA (“%1”) cannot be opened as a layer of polygons; check the file and "
-                                                  "its path." )
-                                          .arg( parameters.value( parameter::AREA ).toString() ) );
+          throw QgsProcessingException(
+            Text::tr( "AREA (“%1”) cannot be opened as a layer of polygons; check the file and "
+                      "its path." )
+              .arg( parameters.value( parameter::AREA ).toString() ) );
         run.readArea( area.get() );
       }
       run.solve();
@@ -105,7 +108,8 @@ namespace stillhead
     } );
   }
 
-  QVariantMap PressureSurfaceAlgorithm::postProcessAlgorithm( QgsProcessingContext &context, QgsProcessingFeedback *feedback )
+  QVariantMap PressureSurfaceAlgorithm::postProcessAlgorithm(
+    QgsProcessingContext &context, QgsProcessingFeedback *feedback )
   {
     QgsProcessingFeedback silent;
     finishNow( mWritten, mStyle, context, feedbackOr( feedback, silent ) );

@@ -23,7 +23,8 @@ namespace stillhead
     return { output::SURFACE };
   }
 
-  PressureSurfaceRun::PressureSurfaceRun( const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback )
+  PressureSurfaceRun::PressureSurfaceRun(
+    const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback )
     : mValues( values )
     , mTerrain( terrain )
     , mFeedback( feedback )
@@ -79,7 +80,8 @@ namespace stillhead
     surface.id = QgsProcessingParameters::parameterAsOutputLayer(
       mValues.definition( output::SURFACE ), mValues.values(), mValues.context() );
     surface.what = ResultLayer::Surface;
-    surface.metadata = resultMetadata( facts(), mValues.definition( output::SURFACE )->description(), layerNameOf( surface.id ) );
+    surface.metadata =
+      resultMetadata( facts(), mValues.definition( output::SURFACE )->description(), layerNameOf( surface.id ) );
     writeSurfaceFile( surface.id, mInput, mTerrain, mUnits, monitor );
     finishOnLoading( surface, mStyle, mValues.context() );
     mWritten.push_back( surface );

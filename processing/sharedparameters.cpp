@@ -136,14 +136,15 @@ namespace stillhead
     ParameterList list;
     QgsProcessingParameterNumber *cover = number( parameter::COVER, coverLabel(), 0.0 );
     cover->setIsDynamic( true );
-    cover->setDynamicPropertyDefinition( QgsPropertyDefinition(
-      parameter::COVER, Text::tr( "Depth of cover" ), QgsPropertyDefinition::Double ) );
+    cover->setDynamicPropertyDefinition(
+      QgsPropertyDefinition( parameter::COVER, Text::tr( "Depth of cover" ), QgsPropertyDefinition::Double ) );
     cover->setDynamicLayerParameterName( parameter::MAINS );
     add( list, cover,
       Text::tr( "In the length unit; pressure is taken at this depth. A drawn feature's own `cover` field goes before "
                 "it where it is set. Default: 0, at the ground surface." ) );
     add( list,
-      new QgsProcessingParameterBoolean( parameter::USE_LINE_Z, Text::tr( "Lines carry surveyed pipe elevations" ), false ),
+      new QgsProcessingParameterBoolean(
+        parameter::USE_LINE_Z, Text::tr( "Lines carry surveyed pipe elevations" ), false ),
       Text::tr( "Take the drawn Z as the elevation of the pipe, in place of terrain and cover, straight between "
                 "vertices. A line without usable Z falls back to the terrain, with a finding. Default: no." ) );
     add( list,
@@ -188,8 +189,7 @@ namespace stillhead
     addAdvanced( list,
       optionalNumber( parameter::LATERAL_MOST, Text::tr( "Highest acceptable static pressure of laterals" ) ),
       Text::tr( "In the pressure unit. Unset: as for all pipe." ) );
-    addAdvanced( list,
-      number( parameter::TERRAIN_RMSE, Text::tr( "Error of the terrain (root mean square)" ), 0.0 ),
+    addAdvanced( list, number( parameter::TERRAIN_RMSE, Text::tr( "Error of the terrain (root mean square)" ), 0.0 ),
       Text::tr( "Vertical error of the terrain in the length unit. Default: 0." ) );
     addAdvanced( list, number( parameter::READING_ERROR, Text::tr( "Error of the reading (±, at 95 %)" ), 0.0 ),
       Text::tr( "Of the gauge or water level, in the pressure unit. Default: 0." ) );

@@ -39,7 +39,8 @@ namespace stillhead
 
   QString StaticPressureAlgorithm::shortDescription() const
   {
-    return Text::tr( "Pressure of water at rest on every metre of drawn irrigation pipe, from terrain and one source." );
+    return Text::tr(
+      "Pressure of water at rest on every metre of drawn irrigation pipe, from terrain and one source." );
   }
 
   QString StaticPressureAlgorithm::shortHelpString() const
@@ -58,7 +59,8 @@ namespace stillhead
     return new StaticPressureAlgorithm();
   }
 
-  void StaticPressureAlgorithm::addSink( const QString &name, const QString &description, int sourceType, bool optional )
+  void StaticPressureAlgorithm::addSink(
+    const QString &name, const QString &description, int sourceType, bool optional )
   {
     addParameter( new QgsProcessingParameterFeatureSink(
       name, description, static_cast<compat::SourceType>( sourceType ), QVariant(), optional ) );
@@ -76,7 +78,8 @@ namespace stillhead
 
     addSink( output::SPANS, Text::tr( "Pipe by static pressure" ), static_cast<int>( compat::Source::Line ), false );
     addSink( output::NODES, Text::tr( "Nodes" ), static_cast<int>( compat::Source::Point ), true );
-    addSink( output::STRETCHES, Text::tr( "Stretches over or short" ), static_cast<int>( compat::Source::Polygon ), true );
+    addSink(
+      output::STRETCHES, Text::tr( "Stretches over or short" ), static_cast<int>( compat::Source::Polygon ), true );
     addSink( output::EXTREMES, Text::tr( "Worst places" ), static_cast<int>( compat::Source::Point ), true );
     addSink( output::FINDINGS, Text::tr( "Findings" ), static_cast<int>( compat::Source::Point ), true );
     addParameter( new QgsProcessingParameterRasterDestination(
@@ -133,10 +136,10 @@ namespace stillhead
     if ( !layer.source )
     {
       const QString given = parameters.value( name ).toString();
-      throw QgsProcessingException(
-        given.isEmpty() ? Text::tr( "%1 is not given; choose a layer of lines." ).arg( name )
-                        : Text::tr( "%1 (“%2”) cannot be opened as a layer of lines; check the file and its path." )
-                            .arg( name, given ) );
+      throw QgsProcessingException( given.isEmpty()
+          ? Text::tr( "%1 is not given; choose a layer of lines." ).arg( name )
+          : Text::tr( "%1 (“%2”) cannot be opened as a layer of lines; check the file and its path." )
+              .arg( name, given ) );
     }
     layer.expressions = createExpressionContext( parameters, context, layer.source.get() );
     return layer;
@@ -162,7 +165,8 @@ namespace stillhead
     } );
   }
 
-  QVariantMap StaticPressureAlgorithm::postProcessAlgorithm( QgsProcessingContext &context, QgsProcessingFeedback *feedback )
+  QVariantMap StaticPressureAlgorithm::postProcessAlgorithm(
+    QgsProcessingContext &context, QgsProcessingFeedback *feedback )
   {
     QgsProcessingFeedback silent;
     finishNow( mWritten, mStyle, context, feedbackOr( feedback, silent ) );

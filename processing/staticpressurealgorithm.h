@@ -35,8 +35,8 @@ namespace stillhead
 
     private:
       void addSink( const QString &name, const QString &description, int sourceType, bool optional );
-      DrawnLayer drawnLayer(
-        const QString &name, const QList<int> &keys, const QVariantMap &parameters, QgsProcessingContext &context ) const;
+      DrawnLayer drawnLayer( const QString &name, const QList<int> &keys, const QVariantMap &parameters,
+        QgsProcessingContext &context ) const;
 
       // From the main thread to the work, and from the work back.
       std::unique_ptr<Terrain> mTerrain;

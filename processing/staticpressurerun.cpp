@@ -33,8 +33,8 @@ namespace stillhead
     constexpr double SURFACE_TO = 90.0;
     constexpr double WRITE_TO = 99.0;
 
-    std::unique_ptr<PlanToTerrain> wayToTerrain(
-      const QgsCoordinateReferenceSystem &lines, const QgsCoordinateReferenceSystem &terrain, const QgsCoordinateTransformContext &context )
+    std::unique_ptr<PlanToTerrain> wayToTerrain( const QgsCoordinateReferenceSystem &lines,
+      const QgsCoordinateReferenceSystem &terrain, const QgsCoordinateTransformContext &context )
     {
       // The user's choice of operation, where there is one for this direction; else PROJ's best.
       const bool chosen = !context.mustReverseCoordinateOperation( lines, terrain );
@@ -61,14 +61,16 @@ namespace stillhead
     return { output::SPANS, output::NODES, output::STRETCHES, output::EXTREMES, output::FINDINGS, output::SURFACE };
   }
 
-  StaticPressureRun::StaticPressureRun( const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback )
+  StaticPressureRun::StaticPressureRun(
+    const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback )
     : mValues( values )
     , mTerrain( terrain )
     , mFeedback( feedback )
     , mUnits( readUnits( values ) )
     , mLimits( readLimits( values, mUnits ) )
     , mStyle( resultStyle( mLimits, mUnits ) )
-  {}
+  {
+  }
 
   void StaticPressureRun::read( const std::vector<DrawnLayer> &layers )
   {
@@ -121,11 +123,13 @@ namespace stillhead
   void StaticPressureRun::logSource() const
   {
     const SourceReport &report = mResult.source;
-    mFeedback.pushInfo( Text::tr( "The source joins the pipe %1 away." ).arg( mUnits.lengthText( report.distanceM, 1 ) ) );
+    mFeedback.pushInfo(
+      Text::tr( "The source joins the pipe %1 away." ).arg( mUnits.lengthText( report.distanceM, 1 ) ) );
     if ( mSource.source.groundElevationM && !std::isnan( report.terrainGroundM ) )
-      mFeedback.pushInfo( Text::tr( "Ground at the source: %1 surveyed, which is used; %2 by the terrain; difference %3." )
-                            .arg( mUnits.lengthText( report.usedGroundM, 1 ), mUnits.lengthText( report.terrainGroundM, 1 ),
-                              mUnits.lengthText( report.usedGroundM - report.terrainGroundM, 1 ) ) );
+      mFeedback.pushInfo(
+        Text::tr( "Ground at the source: %1 surveyed, which is used; %2 by the terrain; difference %3." )
+          .arg( mUnits.lengthText( report.usedGroundM, 1 ), mUnits.lengthText( report.terrainGroundM, 1 ),
+            mUnits.lengthText( report.usedGroundM - report.terrainGroundM, 1 ) ) );
     else if ( mSource.source.groundElevationM )
       mFeedback.pushInfo( Text::tr( "Ground at the source: %1 surveyed; the terrain has none there." )
                             .arg( mUnits.lengthText( report.usedGroundM, 1 ) ) );
@@ -205,7 +209,8 @@ namespace stillhead
     written.id = QgsProcessingParameters::parameterAsOutputLayer(
       mValues.definition( output::SURFACE ), mValues.values(), mValues.context() );
     written.what = ResultLayer::Surface;
-    written.metadata = resultMetadata( facts, mValues.definition( output::SURFACE )->description(), layerNameOf( written.id ) );
+    written.metadata =
+      resultMetadata( facts, mValues.definition( output::SURFACE )->description(), layerNameOf( written.id ) );
     writeSurfaceFile( written.id, input, mTerrain, mUnits, monitor );
     outputs.noteWritten( output::SURFACE );
     finishOnLoading( written, mStyle, mValues.context() );
@@ -227,7 +232,8 @@ namespace stillhead
       WrittenLayer written;
       written.id = outputs.write( table, mDrawn.crs, mFeedback, from, to );
       written.what = table.what;
-      written.metadata = resultMetadata( facts, mValues.definition( table.output )->description(), layerNameOf( written.id ) );
+      written.metadata =
+        resultMetadata( facts, mValues.definition( table.output )->description(), layerNameOf( written.id ) );
       written.inGeoPackage = outputs.isGeoPackage( table.output );
       finishOnLoading( written, mStyle, mValues.context() );
       results.insert( table.output, written.id );

@@ -40,7 +40,8 @@ namespace stillhead
 
     private:
       void writeSurface( OutputSet &outputs, const RunFacts &facts, QVariantMap &results );
-      void writeTables( OutputSet &outputs, const std::vector<ResultTable> &tables, const RunFacts &facts, QVariantMap &results );
+      void writeTables(
+        OutputSet &outputs, const std::vector<ResultTable> &tables, const RunFacts &facts, QVariantMap &results );
       void logSource() const;
       void logFindings() const;
       RunFacts facts( const QString &summary ) const;

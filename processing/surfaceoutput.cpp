@@ -14,8 +14,8 @@ namespace stillhead
     return { levelM, coverM, units.specificWeightNPerM3(), units.pascals( 1.0 ) };
   }
 
-  void writeSurfaceFile(
-    const QString &path, const SurfaceInput &input, const Terrain &terrain, const DisplayUnits &units, Monitor &monitor )
+  void writeSurfaceFile( const QString &path, const SurfaceInput &input, const Terrain &terrain,
+    const DisplayUnits &units, Monitor &monitor )
   {
     const GdalCacheLimit cacheLimit;
     SurfaceRequest request;

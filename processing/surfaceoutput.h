@@ -30,7 +30,7 @@ namespace stillhead
   /**
    * Writes the surface to the file \a path. \throws Cancelled, std::runtime_error; an earlier file stays then
    */
-  void writeSurfaceFile(
-    const QString &path, const SurfaceInput &input, const Terrain &terrain, const DisplayUnits &units, Monitor &monitor );
+  void writeSurfaceFile( const QString &path, const SurfaceInput &input, const Terrain &terrain,
+    const DisplayUnits &units, Monitor &monitor );
 
 } // namespace stillhead

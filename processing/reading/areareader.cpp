@@ -55,10 +55,11 @@ namespace stillhead
       }
       catch ( const QgsCsException & )
       {
-        throw QgsProcessingException( Text::tr( "Feature %1 of AREA (“%2”) cannot be reprojected to the terrain's CRS, %3; "
-                                                "check the layer's CRS." )
-                                        .arg( feature.id() )
-                                        .arg( source.sourceName(), crsText( terrain.crs ) ) );
+        throw QgsProcessingException(
+          Text::tr( "Feature %1 of AREA (“%2”) cannot be reprojected to the terrain's CRS, %3; "
+                    "check the layer's CRS." )
+            .arg( feature.id() )
+            .arg( source.sourceName(), crsText( terrain.crs ) ) );
       }
       const QByteArray wkb = geometry.asWkb();
       appendPolygons( std::vector<unsigned char>( wkb.begin(), wkb.end() ), grid, polygons );
@@ -66,10 +67,12 @@ namespace stillhead
     if ( polygons.empty() )
       throw QgsProcessingException(
         Text::tr( "AREA (“%1”) has no polygons; draw the area first, or leave it out." ).arg( source.sourceName() ) );
-    if ( std::none_of( polygons.begin(), polygons.end(), [&grid]( const PixelPolygon &p ) { return meetsGrid( p, grid ); } ) )
-      throw QgsProcessingException( Text::tr( "AREA (“%1”) lies nowhere on the terrain; choose an area that the terrain "
-                                              "covers." )
-                                      .arg( source.sourceName() ) );
+    if ( std::none_of(
+           polygons.begin(), polygons.end(), [&grid]( const PixelPolygon &p ) { return meetsGrid( p, grid ); } ) )
+      throw QgsProcessingException(
+        Text::tr( "AREA (“%1”) lies nowhere on the terrain; choose an area that the terrain "
+                  "covers." )
+          .arg( source.sourceName() ) );
     return AreaMask( polygons, grid.rows() );
   }
 

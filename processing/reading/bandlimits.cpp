@@ -28,8 +28,9 @@ namespace stillhead
       static const QRegularExpression otherSeparator( QStringLiteral( "[0-9]\\s*;|[0-9]\\s+[-+.0-9]" ) );
       const QRegularExpressionMatch comma = tightComma.match( text );
       if ( comma.hasMatch() && text.contains( otherSeparator ) )
-        throw QgsProcessingException( Text::tr( "BANDS: “%1” has a decimal comma, but %2; write the limits like 2.5; 3.5." )
-                                        .arg( comma.captured(), decimalMarkAdvice() ) );
+        throw QgsProcessingException(
+          Text::tr( "BANDS: “%1” has a decimal comma, but %2; write the limits like 2.5; 3.5." )
+            .arg( comma.captured(), decimalMarkAdvice() ) );
     }
 
   } // namespace
@@ -47,19 +48,20 @@ namespace stillhead
       const double limit = entry.toDouble( &isNumber );
       if ( entry.isEmpty() )
         throw QgsProcessingException(
-          Text::tr( "BANDS: entry %1 is empty; write rising numbers with one separator between two of them." ).arg( number ) );
+          Text::tr( "BANDS: entry %1 is empty; write rising numbers with one separator between two of them." )
+            .arg( number ) );
       if ( !isNumber || !std::isfinite( limit ) )
-        throw QgsProcessingException(
-          Text::tr( "BANDS: entry %1, “%2”, is not a number; write rising numbers separated by comma, semicolon or space." )
-            .arg( number )
-            .arg( entry ) );
+        throw QgsProcessingException( Text::tr(
+          "BANDS: entry %1, “%2”, is not a number; write rising numbers separated by comma, semicolon or space." )
+                                        .arg( number )
+                                        .arg( entry ) );
       if ( !limits.empty() && limit <= limits.back() )
       {
         const QString before = entries.at( number - 2 );
-        throw QgsProcessingException(
-          Text::tr( "BANDS: entry %1, “%2”, is not above the entry before it, “%3”; write the limits in rising order (%4)." )
-            .arg( number )
-            .arg( entry, before, decimalMarkAdvice() ) );
+        throw QgsProcessingException( Text::tr(
+          "BANDS: entry %1, “%2”, is not above the entry before it, “%3”; write the limits in rising order (%4)." )
+                                        .arg( number )
+                                        .arg( entry, before, decimalMarkAdvice() ) );
       }
       limits.push_back( limit );
     }

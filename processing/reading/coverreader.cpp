@@ -58,10 +58,11 @@ namespace stillhead
     bool isNumber = false;
     const double cover = value.toDouble( &isNumber );
     if ( !isNumber || !std::isfinite( cover ) )
-      throw QgsProcessingException( Text::tr( "The cover of feature %1 of %2 is “%3” by %4, which is not a number; give a "
-                                              "number in %5." )
-                                      .arg( feature.id() )
-                                      .arg( mWhat, value.toString(), origin, mUnits.lengthName() ) );
+      throw QgsProcessingException(
+        Text::tr( "The cover of feature %1 of %2 is “%3” by %4, which is not a number; give a "
+                  "number in %5." )
+          .arg( feature.id() )
+          .arg( mWhat, value.toString(), origin, mUnits.lengthName() ) );
     return cover;
   }
 
@@ -91,10 +92,11 @@ namespace stillhead
   void CoverReader::report( QgsProcessingFeedback &feedback ) const
   {
     if ( mOwn > 0 )
-      feedback.pushInfo( Text::tr( "%1 of %2 drawn features have a depth of cover of their own (field `cover`); the others "
-                                   "take COVER." )
-                           .arg( mOwn )
-                           .arg( mFeatures ) );
+      feedback.pushInfo(
+        Text::tr( "%1 of %2 drawn features have a depth of cover of their own (field `cover`); the others "
+                  "take COVER." )
+          .arg( mOwn )
+          .arg( mFeatures ) );
     if ( mNegative > 0 )
       feedback.pushWarning(
         Text::tr( "%1 drawn features have a negative depth of cover: their pipe is taken to lie above ground." )

@@ -25,7 +25,8 @@ namespace stillhead
       public:
         explicit SystemReader( Drawing &drawing )
           : mDrawing( drawing )
-        {}
+        {
+        }
 
         void beginLayer( const QgsFields &fields )
         {
@@ -87,12 +88,14 @@ namespace stillhead
         }
         catch ( const QgsCsException & )
         {
-          throw QgsProcessingException( Text::tr( "Feature %1 of %2 cannot be reprojected from %3 to %4; check the layers' "
-                                                  "CRSs." )
-                                          .arg( feature.id() )
-                                          .arg( layerText( layer ), crsText( layer.source->sourceCrs() ), crsText( input.crs ) ) );
+          throw QgsProcessingException(
+            Text::tr( "Feature %1 of %2 cannot be reprojected from %3 to %4; check the layers' "
+                      "CRSs." )
+              .arg( feature.id() )
+              .arg( layerText( layer ), crsText( layer.source->sourceCrs() ), crsText( input.crs ) ) );
         }
-        input.features.push_back( { layer.role, feature.id(), input.fields.attributes( feature.attributes(), number ) } );
+        input.features.push_back(
+          { layer.role, feature.id(), input.fields.attributes( feature.attributes(), number ) } );
         if ( expected > 0 && ++read % 256 == 0 )
           monitor.progress( static_cast<double>( read ) / static_cast<double>( expected ) );
       }
@@ -100,8 +103,8 @@ namespace stillhead
 
   } // namespace
 
-  DrawnInput readDrawing( const std::vector<DrawnLayer> &layers, const DrawingOptions &options, const DisplayUnits &units,
-    const ParameterValues &values, QgsProcessingFeedback &feedback, Monitor &monitor )
+  DrawnInput readDrawing( const std::vector<DrawnLayer> &layers, const DrawingOptions &options,
+    const DisplayUnits &units, const ParameterValues &values, QgsProcessingFeedback &feedback, Monitor &monitor )
   {
     DrawnInput input;
     std::vector<DrawnLayerFields> layerFields;
@@ -114,7 +117,8 @@ namespace stillhead
     input.crs = layers.front().source->sourceCrs();
     input.fields = DrawnFields( layerFields, options.reservedFields );
     for ( const QString &renamed : input.fields.renamed() )
-      feedback.pushInfo( Text::tr( "A drawn field bears a name that the result needs and is kept under another: %1." ).arg( renamed ) );
+      feedback.pushInfo(
+        Text::tr( "A drawn field bears a name that the result needs and is kept under another: %1." ).arg( renamed ) );
 
     CoverReader covers( values, units );
     SystemReader systems( input.drawing );
@@ -131,7 +135,8 @@ namespace stillhead
     }
     covers.report( feedback );
     if ( curves > 0 )
-      feedback.pushInfo( Text::tr( "%1 curved lines are followed by chords to within 1 cm on the ground." ).arg( curves ) );
+      feedback.pushInfo(
+        Text::tr( "%1 curved lines are followed by chords to within 1 cm on the ground." ).arg( curves ) );
     return input;
   }
 

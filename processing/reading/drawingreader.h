@@ -65,7 +65,7 @@ namespace stillhead
    * Reads \a layers, mainlines first.
    * \throws QgsProcessingException for what cannot be read, with what to do; Cancelled
    */
-  DrawnInput readDrawing( const std::vector<DrawnLayer> &layers, const DrawingOptions &options, const DisplayUnits &units,
-    const ParameterValues &values, QgsProcessingFeedback &feedback, Monitor &monitor );
+  DrawnInput readDrawing( const std::vector<DrawnLayer> &layers, const DrawingOptions &options,
+    const DisplayUnits &units, const ParameterValues &values, QgsProcessingFeedback &feedback, Monitor &monitor );
 
 } // namespace stillhead

@@ -19,13 +19,14 @@ namespace stillhead
   void requireCrs( const QgsCoordinateReferenceSystem &crs, const QString &name, const QString &layer )
   {
     if ( !crs.isValid() || isPlaceholderCrs( crsDefinition( crs ) ) )
-      throw QgsProcessingException( Text::tr( "%1 (“%2”) has no coordinate reference system; set the layer's CRS first." )
-                                      .arg( name, layer ) );
+      throw QgsProcessingException(
+        Text::tr( "%1 (“%2”) has no coordinate reference system; set the layer's CRS first." ).arg( name, layer ) );
   }
 
   QString crsText( const QgsCoordinateReferenceSystem &crs )
   {
-    return crs.authid().isEmpty() ? crs.description() : QStringLiteral( "%1, %2" ).arg( crs.authid(), crs.description() );
+    return crs.authid().isEmpty() ? crs.description()
+                                  : QStringLiteral( "%1, %2" ).arg( crs.authid(), crs.description() );
   }
 
 } // namespace stillhead

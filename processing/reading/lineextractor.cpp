@@ -25,7 +25,8 @@ namespace stillhead
     , mTransform( layer, results, context )
     , mMeasure( makePlanMeasure( crsDefinition( layer ) ) )
     , mMetresPerZ( metresPerZ )
-  {}
+  {
+  }
 
   void LineExtractor::add( const QgsGeometry &geometry, const DrawnLine &model )
   {

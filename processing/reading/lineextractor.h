@@ -18,8 +18,8 @@ namespace stillhead
   {
     public:
       //! \a metresPerZ 0: drawn Z is not wanted
-      LineExtractor( Drawing &drawing, const QgsCoordinateReferenceSystem &layer, const QgsCoordinateReferenceSystem &results,
-        const QgsCoordinateTransformContext &context, double metresPerZ );
+      LineExtractor( Drawing &drawing, const QgsCoordinateReferenceSystem &layer,
+        const QgsCoordinateReferenceSystem &results, const QgsCoordinateTransformContext &context, double metresPerZ );
 
       /**
        * Appends a line like \a model for every part of \a geometry; one without vertices for what has none.

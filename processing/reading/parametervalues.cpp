@@ -26,7 +26,8 @@ namespace stillhead
 
     bool isBlank( const QVariant &value )
     {
-      return !value.isValid() || value.isNull() || ( value.type() == QVariant::String && value.toString().trimmed().isEmpty() );
+      return !value.isValid() || value.isNull()
+        || ( value.type() == QVariant::String && value.toString().trimmed().isEmpty() );
     }
 
   } // namespace
@@ -36,7 +37,8 @@ namespace stillhead
     : mDefinitions( definitions )
     , mValues( values )
     , mContext( context )
-  {}
+  {
+  }
 
   const QgsProcessingParameterDefinition *ParameterValues::definition( const QString &name ) const
   {
@@ -58,9 +60,10 @@ namespace stillhead
     bool isNumber = false;
     const double result = value.toDouble( &isNumber );
     if ( !isNumber || !std::isfinite( result ) )
-      throw QgsProcessingException( Text::tr( "%1 is “%2”, which is not a number. Give the number alone, with a point as "
-                                              "decimal mark; its unit is chosen by PRESSURE_UNIT and LENGTH_UNIT." )
-                                      .arg( name, value.toString() ) );
+      throw QgsProcessingException(
+        Text::tr( "%1 is “%2”, which is not a number. Give the number alone, with a point as "
+                  "decimal mark; its unit is chosen by PRESSURE_UNIT and LENGTH_UNIT." )
+          .arg( name, value.toString() ) );
     return result;
   }
 

@@ -15,8 +15,8 @@ namespace stillhead
   class ParameterValues
   {
     public:
-      ParameterValues(
-        const QgsProcessingParameterDefinitions &definitions, const QVariantMap &values, QgsProcessingContext &context );
+      ParameterValues( const QgsProcessingParameterDefinitions &definitions, const QVariantMap &values,
+        QgsProcessingContext &context );
 
       const QVariantMap &values() const { return mValues; }
       QgsProcessingContext &context() const { return mContext; }

@@ -34,8 +34,9 @@ namespace stillhead
         return otherwise;
       const QgsCoordinateReferenceSystem crs( match.captured( 1 ).trimmed() );
       if ( !crs.isValid() )
-        throw QgsProcessingException( Text::tr( "%1 names a CRS that is not known, “%2”; write the point as x,y [EPSG:code]." )
-                                        .arg( name, match.captured( 1 ) ) );
+        throw QgsProcessingException(
+          Text::tr( "%1 names a CRS that is not known, “%2”; write the point as x,y [EPSG:code]." )
+            .arg( name, match.captured( 1 ) ) );
       return crs;
     }
 
@@ -49,12 +50,14 @@ namespace stillhead
     const QgsPointXY given = QgsProcessingParameters::parameterAsPoint(
       values.definition( name ), value, values.context(), QgsCoordinateReferenceSystem() );
     if ( given.isEmpty() )
-      throw QgsProcessingException( Text::tr( "%1 is “%2”, which is no point; write it as x,y [EPSG:code], or pick it on the map." )
-                                      .arg( name, value.toString() ) );
+      throw QgsProcessingException(
+        Text::tr( "%1 is “%2”, which is no point; write it as x,y [EPSG:code], or pick it on the map." )
+          .arg( name, value.toString() ) );
     const QgsCoordinateReferenceSystem from = crsOf( value, name, crs );
     try
     {
-      const QgsPointXY place = QgsCoordinateTransform( from, crs, values.context().transformContext() ).transform( given );
+      const QgsPointXY place =
+        QgsCoordinateTransform( from, crs, values.context().transformContext() ).transform( given );
       return { place.x(), place.y() };
     }
     catch ( const QgsCsException & )

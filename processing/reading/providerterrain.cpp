@@ -38,7 +38,8 @@ namespace stillhead
     , mBand( band )
     , mMetresPerUnit( metresPerUnit )
     , mGrid( gridOf( *mProvider ) )
-  {}
+  {
+  }
 
   ProviderTerrain::~ProviderTerrain() = default;
 
@@ -63,7 +64,8 @@ namespace stillhead
     const std::unique_ptr<QgsRasterBlock> block( mProvider->block( mBand, window, columns, rows ) );
     if ( !block || !block->isValid() || block->width() != columns || block->height() != rows )
       throw std::runtime_error(
-        Text::tr( "The terrain could not be read from its provider; check the connection and run again." ).toStdString() );
+        Text::tr( "The terrain could not be read from its provider; check the connection and run again." )
+          .toStdString() );
     const qgssize count = static_cast<qgssize>( columns ) * static_cast<qgssize>( rows );
     for ( qgssize i = 0; i < count; ++i )
     {

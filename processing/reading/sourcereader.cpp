@@ -26,7 +26,8 @@ namespace stillhead
     }
 
     //! In pascals for a reading, in metres for a level.
-    std::optional<double> readValue( const ParameterValues &values, const QString &name, SourceKind kind, const DisplayUnits &units )
+    std::optional<double> readValue(
+      const ParameterValues &values, const QString &name, SourceKind kind, const DisplayUnits &units )
     {
       if ( isReading( kind ) )
         return readPressure( values, name, units );
@@ -38,15 +39,16 @@ namespace stillhead
     {
       const std::optional<double> high = readValue( values, parameter::SOURCE_VALUE, source.kind, units );
       if ( !high )
-        throw QgsProcessingException(
-          isReading( source.kind )
-            ? Text::tr( "SOURCE_VALUE is not given; give the pressure read at rest, in %1." ).arg( units.pressureName() )
+        throw QgsProcessingException( isReading( source.kind )
+            ? Text::tr( "SOURCE_VALUE is not given; give the pressure read at rest, in %1." )
+                .arg( units.pressureName() )
             : Text::tr( "SOURCE_VALUE is not given; give the water level, in %1." ).arg( units.lengthName() ) );
       source.high = *high;
       source.low = readValue( values, parameter::SOURCE_LOW, source.kind, units );
       if ( source.low && *source.low > source.high )
         throw QgsProcessingException(
-          Text::tr( "SOURCE_LOW (%1) is above SOURCE_VALUE (%2); the low case must not exceed the high one: swap them." )
+          Text::tr(
+            "SOURCE_LOW (%1) is above SOURCE_VALUE (%2); the low case must not exceed the high one: swap them." )
             .arg( valueText( source.kind, *source.low, units ), valueText( source.kind, source.high, units ) ) );
     }
 
@@ -64,7 +66,8 @@ namespace stillhead
             .arg( units.givenPressureText( *source.boostLowPa ), units.givenPressureText( source.boostPa ) ) );
     }
 
-    void readHeights( Source &source, const ParameterValues &values, const DisplayUnits &units, QgsProcessingFeedback &feedback )
+    void readHeights(
+      Source &source, const ParameterValues &values, const DisplayUnits &units, QgsProcessingFeedback &feedback )
     {
       if ( const std::optional<double> ground = values.optionalNumber( parameter::SOURCE_ELEVATION ) )
         source.groundElevationM = units.metres( *ground );
@@ -77,11 +80,12 @@ namespace stillhead
 
   } // namespace
 
-  SourceInput readSource( const ParameterValues &values, const DisplayUnits &units, const QgsCoordinateReferenceSystem &crs,
-    QgsProcessingFeedback &feedback )
+  SourceInput readSource( const ParameterValues &values, const DisplayUnits &units,
+    const QgsCoordinateReferenceSystem &crs, QgsProcessingFeedback &feedback )
   {
     if ( !values.isSet( parameter::SOURCE ) )
-      throw QgsProcessingException( Text::tr( "SOURCE is not given; choose the point where the pressure comes from." ) );
+      throw QgsProcessingException(
+        Text::tr( "SOURCE is not given; choose the point where the pressure comes from." ) );
     SourceInput input;
     input.source.kind = static_cast<SourceKind>( values.choice( parameter::SOURCE_KIND ) );
     readValues( input.source, values, units );
@@ -101,20 +105,22 @@ namespace stillhead
       text += Text::tr( " (low case %1)" ).arg( valueText( source.kind, *source.low, units ) );
     switch ( source.kind )
     {
-      case SourceKind::PressureReading:
-        text = Text::tr( "a pressure of %1 read %2 above ground" ).arg( text, units.givenLengthText( source.gaugeHeightM ) );
-        break;
-      case SourceKind::WaterLevel:
-        text = Text::tr( "a water level at %1" ).arg( text );
-        break;
-      case SourceKind::LevelAboveGround:
-        text = Text::tr( "a water level of %1 above ground" ).arg( text );
-        break;
+    case SourceKind::PressureReading:
+      text =
+        Text::tr( "a pressure of %1 read %2 above ground" ).arg( text, units.givenLengthText( source.gaugeHeightM ) );
+      break;
+    case SourceKind::WaterLevel:
+      text = Text::tr( "a water level at %1" ).arg( text );
+      break;
+    case SourceKind::LevelAboveGround:
+      text = Text::tr( "a water level of %1 above ground" ).arg( text );
+      break;
     }
     if ( source.boostPa > 0.0 )
-      text += source.boostLowPa ? Text::tr( " and a pump that adds %1 at no flow, %2 running" )
-                                    .arg( units.givenPressureText( source.boostPa ), units.givenPressureText( *source.boostLowPa ) )
-                                : Text::tr( " and a pump that adds %1" ).arg( units.givenPressureText( source.boostPa ) );
+      text += source.boostLowPa
+        ? Text::tr( " and a pump that adds %1 at no flow, %2 running" )
+            .arg( units.givenPressureText( source.boostPa ), units.givenPressureText( *source.boostLowPa ) )
+        : Text::tr( " and a pump that adds %1" ).arg( units.givenPressureText( source.boostPa ) );
     return text;
   }
 

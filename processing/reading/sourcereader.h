@@ -24,8 +24,8 @@ namespace stillhead
    * Reads the source; its place is given in \a crs.
    * \throws QgsProcessingException where something is missing or contradicts itself
    */
-  SourceInput readSource( const ParameterValues &values, const DisplayUnits &units, const QgsCoordinateReferenceSystem &crs,
-    QgsProcessingFeedback &feedback );
+  SourceInput readSource( const ParameterValues &values, const DisplayUnits &units,
+    const QgsCoordinateReferenceSystem &crs, QgsProcessingFeedback &feedback );
 
   //! What the user gave, in a few words: "a pressure of 71 psi (low case 62 psi) read 2.5 ft above ground".
   QString sourceText( const Source &source, const DisplayUnits &units );

@@ -32,7 +32,8 @@ namespace stillhead
           : mSource( std::move( source ) )
           , mRanges( std::move( ranges ) )
           , mMetresPerUnit( metresPerUnit )
-        {}
+        {
+        }
 
         const RasterGrid &grid() const override { return mSource->grid(); }
         int blockColumns() const override { return mSource->blockColumns(); }
@@ -61,9 +62,9 @@ namespace stillhead
       if ( layer && layer->isValid() && layer->dataProvider() )
         return layer;
       const QString given = values.values().value( parameter::TERRAIN ).toString();
-      throw QgsProcessingException(
-        given.isEmpty() ? Text::tr( "TERRAIN is not given; choose a raster of ground elevations." )
-                        : Text::tr( "TERRAIN (“%1”) cannot be opened as a raster; check the file and its path." ).arg( given ) );
+      throw QgsProcessingException( given.isEmpty()
+          ? Text::tr( "TERRAIN is not given; choose a raster of ground elevations." )
+          : Text::tr( "TERRAIN (“%1”) cannot be opened as a raster; check the file and its path." ).arg( given ) );
     }
 
     int bandOrRefuse( const ParameterValues &values, const QgsRasterDataProvider &provider )
@@ -124,11 +125,13 @@ namespace stillhead
       }
       const QgsRasterRangeList noData = provider.userNoDataValues( terrain.band );
       if ( !noData.isEmpty() )
-        terrain.source = std::make_unique<UserNoData>( std::move( terrain.source ), noData, terrain.unit.metresPerUnit );
+        terrain.source =
+          std::make_unique<UserNoData>( std::move( terrain.source ), noData, terrain.unit.metresPerUnit );
       return true;
     }
 
-    void openThroughProvider( Terrain &terrain, const QgsRasterDataProvider &provider, std::optional<ElevationUnit> unit )
+    void openThroughProvider(
+      Terrain &terrain, const QgsRasterDataProvider &provider, std::optional<ElevationUnit> unit )
     {
       std::unique_ptr<QgsRasterInterface> clone( provider.clone() );
       auto *own = dynamic_cast<QgsRasterDataProvider *>( clone.get() );
@@ -148,14 +151,14 @@ namespace stillhead
       const QString name = QString::fromStdString( unit.unitName );
       switch ( unit.origin )
       {
-        case ElevationUnitOrigin::Given:
-          return Text::tr( "unit %1 (chosen by TERRAIN_UNIT)" ).arg( name );
-        case ElevationUnitOrigin::Band:
-          return Text::tr( "unit %1 (the band says so)" ).arg( name );
-        case ElevationUnitOrigin::Crs:
-          return Text::tr( "unit %1 (the vertical part of its CRS says so)" ).arg( name );
-        case ElevationUnitOrigin::Assumed:
-          return Text::tr( "unit %1 (assumed: neither band nor CRS says)" ).arg( name );
+      case ElevationUnitOrigin::Given:
+        return Text::tr( "unit %1 (chosen by TERRAIN_UNIT)" ).arg( name );
+      case ElevationUnitOrigin::Band:
+        return Text::tr( "unit %1 (the band says so)" ).arg( name );
+      case ElevationUnitOrigin::Crs:
+        return Text::tr( "unit %1 (the vertical part of its CRS says so)" ).arg( name );
+      case ElevationUnitOrigin::Assumed:
+        return Text::tr( "unit %1 (assumed: neither band nor CRS says)" ).arg( name );
       }
       return name;
     }
@@ -165,8 +168,9 @@ namespace stillhead
       if ( terrain.unit.origin != ElevationUnitOrigin::Assumed )
         return;
       if ( terrain.unit.bandText.empty() )
-        feedback.pushWarning( Text::tr( "The terrain does not say in which unit its elevations are; metres are assumed. "
-                                        "Choose the unit by TERRAIN_UNIT if that is wrong." ) );
+        feedback.pushWarning(
+          Text::tr( "The terrain does not say in which unit its elevations are; metres are assumed. "
+                    "Choose the unit by TERRAIN_UNIT if that is wrong." ) );
       else
         feedback.pushWarning( Text::tr( "The terrain calls its unit “%1”, which is not known here; metres are assumed. "
                                         "Choose the unit by TERRAIN_UNIT if that is wrong." )
@@ -177,8 +181,9 @@ namespace stillhead
     {
       const bool bytes = provider.sourceDataType( band ) == Qgis::DataType::Byte;
       if ( bytes && provider.bandScale( band ) == 1.0 && provider.bandOffset( band ) == 0.0 )
-        feedback.pushWarning( Text::tr( "The terrain holds whole numbers from 0 to 255 only; make sure that it is not a "
-                                        "hillshade or another picture." ) );
+        feedback.pushWarning(
+          Text::tr( "The terrain holds whole numbers from 0 to 255 only; make sure that it is not a "
+                    "hillshade or another picture." ) );
     }
 
   } // namespace

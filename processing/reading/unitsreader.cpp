@@ -14,8 +14,8 @@ namespace stillhead
   {
     const double celsius = values.number( parameter::WATER_TEMPERATURE );
     if ( celsius < 0.0 || celsius > 40.0 )
-      throw QgsProcessingException( Text::tr( "WATER_TEMPERATURE is %1 °C, out of range; give 0 to 40 °C." )
-                                      .arg( plainNumber( celsius ) ) );
+      throw QgsProcessingException(
+        Text::tr( "WATER_TEMPERATURE is %1 °C, out of range; give 0 to 40 °C." ).arg( plainNumber( celsius ) ) );
     return DisplayUnits( static_cast<PressureUnit>( values.choice( parameter::PRESSURE_UNIT ) ),
       static_cast<LengthUnit>( values.choice( parameter::LENGTH_UNIT ) ), celsius );
   }

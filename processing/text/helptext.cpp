@@ -21,9 +21,10 @@ namespace stillhead
 
     QString unitsParagraph()
     {
-      return Text::tr( "Units: every pressure is in the chosen pressure unit and every elevation, length, depth and height in "
-                       "the chosen length unit, whatever the map units are. Only the Z of result geometries is in the "
-                       "terrain's own unit, so that they drape." );
+      return Text::tr(
+        "Units: every pressure is in the chosen pressure unit and every elevation, length, depth and height in "
+        "the chosen length unit, whatever the map units are. Only the Z of result geometries is in the "
+        "terrain's own unit, so that they drape." );
     }
 
   } // namespace
@@ -31,38 +32,47 @@ namespace stillhead
   QString staticPressureHelp()
   {
     return withCautions( {
-      Text::tr( "Finds the pressure that water at rest puts on every metre of drawn pipe, where that is too much or too "
-                "little, and which pipe water at rest does not reach." ),
-      Text::tr( "Inputs: mainlines and laterals drawn as lines, a bare-earth terrain raster, and one source: a gauge reading or "
-                "a water level, with its highest value (night, winter, tank full) and its lowest (summer peak, tank low). "
-                "Between two drawn vertices the pipe follows the ground at its depth of cover; lowest and highest places are "
-                "solved, not sampled. Lines join where ends meet, or where an end meets a line, within the join tolerance." ),
-      Text::tr( "Outputs: SPANS, the pipe cut exactly where a pressure limit, the static level or the edge of the terrain is "
-                "met, with pressures, band and state; NODES, where pipes end or meet; STRETCHES, connected pipe that is over "
-                "or short; EXTREMES, the worst place of each stretch and zone; FINDINGS, what to look at in the drawing; "
-                "SURFACE, the same static level as a raster (off by default); SUMMARY, the figures in plain sentences; and "
-                "numbers for use in models." ),
+      Text::tr(
+        "Finds the pressure that water at rest puts on every metre of drawn pipe, where that is too much or too "
+        "little, and which pipe water at rest does not reach." ),
+      Text::tr(
+        "Inputs: mainlines and laterals drawn as lines, a bare-earth terrain raster, and one source: a gauge reading "
+        "or "
+        "a water level, with its highest value (night, winter, tank full) and its lowest (summer peak, tank low). "
+        "Between two drawn vertices the pipe follows the ground at its depth of cover; lowest and highest places are "
+        "solved, not sampled. Lines join where ends meet, or where an end meets a line, within the join tolerance." ),
+      Text::tr(
+        "Outputs: SPANS, the pipe cut exactly where a pressure limit, the static level or the edge of the terrain is "
+        "met, with pressures, band and state; NODES, where pipes end or meet; STRETCHES, connected pipe that is over "
+        "or short; EXTREMES, the worst place of each stretch and zone; FINDINGS, what to look at in the drawing; "
+        "SURFACE, the same static level as a raster (off by default); SUMMARY, the figures in plain sentences; and "
+        "numbers for use in models." ),
       unitsParagraph(),
-      Text::tr( "Limits: one source, no regulators or other devices; the terrain is taken as given (say how far it may be off "
-                "and places too close to call are marked); where it has no data there are no figures. Features keep their own "
-                "fields; a drawn key `fid` is not copied, `drawn_fid` names the drawn feature." ),
+      Text::tr(
+        "Limits: one source, no regulators or other devices; the terrain is taken as given (say how far it may be off "
+        "and places too close to call are marked); where it has no data there are no figures. Features keep their own "
+        "fields; a drawn key `fid` is not copied, `drawn_fid` names the drawn feature." ),
     } );
   }
 
   QString pressureSurfaceHelp()
   {
     return withCautions( {
-      Text::tr( "Finds the pressure that water at rest would put on a pipe anywhere on the terrain if it were joined to the "
-                "source without any device between." ),
-      Text::tr( "Inputs: a bare-earth terrain raster and one source: a gauge reading or a water level, with its highest value "
-                "and, if known, its lowest; a depth of cover; optionally an area to stay within." ),
-      Text::tr( "Outputs: SURFACE, a raster on the terrain's own grid (band 1: high case; band 2: low case, only where a low "
-                "value is given); BAND_AREAS, polygons of the pressure bands of the high case; STATIC_LEVEL_HIGH and "
-                "STATIC_LEVEL_LOW; GROUND_TOO_HIGH, the ground elevation above which the lowest acceptable pressure is not "
-                "met (low case); GROUND_TOO_LOW, the one below which the highest is passed (high case)." ),
+      Text::tr(
+        "Finds the pressure that water at rest would put on a pipe anywhere on the terrain if it were joined to the "
+        "source without any device between." ),
+      Text::tr(
+        "Inputs: a bare-earth terrain raster and one source: a gauge reading or a water level, with its highest value "
+        "and, if known, its lowest; a depth of cover; optionally an area to stay within." ),
+      Text::tr(
+        "Outputs: SURFACE, a raster on the terrain's own grid (band 1: high case; band 2: low case, only where a low "
+        "value is given); BAND_AREAS, polygons of the pressure bands of the high case; STATIC_LEVEL_HIGH and "
+        "STATIC_LEVEL_LOW; GROUND_TOO_HIGH, the ground elevation above which the lowest acceptable pressure is not "
+        "met (low case); GROUND_TOO_LOW, the one below which the highest is passed (high case)." ),
       unitsParagraph(),
-      Text::tr( "Limits: no pipe is looked at, so neither summits on the way nor the way itself; negative values lie above the "
-                "static level." ),
+      Text::tr(
+        "Limits: no pipe is looked at, so neither summits on the way nor the way itself; negative values lie above the "
+        "static level." ),
     } );
   }
 

@@ -36,7 +36,8 @@ namespace stillhead
       const QString all = rangeText( limits.leastPa, limits.mostPa, context.units );
       if ( limits.lateralLeastPa == limits.leastPa && limits.lateralMostPa == limits.mostPa )
         return all;
-      return Text::tr( "%1 (laterals %2)" ).arg( all, rangeText( limits.lateralLeastPa, limits.lateralMostPa, context.units ) );
+      return Text::tr( "%1 (laterals %2)" )
+        .arg( all, rangeText( limits.lateralLeastPa, limits.lateralMostPa, context.units ) );
     }
 
     QString lengthsSentence( const ResultContext &context )
@@ -44,7 +45,8 @@ namespace stillhead
       const Totals &totals = context.result.totals;
       const DisplayUnits &units = context.units;
       QStringList parts;
-      parts << Text::tr( "%1 stands within %2 at rest" ).arg( units.lengthText( totals.withinM ), limitsText( context ) );
+      parts
+        << Text::tr( "%1 stands within %2 at rest" ).arg( units.lengthText( totals.withinM ), limitsText( context ) );
       if ( totals.overM > 0.0 )
         parts << Text::tr( "%1 is over (%2 of it mainlines)" )
                    .arg( units.lengthText( totals.overM ), units.lengthText( overMainlinesM( context ) ) );
@@ -56,7 +58,8 @@ namespace stillhead
         parts << Text::tr( "%1 lies where the terrain has no elevation" ).arg( units.lengthText( totals.noTerrainM ) );
       if ( totals.closeCallM > 0.0 )
         parts << Text::tr( "%1 is too close to call" ).arg( units.lengthText( totals.closeCallM ) );
-      return Text::tr( "Of %1 of pipe, %2." ).arg( units.lengthText( totals.lengthM ), parts.join( QStringLiteral( ", " ) ) );
+      return Text::tr( "Of %1 of pipe, %2." )
+        .arg( units.lengthText( totals.lengthM ), parts.join( QStringLiteral( ", " ) ) );
     }
 
     //! The zone's extreme, where there is one.
@@ -101,7 +104,7 @@ namespace stillhead
     QStringList sentences { lengthsSentence( context ), extremesSentence( context ), levelSentence( context, source ) };
     sentences.removeAll( QString() );
     return sentences.join( ' ' ) + QStringLiteral( "\n\n" ) + runningWaterCaution() + QStringLiteral( "\n\n" )
-           + safetyCaution();
+      + safetyCaution();
   }
 
 } // namespace stillhead

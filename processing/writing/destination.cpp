@@ -127,8 +127,8 @@ namespace stillhead
   {
     if ( !layer || mPath.isEmpty() || !layer->dataProvider() )
       return;
-    const QVariantMap parts =
-      QgsProviderRegistry::instance()->decodeUri( layer->dataProvider()->name(), layer->dataProvider()->dataSourceUri() );
+    const QVariantMap parts = QgsProviderRegistry::instance()->decodeUri(
+      layer->dataProvider()->name(), layer->dataProvider()->dataSourceUri() );
     const QString inputPath = parts.value( QStringLiteral( "path" ) ).toString();
     if ( inputPath.isEmpty() || !sameFile( mPath, inputPath ) )
       return;
@@ -164,9 +164,9 @@ namespace stillhead
     const bool samePath = !mPath.isEmpty() && !other.mPath.isEmpty() && sameFile( mPath, other.mPath );
     const bool sameTable = mTable.compare( other.mTable, Qt::CaseInsensitive ) == 0;
     if ( samePath && ( sameTable || mTable.isEmpty() || other.mTable.isEmpty() ) )
-      throw QgsProcessingException(
-        Text::tr( "%1 and %2 would both be written to %3, one over the other; give each a file or a layer name of its own." )
-          .arg( mName, other.mName, mPath ) );
+      throw QgsProcessingException( Text::tr(
+        "%1 and %2 would both be written to %3, one over the other; give each a file or a layer name of its own." )
+                                      .arg( mName, other.mName, mPath ) );
   }
 
   bool Destination::holdsRows( std::size_t rows ) const
@@ -199,8 +199,7 @@ namespace stillhead
     for ( const QString &name : folder.entryList( QDir::Files ) )
     {
       const bool beside = name.startsWith( file.fileName() + '-' ) || name.startsWith( file.fileName() + '.' )
-                          || ( file.suffix().toLower() == QLatin1String( "shp" )
-                               && name.startsWith( file.completeBaseName() + '.' ) );
+        || ( file.suffix().toLower() == QLatin1String( "shp" ) && name.startsWith( file.completeBaseName() + '.' ) );
       if ( name == file.fileName() || beside )
         folder.remove( name );
     }

@@ -30,7 +30,7 @@ namespace stillhead
     bool isPlain( int type )
     {
       return isWhole( type ) || type == QMetaType::Double || type == QMetaType::Bool || type == QMetaType::QString
-             || type == QMetaType::QDate || type == QMetaType::QDateTime;
+        || type == QMetaType::QDate || type == QMetaType::QDateTime;
     }
 
     QgsField textField( const QgsField &like )
@@ -45,7 +45,8 @@ namespace stillhead
     {
       if ( !isPlain( typeOf( drawn ) ) )
         return textField( drawn );
-      QgsField field( drawn.name(), drawn.type(), drawn.typeName(), drawn.length(), drawn.precision(), drawn.comment() );
+      QgsField field(
+        drawn.name(), drawn.type(), drawn.typeName(), drawn.length(), drawn.precision(), drawn.comment() );
       field.setAlias( drawn.alias() );
       return field;
     }
@@ -57,7 +58,8 @@ namespace stillhead
       {
         QgsField field = first;
         // 0 stands for no limit.
-        field.setLength( first.length() == 0 || second.length() == 0 ? 0 : std::max( first.length(), second.length() ) );
+        field.setLength(
+          first.length() == 0 || second.length() == 0 ? 0 : std::max( first.length(), second.length() ) );
         field.setPrecision( std::max( first.precision(), second.precision() ) );
         return field;
       }
@@ -72,7 +74,8 @@ namespace stillhead
 
     bool isKey( const DrawnLayerFields &layer, int index )
     {
-      return layer.keys.contains( index ) && layer.fields.at( index ).name().compare( field::FID, Qt::CaseInsensitive ) == 0;
+      return layer.keys.contains( index )
+        && layer.fields.at( index ).name().compare( field::FID, Qt::CaseInsensitive ) == 0;
     }
 
     QString asText( const QVariant &value )

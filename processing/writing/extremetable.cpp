@@ -53,7 +53,8 @@ namespace stillhead
   {
     const double nearPa = PASCALS_PER_PSI;
     const bool near = std::abs( pressurePa - leastPa ) < nearPa || std::abs( pressurePa - mostPa ) < nearPa;
-    return Text::tr( "%1, pipe %2" ).arg( units.pressureText( pressurePa, near ? 1 : 0 ), units.lengthText( elevationM ) );
+    return Text::tr( "%1, pipe %2" )
+      .arg( units.pressureText( pressurePa, near ? 1 : 0 ), units.lengthText( elevationM ) );
   }
 
   ResultTable extremeTable( const ResultContext &context )
@@ -64,7 +65,8 @@ namespace stillhead
     table.type = compat::WkbType::PointZM;
     table.fields = extremeFields();
     table.rows = context.result.extremes.size();
-    table.make = [&context, starts = partStartsM( context )]( std::size_t first, std::size_t last, QgsFeature *features ) {
+    table.make = [&context, starts = partStartsM( context )](
+                   std::size_t first, std::size_t last, QgsFeature *features ) {
       for ( std::size_t i = first; i < last; ++i )
       {
         const Extreme &extreme = context.result.extremes[i];
@@ -72,9 +74,11 @@ namespace stillhead
         const DrawnFeature &feature = context.featureOf( line );
         const double alongPartM = line.reversed ? line.lengthM - extreme.alongM : extreme.alongM;
         QgsAttributes attributes;
-        attributes << ( extreme.highest ? word::HIGHEST : word::LOWEST ) << context.units.pressureValue( extreme.pressurePa )
-                   << context.units.lengthValue( extreme.elevationM ) << oneBased( extreme.zone ) << oneBased( extreme.stretch )
-                   << drawnLayerName( feature.role ) << static_cast<qlonglong>( feature.fid )
+        attributes << ( extreme.highest ? word::HIGHEST : word::LOWEST )
+                   << context.units.pressureValue( extreme.pressurePa )
+                   << context.units.lengthValue( extreme.elevationM ) << oneBased( extreme.zone )
+                   << oneBased( extreme.stretch ) << drawnLayerName( feature.role )
+                   << static_cast<qlonglong>( feature.fid )
                    << context.units.lengthValue( starts[static_cast<std::size_t>( line.drawn )] + alongPartM )
                    << placeLabel( extreme.pressurePa, extreme.elevationM, context.units,
                         context.limits.leastFor( line.role ), context.limits.mostFor( line.role ) );

@@ -54,7 +54,8 @@ namespace stillhead
                    << context.units.lengthValue( finding.gapM );
         features[i - first].setAttributes( attributes );
         if ( std::isfinite( finding.place.x ) && std::isfinite( finding.place.y ) )
-          features[i - first].setGeometry( QgsGeometry( std::make_unique<QgsPoint>( finding.place.x, finding.place.y ) ) );
+          features[i - first].setGeometry(
+            QgsGeometry( std::make_unique<QgsPoint>( finding.place.x, finding.place.y ) ) );
       }
     };
     return table;

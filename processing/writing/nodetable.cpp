@@ -18,12 +18,12 @@ namespace stillhead
     {
       switch ( kind )
       {
-        case NodeKind::End:
-          return word::NODE_END;
-        case NodeKind::Joint:
-          return word::NODE_JOINT;
-        case NodeKind::Source:
-          return word::NODE_SOURCE;
+      case NodeKind::End:
+        return word::NODE_END;
+      case NodeKind::Joint:
+        return word::NODE_JOINT;
+      case NodeKind::Source:
+        return word::NODE_SOURCE;
       }
       return QString();
     }
@@ -66,7 +66,8 @@ namespace stillhead
         const NodeFigures &figures = context.result.nodeFigures[i];
         QgsAttributes attributes;
         attributes << QVariant( static_cast<int>( i ) + 1 ) << kindName( node.kind ) << node.degree
-                   << context.units.lengthValue( figures.elevationM ) << context.units.pressureValue( figures.pressureLowPa )
+                   << context.units.lengthValue( figures.elevationM )
+                   << context.units.pressureValue( figures.pressureLowPa )
                    << context.units.pressureValue( figures.pressureHighPa )
                    << QString::fromLatin1( stateName( figures.state ) ) << oneBased( context.result.zoneMap.ofNode[i] );
         features[i - first].setAttributes( attributes );

@@ -51,7 +51,8 @@ namespace stillhead
         public:
           explicit Makers( const Monitor &monitor )
             : mMonitor( monitor )
-          {}
+          {
+          }
           bool cancelled() const override { return mMonitor.cancelled(); }
 
         private:
@@ -117,9 +118,10 @@ namespace stillhead
     {
       const Destination &destination = mDestinations.at( table.output );
       if ( table.hasGaps && !destination.holdsGaps() )
-        throw QgsProcessingException( Text::tr( "%1 has places without figures (no source or no terrain), which the format "
-                                                "of %2 cannot hold; choose a GeoPackage (.gpkg)." )
-                                        .arg( table.output, destination.path() ) );
+        throw QgsProcessingException(
+          Text::tr( "%1 has places without figures (no source or no terrain), which the format "
+                    "of %2 cannot hold; choose a GeoPackage (.gpkg)." )
+            .arg( table.output, destination.path() ) );
     }
   }
 

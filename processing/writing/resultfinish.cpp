@@ -26,9 +26,11 @@ namespace stillhead
         explicit Finisher( const WrittenLayer &written, const ResultStyle &style )
           : ResultStyler( written.what, style )
           , mMetadata( written.metadata )
-        {}
+        {
+        }
 
-        void postProcessLayer( QgsMapLayer *layer, QgsProcessingContext &context, QgsProcessingFeedback *feedback ) override
+        void postProcessLayer(
+          QgsMapLayer *layer, QgsProcessingContext &context, QgsProcessingFeedback *feedback ) override
         {
           ResultStyler::postProcessLayer( layer, context, feedback );
           if ( layer )
@@ -44,8 +46,8 @@ namespace stillhead
     {
       // Without its name the layer is not found, and nothing is said.
       const QString uri = written.id.contains( QLatin1String( "|layername=" ) )
-                            ? written.id
-                            : QStringLiteral( "%1|layername=%2" ).arg( written.id, layerNameOf( written.id ) );
+        ? written.id
+        : QStringLiteral( "%1|layername=%2" ).arg( written.id, layerNameOf( written.id ) );
       QString error;
       try
       {
@@ -96,7 +98,8 @@ namespace stillhead
       if ( written.inGeoPackage )
       {
         // Metadata first: the session keeps what it saw when a file was opened, and styling opens it.
-        for ( const QString &error : { storeMetadata( written ), storeDefaultStyle( written.id, written.what, style ) } )
+        for ( const QString &error :
+          { storeMetadata( written ), storeDefaultStyle( written.id, written.what, style ) } )
         {
           if ( !error.isEmpty() )
             feedback.pushWarning( error );

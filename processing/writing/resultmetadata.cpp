@@ -7,8 +7,8 @@
 #include "processing/text/text.h"
 
 #include <qgsmaplayer.h>
-#include <qgsproperty.h>
 #include <qgsprocessingparameters.h>
+#include <qgsproperty.h>
 #include <qgsreferencedgeometry.h>
 
 #include <QDateTime>

@@ -54,7 +54,8 @@ namespace stillhead
         }
     };
 
-    void appendOwn( QgsAttributes &attributes, const ResultContext &context, const SpanWords &words, std::size_t number )
+    void appendOwn(
+      QgsAttributes &attributes, const ResultContext &context, const SpanWords &words, std::size_t number )
     {
       const Piece &piece = context.result.pieces[number];
       const DrawnFeature &feature = context.featureOf( context.lineOf( piece ) );
@@ -73,8 +74,9 @@ namespace stillhead
       attributes << QVariant( piece.over );
       attributes << QVariant( piece.isShort );
       attributes << oneBased( piece.zone );
-      attributes << ( figures ? context.units.pressureValue( context.result.zones[static_cast<std::size_t>( piece.zone )].doubtPa )
-                              : QVariant() );
+      attributes << ( figures
+          ? context.units.pressureValue( context.result.zones[static_cast<std::size_t>( piece.zone )].doubtPa )
+          : QVariant() );
       attributes << QVariant( piece.closeCall );
     }
 
@@ -116,7 +118,8 @@ namespace stillhead
     table.hasGaps = std::any_of( context.result.pieces.begin(), context.result.pieces.end(),
       []( const Piece &piece ) { return std::isnan( piece.pressureHighPa ); } );
     const SpanWords words( context );
-    table.make = [&context, words, width = table.fields.count()]( std::size_t first, std::size_t last, QgsFeature *features ) {
+    table.make = [&context, words, width = table.fields.count()](
+                   std::size_t first, std::size_t last, QgsFeature *features ) {
       std::vector<PieceVertex> vertices;
       for ( std::size_t i = first; i < last; ++i )
       {

@@ -52,10 +52,11 @@ namespace stillhead
         QgsAttributes attributes;
         attributes << static_cast<int>( i ) + 1 << ( stretch.over ? word::STRETCH_OVER : word::STRETCH_SHORT )
                    << context.units.pressureValue( stretch.worstPa ) << context.units.pressureValue( stretch.beyondPa )
-                   << context.units.lengthValue( stretch.worstElevationM ) << context.units.lengthValue( stretch.lengthM )
-                   << stretch.mainlines << stretch.laterals << stretch.closeCall
-                   << placeLabel( stretch.worstPa, stretch.worstElevationM, context.units, context.limits.leastFor( role ),
-                        context.limits.mostFor( role ) );
+                   << context.units.lengthValue( stretch.worstElevationM )
+                   << context.units.lengthValue( stretch.lengthM ) << stretch.mainlines << stretch.laterals
+                   << stretch.closeCall
+                   << placeLabel( stretch.worstPa, stretch.worstElevationM, context.units,
+                        context.limits.leastFor( role ), context.limits.mostFor( role ) );
         features[i - first].setAttributes( attributes );
         features[i - first].setGeometry( stretchOutline( context, stretch, distanceM, *measure ) );
       }
