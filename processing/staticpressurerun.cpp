@@ -14,6 +14,7 @@
 #include "processing/text/refusaltext.h"
 #include "processing/text/summarytext.h"
 #include "processing/text/text.h"
+#include "processing/writing/stretchoutline.h"
 
 #include <qgsexception.h>
 
@@ -29,7 +30,8 @@ namespace stillhead
 
     // How the progress bar is shared out.
     constexpr double READ_TO = 8.0;
-    constexpr double SOLVE_TO = 75.0;
+    constexpr double SOLVE_TO = 65.0;
+    constexpr double OUTLINE_TO = 80.0;
     constexpr double SURFACE_TO = 90.0;
     constexpr double WRITE_TO = 99.0;
 
@@ -46,12 +48,6 @@ namespace stillhead
     {
       const int choice = values.choice( parameter::LINE_Z_UNIT );
       return choice == 0 ? terrain.unit.metresPerUnit : metresPer( static_cast<ElevationUnit>( choice - 1 ) );
-    }
-
-    std::vector<ResultTable> allTables( const ResultContext &context )
-    {
-      return { spanTable( context ), nodeTable( context ), stretchTable( context ), extremeTable( context ),
-        findingTable( context ) };
     }
 
   } // namespace
@@ -173,8 +169,10 @@ namespace stillhead
   {
     const ResultContext context { mResult, mDrawn, *mMeasure, mUnits, mLimits, mStyle, mTerrain.unit.metresPerUnit };
     OutputSet outputs( mValues, staticPressureLayers() );
+    std::vector<QgsGeometry> outlines;
     std::vector<ResultTable> tables;
-    for ( ResultTable &table : allTables( context ) )
+    for ( ResultTable table : { spanTable( context ), nodeTable( context ), stretchTable( context, outlines ),
+            extremeTable( context ), findingTable( context ) } )
     {
       if ( outputs.isAsked( table.output ) )
         tables.push_back( std::move( table ) );
@@ -185,6 +183,11 @@ namespace stillhead
     const QString summary = summaryText( context, mSource.source );
     const RunFacts runFacts = facts( summary );
     // The longest work first: a cancel then finds nothing replaced yet.
+    if ( outputs.isAsked( output::STRETCHES ) )
+    {
+      FeedbackMonitor monitor( &mFeedback, SOLVE_TO, OUTLINE_TO );
+      outlines = stretchOutlines( context, outlineDistanceM( mUnits.lengthUnit() ), monitor );
+    }
     writeSurface( outputs, runFacts, results );
     writeTables( outputs, tables, runFacts, results );
     outputs.commit();
@@ -204,7 +207,7 @@ namespace stillhead
     input.hasLow = mSource.source.low.has_value();
     if ( !QgsProcessingParameters::isDynamic( mValues.values(), parameter::COVER ) )
       input.coverM = mUnits.metres( mValues.number( parameter::COVER ) );
-    FeedbackMonitor monitor( &mFeedback, SOLVE_TO, SURFACE_TO );
+    FeedbackMonitor monitor( &mFeedback, OUTLINE_TO, SURFACE_TO );
     WrittenLayer written;
     written.id = QgsProcessingParameters::parameterAsOutputLayer(
       mValues.definition( output::SURFACE ), mValues.values(), mValues.context() );
@@ -221,7 +224,7 @@ namespace stillhead
   void StaticPressureRun::writeTables(
     OutputSet &outputs, const std::vector<ResultTable> &tables, const RunFacts &facts, QVariantMap &results )
   {
-    double from = outputs.isAsked( output::SURFACE ) ? SURFACE_TO : SOLVE_TO;
+    double from = outputs.isAsked( output::SURFACE ) ? SURFACE_TO : OUTLINE_TO;
     double rows = 0.0;
     for ( const ResultTable &table : tables )
       rows += static_cast<double>( table.rows ) + 1.0;

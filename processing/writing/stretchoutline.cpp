@@ -34,7 +34,8 @@ namespace stillhead
         LocalPlane( const PlanPoint &origin, const GroundScale &scale )
           : mOrigin( origin )
           , mScale( scale )
-        {}
+        {
+        }
 
         double x( const PlanPoint &place ) const
         {
@@ -80,13 +81,15 @@ namespace stillhead
           const Piece &piece = result.pieces[static_cast<std::size_t>( number )];
           const Span &span = result.network.spans[static_cast<std::size_t>( piece.span )];
           const int toNode = piece.toM >= span.toM ? span.toNode : -1;
-          if ( !runs.empty() && runs.back().stretch == s && runs.back().line == span.line && runs.back().toM == piece.fromM )
+          if ( !runs.empty() && runs.back().stretch == s && runs.back().line == span.line
+            && runs.back().toM == piece.fromM )
           {
             runs.back().toM = piece.toM;
             runs.back().toNode = toNode;
             continue;
           }
-          runs.push_back( { s, span.line, piece.fromM, piece.toM, piece.fromM <= span.fromM ? span.fromNode : -1, toNode } );
+          runs.push_back(
+            { s, span.line, piece.fromM, piece.toM, piece.fromM <= span.fromM ? span.fromNode : -1, toNode } );
         }
       }
       return runs;
@@ -105,7 +108,8 @@ namespace stillhead
     {
       std::uint64_t result = 0;
       for ( unsigned bit = 0; bit < 32; ++bit )
-        result |= static_cast<std::uint64_t>( x >> bit & 1u ) << ( 2 * bit ) | static_cast<std::uint64_t>( y >> bit & 1u ) << ( 2 * bit + 1 );
+        result |= static_cast<std::uint64_t>( x >> bit & 1u ) << ( 2 * bit )
+          | static_cast<std::uint64_t>( y >> bit & 1u ) << ( 2 * bit + 1 );
       return result;
     }
 
@@ -116,7 +120,8 @@ namespace stillhead
           : mResult( result )
           , mPlanes( planes )
           , mDistanceM( distanceM )
-        {}
+        {
+        }
 
         Outline widened( const PipeRun &run ) const
         {
@@ -146,10 +151,11 @@ namespace stillhead
         //! Counted in widths from a place far to the south-west, so that it is never negative.
         std::uint32_t cell( double metres ) const
         {
-          return static_cast<std::uint32_t>( static_cast<std::int64_t>( std::floor( metres / mDistanceM ) ) + ( 1LL << 31 ) );
+          return static_cast<std::uint32_t>(
+            static_cast<std::int64_t>( std::floor( metres / mDistanceM ) ) + ( 1LL << 31 ) );
         }
 
-        template<class Add> void addPipe( const PipeRun &run, const Add &add ) const
+        template <class Add> void addPipe( const PipeRun &run, const Add &add ) const
         {
           const CanonicalDrawing &drawing = mResult.drawing;
           const CanonicalLine &line = drawing.lines[static_cast<std::size_t>( run.line )];
