@@ -1,10 +1,11 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Every run of pipe is widened by itself, in a plane of metres laid at its stretch: exact there, and off by far less than a
-// pen's width over any stretch, in degrees and in stretched map projections alike. Neighbours are then united two by two,
-// round after round: widening thousands of lines at once costs many times as much, and on one thread only.
+// Every run of pipe is widened by itself, in a plane of metres laid at its stretch: exact there, and off by far less than
+// a pen's width over any stretch, in degrees and in stretched map projections alike. Neighbours are then united two by
+// two, round after round: widening thousands of lines at once costs many times as much, and on one thread only.
 #include "processing/writing/stretchoutline.h"
 
 #include "core/feedback/parallel.h"
+#include "processing/writing/piperuns.h"
 
 #include <qgslinestring.h>
 
@@ -59,119 +60,6 @@ namespace stillhead
         GroundScale mScale;
     };
 
-    //! Pipe of one line without a gap, with the nodes that it ends at.
-    struct PipeRun
-    {
-        std::size_t stretch = 0;
-        int line = -1;
-        double fromM = 0.0;
-        double toM = 0.0;
-        int fromNode = -1; //!< −1: it ends within a span
-        int toNode = -1;
-    };
-
-    //! The runs of every stretch, those of one stretch together. Pieces of a stretch rise along their lines.
-    std::vector<PipeRun> pipeRuns( const StaticResult &result )
-    {
-      std::vector<PipeRun> runs;
-      for ( std::size_t s = 0; s < result.stretches.size(); ++s )
-      {
-        for ( const int number : result.stretches[s].pieces )
-        {
-          const Piece &piece = result.pieces[static_cast<std::size_t>( number )];
-          const Span &span = result.network.spans[static_cast<std::size_t>( piece.span )];
-          const int toNode = piece.toM >= span.toM ? span.toNode : -1;
-          if ( !runs.empty() && runs.back().stretch == s && runs.back().line == span.line
-            && runs.back().toM == piece.fromM )
-          {
-            runs.back().toM = piece.toM;
-            runs.back().toNode = toNode;
-            continue;
-          }
-          runs.push_back(
-            { s, span.line, piece.fromM, piece.toM, piece.fromM <= span.fromM ? span.fromNode : -1, toNode } );
-        }
-      }
-      return runs;
-    }
-
-    //! An outline under way, and where it lies in an order that keeps neighbours together.
-    struct Outline
-    {
-        std::size_t stretch = 0;
-        std::uint64_t order = 0;
-        QgsGeometry geometry;
-    };
-
-    //! Bits of two 32-bit numbers taken in turn: places near in this order are near on the ground.
-    std::uint64_t interleaved( std::uint32_t x, std::uint32_t y )
-    {
-      std::uint64_t result = 0;
-      for ( unsigned bit = 0; bit < 32; ++bit )
-        result |= static_cast<std::uint64_t>( x >> bit & 1u ) << ( 2 * bit )
-          | static_cast<std::uint64_t>( y >> bit & 1u ) << ( 2 * bit + 1 );
-      return result;
-    }
-
-    class Widener
-    {
-      public:
-        Widener( const StaticResult &result, const std::vector<LocalPlane> &planes, double distanceM )
-          : mResult( result )
-          , mPlanes( planes )
-          , mDistanceM( distanceM )
-        {
-        }
-
-        Outline widened( const PipeRun &run ) const
-        {
-          const LocalPlane &plane = mPlanes[run.stretch];
-          QVector<double> x;
-          QVector<double> y;
-          const auto add = [&]( const PlanPoint &place ) {
-            x << plane.x( place );
-            y << plane.y( place );
-          };
-          // Ends join within a tolerance but stay where they are: the way to the node keeps the outline in one piece.
-          if ( run.fromNode >= 0 )
-            add( mResult.network.nodes[static_cast<std::size_t>( run.fromNode )].place );
-          addPipe( run, add );
-          if ( run.toNode >= 0 )
-            add( mResult.network.nodes[static_cast<std::size_t>( run.toNode )].place );
-
-          Outline outline;
-          outline.stretch = run.stretch;
-          const int middle = x.size() / 2;
-          outline.order = interleaved( cell( x[middle] ), cell( y[middle] ) );
-          outline.geometry = QgsGeometry( std::make_unique<QgsLineString>( x, y ) ).buffer( mDistanceM, SEGMENTS );
-          return outline;
-        }
-
-      private:
-        //! Counted in widths from a place far to the south-west, so that it is never negative.
-        std::uint32_t cell( double metres ) const
-        {
-          return static_cast<std::uint32_t>(
-            static_cast<std::int64_t>( std::floor( metres / mDistanceM ) ) + ( 1LL << 31 ) );
-        }
-
-        template <class Add> void addPipe( const PipeRun &run, const Add &add ) const
-        {
-          const CanonicalDrawing &drawing = mResult.drawing;
-          const CanonicalLine &line = drawing.lines[static_cast<std::size_t>( run.line )];
-          add( drawing.placeAt( line, run.fromM ) );
-          const auto first = drawing.alongM.begin() + static_cast<std::ptrdiff_t>( line.first );
-          const auto last = first + static_cast<std::ptrdiff_t>( line.count );
-          for ( auto along = std::upper_bound( first, last, run.fromM ); along != last && *along < run.toM; ++along )
-            add( drawing.vertices[static_cast<std::size_t>( along - drawing.alongM.begin() )] );
-          add( drawing.placeAt( line, run.toM ) );
-        }
-
-        const StaticResult &mResult;
-        const std::vector<LocalPlane> &mPlanes;
-        double mDistanceM;
-    };
-
     std::vector<LocalPlane> planesOf( const ResultContext &context )
     {
       std::vector<LocalPlane> planes;
@@ -185,28 +73,66 @@ namespace stillhead
       return planes;
     }
 
+    //! An outline under way, and where it lies in an order that keeps neighbours together.
+    struct Outline
+    {
+        std::size_t stretch = 0;
+        std::uint64_t order = 0;
+        QgsGeometry geometry;
+    };
+
+    //! Bits of two numbers taken in turn: places near in this order are near on the ground.
+    std::uint64_t interleaved( std::uint32_t x, std::uint32_t y )
+    {
+      std::uint64_t result = 0;
+      for ( unsigned bit = 0; bit < 32; ++bit )
+      {
+        result |= static_cast<std::uint64_t>( x >> bit & 1u ) << ( 2 * bit );
+        result |= static_cast<std::uint64_t>( y >> bit & 1u ) << ( 2 * bit + 1 );
+      }
+      return result;
+    }
+
+    //! Metres in steps of \a step from a place far to the south-west, so that the number is never negative.
+    std::uint32_t stepsOf( double metres, double step )
+    {
+      return static_cast<std::uint32_t>( static_cast<std::int64_t>( std::floor( metres / step ) ) + ( 1LL << 31 ) );
+    }
+
+    Outline widened( const PipeRun &run, const StaticResult &result, const LocalPlane &plane, double distanceM )
+    {
+      QVector<double> x;
+      QVector<double> y;
+      for ( const PlanPoint &place : placesOf( run, result ) )
+      {
+        x << plane.x( place );
+        y << plane.y( place );
+      }
+      const int middle = x.size() / 2;
+      Outline outline;
+      outline.stretch = run.stretch;
+      outline.order = interleaved( stepsOf( x[middle], distanceM ), stepsOf( y[middle], distanceM ) );
+      outline.geometry = QgsGeometry( std::make_unique<QgsLineString>( x, y ) ).buffer( distanceM, SEGMENTS );
+      return outline;
+    }
+
     //! Unites neighbours of one stretch two by two, once.
     std::vector<Outline> unitedOnce( std::vector<Outline> outlines, Monitor &monitor, double from, double to )
     {
+      const auto hasPartner = [&outlines]( std::size_t i ) {
+        return i + 1 < outlines.size() && outlines[i + 1].stretch == outlines[i].stretch;
+      };
       std::vector<std::size_t> firsts;
-      for ( std::size_t i = 0; i < outlines.size(); ++i )
-      {
+      for ( std::size_t i = 0; i < outlines.size(); i += hasPartner( i ) ? 2 : 1 )
         firsts.push_back( i );
-        if ( i + 1 < outlines.size() && outlines[i + 1].stretch == outlines[i].stretch )
-          ++i;
-      }
       std::vector<Outline> united( firsts.size() );
       parallelRanges( firsts.size(), 1, 0, monitor, from, to, [&]( std::size_t first, std::size_t last, unsigned ) {
         for ( std::size_t i = first; i < last; ++i )
         {
-          Outline &own = outlines[firsts[i]];
-          const std::size_t next = firsts[i] + 1;
-          if ( next < outlines.size() && outlines[next].stretch == own.stretch )
-          {
-            own.geometry = own.geometry.combine( outlines[next].geometry );
-            outlines[next].geometry = QgsGeometry();
-          }
-          united[i] = std::move( own );
+          const std::size_t own = firsts[i];
+          united[i] = outlines[own];
+          if ( hasPartner( own ) )
+            united[i].geometry = outlines[own].geometry.combine( outlines[own + 1].geometry );
         }
       } );
       return united;
@@ -218,12 +144,12 @@ namespace stillhead
   {
     const std::vector<LocalPlane> planes = planesOf( context );
     const std::vector<PipeRun> runs = pipeRuns( context.result );
-    const Widener widener( context.result, planes, distanceM );
     std::vector<Outline> outlines( runs.size() );
-    parallelRanges( runs.size(), 32, 0, monitor, 0.0, WIDENED, [&]( std::size_t first, std::size_t last, unsigned ) {
-      for ( std::size_t i = first; i < last; ++i )
-        outlines[i] = widener.widened( runs[i] );
-    } );
+    parallelRanges(
+      runs.size(), 32, 0, monitor, 0.0, WIDENED, [&]( std::size_t first, std::size_t last, unsigned ) {
+        for ( std::size_t i = first; i < last; ++i )
+          outlines[i] = widened( runs[i], context.result, planes[runs[i].stretch], distanceM );
+      } );
     std::sort( outlines.begin(), outlines.end(), []( const Outline &a, const Outline &b ) {
       return std::tie( a.stretch, a.order ) < std::tie( b.stretch, b.order );
     } );
