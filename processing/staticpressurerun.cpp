@@ -114,6 +114,25 @@ namespace stillhead
     }
     logSource();
     logFindings();
+    warnOfElevations();
+  }
+
+  void StaticPressureRun::warnOfElevations() const
+  {
+    // The lowest shore and the highest summit on dry land, with room to spare.
+    constexpr double LOWEST_M = -500.0;
+    constexpr double HIGHEST_M = 9000.0;
+    for ( const Piece &piece : mResult.pieces )
+    {
+      if ( !( piece.lowestM < LOWEST_M ) && !( piece.highestM > HIGHEST_M ) )
+        continue;
+      const double elevationM = piece.lowestM < LOWEST_M ? piece.lowestM : piece.highestM;
+      mFeedback.pushWarning(
+        Text::tr( "Pipe lies at an elevation of %1, which no ground has: the terrain may use a value "
+                  "for “no data” without declaring it, or another unit than it says." )
+          .arg( mUnits.lengthText( elevationM ) ) );
+      return;
+    }
   }
 
   void StaticPressureRun::logSource() const

@@ -44,6 +44,7 @@ namespace stillhead
         OutputSet &outputs, const std::vector<ResultTable> &tables, const RunFacts &facts, QVariantMap &results );
       void logSource() const;
       void logFindings() const;
+      void warnOfElevations() const;
       RunFacts facts( const QString &summary ) const;
       void addNumbers( QVariantMap &results ) const;
 

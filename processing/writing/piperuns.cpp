@@ -17,8 +17,8 @@ namespace stillhead
         const Piece &piece = result.pieces[static_cast<std::size_t>( number )];
         const Span &span = result.network.spans[static_cast<std::size_t>( piece.span )];
         const int toNode = piece.toM >= span.toM ? span.toNode : -1;
-        const bool goesOn = !runs.empty() && runs.back().stretch == s && runs.back().line == span.line
-          && runs.back().toM == piece.fromM;
+        const bool goesOn =
+          !runs.empty() && runs.back().stretch == s && runs.back().line == span.line && runs.back().toM == piece.fromM;
         if ( goesOn )
         {
           runs.back().toM = piece.toM;

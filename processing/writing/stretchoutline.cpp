@@ -145,11 +145,10 @@ namespace stillhead
     const std::vector<LocalPlane> planes = planesOf( context );
     const std::vector<PipeRun> runs = pipeRuns( context.result );
     std::vector<Outline> outlines( runs.size() );
-    parallelRanges(
-      runs.size(), 32, 0, monitor, 0.0, WIDENED, [&]( std::size_t first, std::size_t last, unsigned ) {
-        for ( std::size_t i = first; i < last; ++i )
-          outlines[i] = widened( runs[i], context.result, planes[runs[i].stretch], distanceM );
-      } );
+    parallelRanges( runs.size(), 32, 0, monitor, 0.0, WIDENED, [&]( std::size_t first, std::size_t last, unsigned ) {
+      for ( std::size_t i = first; i < last; ++i )
+        outlines[i] = widened( runs[i], context.result, planes[runs[i].stretch], distanceM );
+    } );
     std::sort( outlines.begin(), outlines.end(), []( const Outline &a, const Outline &b ) {
       return std::tie( a.stretch, a.order ) < std::tie( b.stretch, b.order );
     } );

@@ -117,6 +117,8 @@ void TestContract::isAsWritten()
     if ( id == "staticpressure" )
       lines << fieldsOf(
         runAlgorithm( id, mSlope.parameters() ), { "SPANS", "NODES", "STRETCHES", "EXTREMES", "FINDINGS" } );
+    if ( id == "pressuresurface" )
+      lines << fieldsOf( runAlgorithm( id, mSlope.surfaceParameters() ), { "BAND_AREAS" } );
   }
   lines << QString() << "states";
   for ( int state = 0; state <= static_cast<int>( stillhead::State::WithinLimits ); ++state )

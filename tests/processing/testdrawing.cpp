@@ -91,6 +91,7 @@ void TestDrawing::lateralsInAnotherCrs()
   const Outcome outcome =
     runAlgorithm( "staticpressure", mSlope.parameters( { { "LATERALS", asParameter( laterals ) } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
+  QVERIFY( outcome.said( outcome.infos, "LATERALS (“heads”) is reprojected from EPSG:4326" ) );
   STILLHEAD_SAME( outcome.number( "LENGTH_NO_SOURCE" ), 0.0 );
   STILLHEAD_NEAR( outcome.number( "LENGTH_TOTAL" ), 330.0, 2e-3 );
   QCOMPARE( outcome.results.value( "NODE_COUNT" ).toInt(), 4 );

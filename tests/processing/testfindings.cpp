@@ -19,6 +19,7 @@ class TestFindings : public QObject
     void summits();
     void summitThatCannotBeRuledOut();
     void missingSurvey();
+    void undeclaredNoData();
 
   private:
     //! The only finding of the run, or none.
@@ -178,6 +179,18 @@ void TestFindings::missingSurvey()
     QString( "Mainlines feature 2 has no surveyed Z (missing, or zero throughout); the terrain is used for it." ) );
   QCOMPARE( finding["drawn_fid"].toLongLong(), 2LL );
   STILLHEAD_NEAR( outcome.number( "P_HIGHEST" ), 70.0, 1e-6 );
+}
+
+void TestFindings::undeclaredNoData()
+{
+  const QString holes = mSlope.makeTerrain(
+    "undeclared.tif", []( double east, double ) { return east > 150.0 ? -9999.0 : 100.0 - 0.1 * east; } );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "TERRAIN", holes } } ) );
+  QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
+  QVERIFY( outcome.said(
+    outcome.warnings, "which no ground has: the terrain may use a value for “no data” without declaring it" ) );
+  const Outcome sound = runAlgorithm( "staticpressure", mSlope.parameters() );
+  QVERIFY( !sound.said( sound.warnings, "which no ground has" ) );
 }
 
 int main( int argc, char *argv[] )

@@ -22,6 +22,7 @@ class TestPressureSurface : public QObject
     void staysWithinTheArea();
     void terrainInFeet();
     void agreesWithThePipe();
+    void bandAreas();
     void refusals_data();
     void refusals();
     void keepsWhatItIs();
@@ -94,6 +95,32 @@ void TestPressureSurface::groundsThatAreTooHighOrLow()
   // The pipe lies a metre below its ground.
   STILLHEAD_NEAR( outcome.number( "GROUND_TOO_HIGH" ), 116.0, 1e-9 );
   STILLHEAD_NEAR( outcome.number( "GROUND_TOO_LOW" ), 91.0, 1e-9 );
+}
+
+// 50 + east / 10: under 60 as far as east 100, 60 to 70 as far as 200, 70 and over beyond; the ground is 81 m wide and its
+// plan is true to scale within 0.1 %.
+void TestPressureSurface::bandAreas()
+{
+  const Outcome outcome = runAlgorithm(
+    "pressuresurface", parameters( { { "BANDS", "60 70" }, { "BAND_AREAS", QgsProcessing::TEMPORARY_OUTPUT } } ) );
+  QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
+  const std::vector<Row> areas = outcome.features( "BAND_AREAS" );
+  QCOMPARE( areas.size(), std::size_t( 3 ) );
+  const double widthsM[] { 100.5, 100.0, 200.5 };
+  for ( const Row &area : areas )
+  {
+    const int band = area["band"].toInt();
+    QVERIFY( band >= 0 && band <= 2 );
+    STILLHEAD_NEAR( area["area"].toDouble(), widthsM[band] * 81.0, widthsM[band] * 81.0 * 1e-3 );
+    QCOMPARE( area["p_from"].isNull(), band == 0 );
+    QCOMPARE( area["p_to"].isNull(), band == 2 );
+    if ( band == 1 )
+    {
+      STILLHEAD_SAME( area["p_from"].toDouble(), 60.0 );
+      STILLHEAD_SAME( area["p_to"].toDouble(), 70.0 );
+    }
+    QVERIFY( !area["band_text"].toString().isEmpty() );
+  }
 }
 
 void TestPressureSurface::staysWithinTheArea()

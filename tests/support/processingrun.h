@@ -206,6 +206,14 @@ namespace stillhead::test
         mMains = drawLayer( lines(), { { line( { { 0, 0 }, { 300, 0 } } ) } }, QStringLiteral( "pipe" ) );
       }
 
+      //! Parameters of a surface with band areas over the slope.
+      QVariantMap surfaceParameters() const
+      {
+        return { { "TERRAIN", path( "slope.tif" ) }, { "SOURCE", place( 0, 0 ) }, { "SOURCE_KIND", 1 },
+          { "SOURCE_VALUE", 150 }, { "PRESSURE_UNIT", 3 }, { "LENGTH_UNIT", 1 }, { "SURFACE", path( "contract.tif" ) },
+          { "BAND_AREAS", QgsProcessing::TEMPORARY_OUTPUT } };
+      }
+
       static QString lines() { return QStringLiteral( "LineString?crs=EPSG:32631" ); }
 
       QString path( const QString &file ) const { return mFolder.filePath( file ); }
