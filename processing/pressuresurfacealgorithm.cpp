@@ -57,6 +57,8 @@ namespace stillhead
 
     addParameter(
       new QgsProcessingParameterRasterDestination( output::SURFACE, Text::tr( "Static pressure surface" ) ) );
+    addParameter( new QgsProcessingParameterFeatureSink(
+      output::BAND_AREAS, Text::tr( "Areas of the pressure bands" ), compat::Source::Polygon, QVariant(), true ) );
 
     addNumberOutputs( {
       { output::STATIC_LEVEL_HIGH, Text::tr( "Elevation of the static level, high case" ) },

@@ -3,6 +3,7 @@
 #include "processing/pressuresurfacerun.h"
 
 #include "core/terrain/terrainreader.h"
+#include "processing/bandareaoutput.h"
 #include "processing/feedbackmonitor.h"
 #include "processing/parameternames.h"
 #include "processing/reading/areareader.h"
@@ -20,7 +21,7 @@ namespace stillhead
 
   QStringList pressureSurfaceLayers()
   {
-    return { output::SURFACE };
+    return { output::SURFACE, output::BAND_AREAS };
   }
 
   PressureSurfaceRun::PressureSurfaceRun(
@@ -72,10 +73,28 @@ namespace stillhead
     return facts;
   }
 
+  void PressureSurfaceRun::writeAreas( OutputSet &outputs, double fromPercent, QVariantMap &results )
+  {
+    if ( !outputs.isAsked( output::BAND_AREAS ) )
+      return;
+    FeedbackMonitor monitor( &mFeedback, fromPercent, 99.0 );
+    WrittenLayer areas;
+    areas.id = writeBandAreas(
+      outputs, mInput, mTerrain, mLimits, mStyle, mUnits, mValues.context().transformContext(), monitor );
+    areas.what = ResultLayer::BandAreas;
+    areas.metadata =
+      resultMetadata( facts(), mValues.definition( output::BAND_AREAS )->description(), layerNameOf( areas.id ) );
+    areas.inGeoPackage = outputs.isGeoPackage( output::BAND_AREAS );
+    finishOnLoading( areas, mStyle, mValues.context() );
+    results.insert( output::BAND_AREAS, areas.id );
+    mWritten.push_back( areas );
+  }
+
   QVariantMap PressureSurfaceRun::write()
   {
     OutputSet outputs( mValues, pressureSurfaceLayers() );
-    FeedbackMonitor monitor( &mFeedback, 0.0, 99.0 );
+    const double surfaceTo = outputs.isAsked( output::BAND_AREAS ) ? 50.0 : 99.0;
+    FeedbackMonitor monitor( &mFeedback, 0.0, surfaceTo );
     QVariantMap results;
     WrittenLayer surface;
     surface.id = QgsProcessingParameters::parameterAsOutputLayer(
@@ -86,9 +105,11 @@ namespace stillhead
     writeSurfaceFile( surface.id, mInput, mTerrain, mUnits, monitor );
     finishOnLoading( surface, mStyle, mValues.context() );
     mWritten.push_back( surface );
+    outputs.noteWritten( output::SURFACE );
+    results.insert( output::SURFACE, surface.id );
+    writeAreas( outputs, surfaceTo, results );
     outputs.commit();
     mFeedback.setProgress( 100.0 );
-    results.insert( output::SURFACE, surface.id );
 
     const RestingWater high = restingWater( mInput.levels.highM, mInput.coverM, mUnits );
     const RestingWater low = restingWater( mInput.levels.lowM, mInput.coverM, mUnits );

@@ -40,6 +40,7 @@ namespace stillhead
 
     private:
       RunFacts facts() const;
+      void writeAreas( OutputSet &outputs, double fromPercent, QVariantMap &results );
 
       const ParameterValues &mValues;
       Terrain &mTerrain;

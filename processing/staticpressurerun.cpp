@@ -14,6 +14,7 @@
 #include "processing/surfaceoutput.h"
 #include "processing/text/summarytext.h"
 #include "processing/text/text.h"
+#include "processing/writing/stretchoutline.h"
 
 #include <qgsexception.h>
 
@@ -29,7 +30,8 @@ namespace stillhead
 
     // How the progress bar is shared out.
     constexpr double READ_TO = 8.0;
-    constexpr double SOLVE_TO = 75.0;
+    constexpr double SOLVE_TO = 65.0;
+    constexpr double OUTLINE_TO = 80.0;
     constexpr double SURFACE_TO = 90.0;
     constexpr double WRITE_TO = 99.0;
 
@@ -46,12 +48,6 @@ namespace stillhead
     {
       const int choice = values.choice( parameter::LINE_Z_UNIT );
       return choice == 0 ? terrain.unit.metresPerUnit : metresPer( static_cast<ElevationUnit>( choice - 1 ) );
-    }
-
-    std::vector<ResultTable> allTables( const ResultContext &context )
-    {
-      return { spanTable( context ), nodeTable( context ), stretchTable( context ), extremeTable( context ),
-        findingTable( context ) };
     }
 
   } // namespace
@@ -159,6 +155,25 @@ namespace stillhead
     }
     logSources();
     logFindings();
+    warnOfElevations();
+  }
+
+  void StaticPressureRun::warnOfElevations() const
+  {
+    // The lowest shore and the highest summit on dry land, with room to spare.
+    constexpr double LOWEST_M = -500.0;
+    constexpr double HIGHEST_M = 9000.0;
+    for ( const Piece &piece : mResult.pieces )
+    {
+      if ( !( piece.lowestM < LOWEST_M ) && !( piece.highestM > HIGHEST_M ) )
+        continue;
+      const double elevationM = piece.lowestM < LOWEST_M ? piece.lowestM : piece.highestM;
+      mFeedback.pushWarning(
+        Text::tr( "Pipe lies at an elevation of %1, which no ground has: the terrain may use a value "
+                  "for “no data” without declaring it, or another unit than it says." )
+          .arg( mUnits.lengthText( elevationM ) ) );
+      return;
+    }
   }
 
   void StaticPressureRun::logSources() const
@@ -233,8 +248,10 @@ namespace stillhead
     const ResultContext context { mResult, mDrawn, *mMeasure, mUnits, mLimits, mNames, mStyle,
       mTerrain.unit.metresPerUnit };
     OutputSet outputs( mValues, staticPressureLayers() );
+    std::vector<QgsGeometry> outlines;
     std::vector<ResultTable> tables;
-    for ( ResultTable &table : allTables( context ) )
+    for ( ResultTable table : { spanTable( context ), nodeTable( context ), stretchTable( context, outlines ),
+            extremeTable( context ), findingTable( context ) } )
     {
       if ( outputs.isAsked( table.output ) )
         tables.push_back( std::move( table ) );
@@ -245,6 +262,11 @@ namespace stillhead
     const QString summary = summaryText( context, mSources.front().source );
     const RunFacts runFacts = facts( summary );
     // The longest work first: a cancel then finds nothing replaced yet.
+    if ( outputs.isAsked( output::STRETCHES ) )
+    {
+      FeedbackMonitor monitor( &mFeedback, SOLVE_TO, OUTLINE_TO );
+      outlines = stretchOutlines( context, outlineDistanceM( mUnits.lengthUnit() ), monitor );
+    }
     writeSurface( outputs, runFacts, results );
     writeTables( outputs, tables, runFacts, results );
     outputs.commit();
@@ -264,7 +286,7 @@ namespace stillhead
     input.hasLow = mSources.front().source.low.has_value();
     if ( !QgsProcessingParameters::isDynamic( mValues.values(), parameter::COVER ) )
       input.coverM = mUnits.metres( mValues.number( parameter::COVER ) );
-    FeedbackMonitor monitor( &mFeedback, SOLVE_TO, SURFACE_TO );
+    FeedbackMonitor monitor( &mFeedback, OUTLINE_TO, SURFACE_TO );
     WrittenLayer written;
     written.id = QgsProcessingParameters::parameterAsOutputLayer(
       mValues.definition( output::SURFACE ), mValues.values(), mValues.context() );
@@ -281,7 +303,7 @@ namespace stillhead
   void StaticPressureRun::writeTables(
     OutputSet &outputs, const std::vector<ResultTable> &tables, const RunFacts &facts, QVariantMap &results )
   {
-    double from = outputs.isAsked( output::SURFACE ) ? SURFACE_TO : SOLVE_TO;
+    double from = outputs.isAsked( output::SURFACE ) ? SURFACE_TO : OUTLINE_TO;
     double rows = 0.0;
     for ( const ResultTable &table : tables )
       rows += static_cast<double>( table.rows ) + 1.0;

@@ -55,6 +55,7 @@ namespace stillhead
       void logSources() const;
       void logSource( std::size_t number ) const;
       void logFindings() const;
+      void warnOfElevations() const;
       RunFacts facts( const QString &summary ) const;
       void addNumbers( QVariantMap &results ) const;
 

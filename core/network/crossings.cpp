@@ -98,6 +98,9 @@ namespace stillhead
     std::vector<Crossing> all;
     std::mutex mutex;
     const std::vector<Leg> &legs = index.legs();
+    const auto isTiny = [&]( const Leg &leg ) {
+      return drawing.lines[static_cast<std::size_t>( leg.line )].lengthM <= toleranceM;
+    };
     const std::vector<int> shapes = shapesOf( drawing );
     const auto drawnTwice = [&]( const Leg &leg, const Leg &other ) {
       return leg.line != other.line
@@ -108,6 +111,8 @@ namespace stillhead
         std::vector<Crossing> own;
         for ( std::size_t i = first; i < last; ++i )
         {
+          if ( isTiny( legs[i] ) )
+            continue;
           if ( i % 64 == 0 )
             stopIfCancelled( monitor );
           const PlanPoint &a = drawing.vertices[legs[i].vertex];
@@ -115,7 +120,8 @@ namespace stillhead
           index.visitBox( { std::min( a.x, b.x ), std::min( a.y, b.y ) },
             { std::max( a.x, b.x ), std::max( a.y, b.y ) }, [&]( int other ) {
               const std::size_t j = static_cast<std::size_t>( other );
-              if ( j <= i || drawnTwice( legs[i], legs[j] ) || areNeighbours( drawing, legs[i], legs[j] ) )
+              if ( j <= i || isTiny( legs[j] ) || drawnTwice( legs[i], legs[j] )
+                || areNeighbours( drawing, legs[i], legs[j] ) )
                 return;
               const auto crossing = crossingOf( drawing, legs[i], legs[j] );
               if ( crossing && !isOwnBend( *crossing, toleranceM ) )

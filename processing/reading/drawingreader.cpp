@@ -13,6 +13,8 @@
 
 #include <QHash>
 
+#include <algorithm>
+
 namespace stillhead
 {
 
@@ -64,14 +66,21 @@ namespace stillhead
       return QStringLiteral( "%1 (“%2”)" ).arg( layer.parameterName, layer.source->sourceName() );
     }
 
+    //! How many features there are to read; sources that do not know their number count for none.
+    double featureTotal( const std::vector<DrawnLayer> &layers )
+    {
+      double total = 1.0;
+      for ( const DrawnLayer &layer : layers )
+        total += static_cast<double>( std::max( 0LL, static_cast<long long>( layer.source->featureCount() ) ) );
+      return total;
+    }
+
     void readLayer( const DrawnLayer &layer, std::size_t number, DrawnInput &input, LineExtractor &extractor,
-      CoverReader &covers, SystemReader &systems, Monitor &monitor )
+      CoverReader &covers, SystemReader &systems, double total, Monitor &monitor )
     {
       const QgsFields fields = layer.source->fields();
       covers.beginLayer( fields, layer.expressions, layerText( layer ) );
       systems.beginLayer( fields );
-      const long long expected = layer.source->featureCount();
-      long long read = 0;
       QgsFeature feature;
       QgsFeatureIterator features = layer.source->getFeatures();
       while ( features.nextFeature( feature ) )
@@ -96,8 +105,8 @@ namespace stillhead
         }
         input.features.push_back(
           { layer.role, feature.id(), input.fields.attributes( feature.attributes(), number ) } );
-        if ( expected > 0 && ++read % 256 == 0 )
-          monitor.progress( static_cast<double>( read ) / static_cast<double>( expected ) );
+        if ( input.features.size() % 256 == 0 )
+          monitor.progress( std::min( 1.0, static_cast<double>( input.features.size() ) / total ) );
       }
     }
 
@@ -122,13 +131,18 @@ namespace stillhead
 
     CoverReader covers( values, units );
     SystemReader systems( input.drawing );
+    const double total = featureTotal( layers );
     long long curves = 0;
     for ( std::size_t i = 0; i < layers.size(); ++i )
     {
       LineExtractor extractor( input.drawing, layers[i].source->sourceCrs(), input.crs,
         values.context().transformContext(), options.useLineZ ? options.metresPerZ : 0.0 );
-      readLayer( layers[i], i, input, extractor, covers, systems, monitor );
+      readLayer( layers[i], i, input, extractor, covers, systems, total, monitor );
       curves += extractor.curves();
+      if ( layers[i].source->sourceCrs() != input.crs )
+        feedback.pushInfo(
+          Text::tr( "%1 is reprojected from %2 to %3." )
+            .arg( layerText( layers[i] ), crsText( layers[i].source->sourceCrs() ), crsText( input.crs ) ) );
       if ( layers[i].role == Role::Mainline && input.features.empty() )
         throw QgsProcessingException( Text::tr( "%1 has no lines; draw the mainlines first, or choose another layer." )
                                         .arg( layerText( layers[i] ) ) );

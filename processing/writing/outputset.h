@@ -9,6 +9,7 @@
 
 #include <qgsprocessingfeedback.h>
 
+#include <functional>
 #include <map>
 #include <vector>
 
@@ -43,6 +44,17 @@ namespace stillhead
        */
       QString write( const ResultTable &table, const QgsCoordinateReferenceSystem &crs, QgsProcessingFeedback &feedback,
         double fromPercent, double toPercent );
+
+      //! Takes one row; called from one thread at a time.
+      using TakeRow = std::function<void( QgsFeature &row )>;
+
+      /**
+       * Writes rows whose number is not known before: \a produce makes them and hands each to what it is given.
+       * \returns the id of the layer
+       * \throws QgsProcessingException, Cancelled, and what \a produce throws
+       */
+      QString writeStream( const QString &output, const QgsFields &fields, compat::WkbType type,
+        const QgsCoordinateReferenceSystem &crs, const std::function<void( const TakeRow &take )> &produce );
 
       //! Says that the output \a name, which somebody else writes, is there from now on.
       void noteWritten( const QString &name ) { mWritten.push_back( name ); }

@@ -83,7 +83,10 @@ namespace stillhead
 
   ResultTable spanTable( const ResultContext &context );
   ResultTable nodeTable( const ResultContext &context );
-  ResultTable stretchTable( const ResultContext &context );
+
+  //! \param outlines the polygons of the stretches; they outlive the table
+  ResultTable stretchTable( const ResultContext &context, const std::vector<QgsGeometry> &outlines );
+
   ResultTable extremeTable( const ResultContext &context );
   ResultTable findingTable( const ResultContext &context );
 

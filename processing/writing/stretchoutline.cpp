@@ -1,19 +1,20 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Widens in a plane of metres laid at the stretch's worst place: exact there, and off by far less than a line's width
-// over any stretch of pipe, in degrees and in stretched map projections alike.
+// Every run of pipe is widened by itself, in a plane of metres laid at its stretch: exact there, and off by far less than
+// a pen's width over any stretch, in degrees and in stretched map projections alike. Neighbours are then united two by
+// two, round after round: widening thousands of lines at once costs many times as much, and on one thread only.
 #include "processing/writing/stretchoutline.h"
 
-#include "core/job/pieceline.h"
+#include "core/feedback/parallel.h"
+#include "processing/writing/piperuns.h"
 
 #include <qgslinestring.h>
-#include <qgsmultilinestring.h>
 
 #include <QTransform>
 
 #include <algorithm>
 #include <cmath>
-#include <utility>
-#include <vector>
+#include <cstdint>
+#include <tuple>
 
 namespace stillhead
 {
@@ -23,6 +24,9 @@ namespace stillhead
 
     //! Straight pieces to a quarter circle: round enough for a pen.
     constexpr int SEGMENTS = 5;
+
+    //! Widening takes the first share of the progress.
+    constexpr double WIDENED = 0.3;
 
     //! The plan seen from one place, in metres.
     class LocalPlane
@@ -56,94 +60,122 @@ namespace stillhead
         GroundScale mScale;
     };
 
-    class StretchLines
+    std::vector<LocalPlane> planesOf( const ResultContext &context )
     {
-      public:
-        explicit StretchLines( const LocalPlane &plane )
-          : mPlane( plane )
-          , mLines( std::make_unique<QgsMultiLineString>() )
-        {
-        }
+      std::vector<LocalPlane> planes;
+      planes.reserve( context.result.stretches.size() );
+      for ( const Stretch &stretch : context.result.stretches )
+      {
+        const Piece &worst = context.result.pieces[static_cast<std::size_t>( stretch.worstPiece )];
+        const PlanPoint origin = context.result.drawing.placeAt( context.lineOf( worst ), worst.fromM );
+        planes.emplace_back( origin, context.measure.scaleAt( origin ) );
+      }
+      return planes;
+    }
 
-        void begin()
-        {
-          mX.clear();
-          mY.clear();
-        }
-        void add( const PlanPoint &place )
-        {
-          mX << mPlane.x( place );
-          mY << mPlane.y( place );
-        }
-        void end() { mLines->addGeometry( new QgsLineString( mX, mY ) ); }
-
-        /**
-         * Ends join within a tolerance but stay where they are. Where that is wider than the outline, the way to the node
-         * keeps it in one piece.
-         */
-        void addJoint( const PlanPoint &end, const PlanPoint &node, double outlineM )
-        {
-          if ( std::hypot( mPlane.x( end ) - mPlane.x( node ), mPlane.y( end ) - mPlane.y( node ) ) < outlineM )
-            return;
-          begin();
-          add( end );
-          add( node );
-          this->end();
-        }
-
-        QgsGeometry take() { return QgsGeometry( std::move( mLines ) ); }
-
-      private:
-        const LocalPlane &mPlane;
-        std::unique_ptr<QgsMultiLineString> mLines;
-        QVector<double> mX;
-        QVector<double> mY;
+    //! An outline under way, and where it lies in an order that keeps neighbours together.
+    struct Outline
+    {
+        std::size_t stretch = 0;
+        std::uint64_t order = 0;
+        QgsGeometry geometry;
     };
+
+    //! Bits of two numbers taken in turn: places near in this order are near on the ground.
+    std::uint64_t interleaved( std::uint32_t x, std::uint32_t y )
+    {
+      std::uint64_t result = 0;
+      for ( unsigned bit = 0; bit < 32; ++bit )
+      {
+        result |= static_cast<std::uint64_t>( x >> bit & 1u ) << ( 2 * bit );
+        result |= static_cast<std::uint64_t>( y >> bit & 1u ) << ( 2 * bit + 1 );
+      }
+      return result;
+    }
+
+    //! Metres in steps of \a step from a place far to the south-west, so that the number is never negative.
+    std::uint32_t stepsOf( double metres, double step )
+    {
+      return static_cast<std::uint32_t>( static_cast<std::int64_t>( std::floor( metres / step ) ) + ( 1LL << 31 ) );
+    }
+
+    Outline widened( const PipeRun &run, const StaticResult &result, const LocalPlane &plane, double distanceM )
+    {
+      QVector<double> x;
+      QVector<double> y;
+      for ( const PlanPoint &place : placesOf( run, result ) )
+      {
+        x << plane.x( place );
+        y << plane.y( place );
+      }
+      const int middle = x.size() / 2;
+      Outline outline;
+      outline.stretch = run.stretch;
+      outline.order = interleaved( stepsOf( x[middle], distanceM ), stepsOf( y[middle], distanceM ) );
+      outline.geometry = QgsGeometry( std::make_unique<QgsLineString>( x, y ) ).buffer( distanceM, SEGMENTS );
+      return outline;
+    }
+
+    //! Unites neighbours of one stretch two by two, once.
+    std::vector<Outline> unitedOnce( std::vector<Outline> outlines, Monitor &monitor, double from, double to )
+    {
+      const auto hasPartner = [&outlines]( std::size_t i ) {
+        return i + 1 < outlines.size() && outlines[i + 1].stretch == outlines[i].stretch;
+      };
+      std::vector<std::size_t> firsts;
+      for ( std::size_t i = 0; i < outlines.size(); i += hasPartner( i ) ? 2 : 1 )
+        firsts.push_back( i );
+      std::vector<Outline> united( firsts.size() );
+      parallelRanges( firsts.size(), 1, 0, monitor, from, to, [&]( std::size_t first, std::size_t last, unsigned ) {
+        for ( std::size_t i = first; i < last; ++i )
+        {
+          const std::size_t own = firsts[i];
+          united[i] = outlines[own];
+          if ( hasPartner( own ) )
+            united[i].geometry = outlines[own].geometry.combine( outlines[own + 1].geometry );
+        }
+      } );
+      return united;
+    }
 
   } // namespace
 
-  QgsGeometry stretchOutline(
-    const ResultContext &context, const Stretch &stretch, double distanceM, const PlanMeasure &measure )
+  std::vector<QgsGeometry> stretchOutlines( const ResultContext &context, double distanceM, Monitor &monitor )
   {
-    const StaticResult &result = context.result;
-    const Piece &worst = result.pieces[static_cast<std::size_t>( stretch.worstPiece )];
-    const PlanPoint origin = result.drawing.placeAt( context.lineOf( worst ), worst.fromM );
-    const LocalPlane plane( origin, measure.scaleAt( origin ) );
-    StretchLines lines( plane );
-    std::vector<std::pair<PlanPoint, int>> joints;
-    // Neighbouring pieces of a line go in as one: cuts would only be places where the outline has to be noded.
-    for ( std::size_t i = 0; i < stretch.pieces.size(); )
+    const std::vector<LocalPlane> planes = planesOf( context );
+    const std::vector<PipeRun> runs = pipeRuns( context.result );
+    std::vector<Outline> outlines( runs.size() );
+    parallelRanges( runs.size(), 32, 0, monitor, 0.0, WIDENED, [&]( std::size_t first, std::size_t last, unsigned ) {
+      for ( std::size_t i = first; i < last; ++i )
+        outlines[i] = widened( runs[i], context.result, planes[runs[i].stretch], distanceM );
+    } );
+    std::sort( outlines.begin(), outlines.end(), []( const Outline &a, const Outline &b ) {
+      return std::tie( a.stretch, a.order ) < std::tie( b.stretch, b.order );
+    } );
+
+    // Every round costs about the same: half the outlines, twice as large.
+    const double rounds = std::ceil( std::log2( static_cast<double>( std::max<std::size_t>( 2, runs.size() ) ) ) );
+    double from = WIDENED;
+    while ( outlines.size() > planes.size() )
     {
-      const Piece &piece = result.pieces[static_cast<std::size_t>( stretch.pieces[i] )];
-      const CanonicalLine &line = context.lineOf( piece );
-      double toM = piece.fromM;
-      lines.begin();
-      for ( ; i < stretch.pieces.size(); ++i )
-      {
-        const Piece &next = result.pieces[static_cast<std::size_t>( stretch.pieces[i] )];
-        if ( &context.lineOf( next ) != &line || next.fromM != toM )
-          break;
-        toM = next.toM;
-        const Span &span = result.network.spans[static_cast<std::size_t>( next.span )];
-        if ( next.fromM <= span.fromM )
-          joints.emplace_back( result.drawing.placeAt( line, next.fromM ), span.fromNode );
-        if ( next.toM >= span.toM )
-          joints.emplace_back( result.drawing.placeAt( line, next.toM ), span.toNode );
-      }
-      lines.add( result.drawing.placeAt( line, piece.fromM ) );
-      const auto first = result.drawing.alongM.begin() + static_cast<std::ptrdiff_t>( line.first );
-      const auto last = first + static_cast<std::ptrdiff_t>( line.count );
-      for ( auto along = std::upper_bound( first, last, piece.fromM ); along != last && *along < toM; ++along )
-        lines.add( result.drawing.vertices[static_cast<std::size_t>( along - result.drawing.alongM.begin() )] );
-      lines.add( result.drawing.placeAt( line, toM ) );
-      lines.end();
+      const double to = std::min( 1.0, from + ( 1.0 - WIDENED ) / rounds );
+      outlines = unitedOnce( std::move( outlines ), monitor, from, to );
+      from = to;
     }
-    for ( const auto &[end, node] : joints )
-      lines.addJoint( end, result.network.nodes[static_cast<std::size_t>( node )].place, distanceM );
-    QgsGeometry outline = lines.take().buffer( distanceM, SEGMENTS );
-    outline.convertToSingleType();
-    outline.transform( plane.back() );
-    return outline;
+
+    std::vector<QgsGeometry> polygons( planes.size() );
+    for ( Outline &outline : outlines )
+    {
+      outline.geometry.convertToSingleType();
+      outline.geometry.transform( planes[outline.stretch].back() );
+      polygons[outline.stretch] = outline.geometry;
+    }
+    return polygons;
+  }
+
+  double outlineDistanceM( LengthUnit unit )
+  {
+    return unit == LengthUnit::Foot ? 10.0 * METRES_PER_FOOT : 3.0;
   }
 
 } // namespace stillhead

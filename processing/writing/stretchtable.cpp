@@ -1,19 +1,13 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
 // STRETCHES: where to act.
 #include "processing/parameternames.h"
-#include "processing/writing/stretchoutline.h"
+#include "processing/writing/resulttable.h"
 
 namespace stillhead
 {
 
   namespace
   {
-
-    //! 10 ft, or 3 m where lengths are in metres.
-    double outlineDistanceM( LengthUnit unit )
-    {
-      return unit == LengthUnit::Foot ? 10.0 * METRES_PER_FOOT : 3.0;
-    }
 
     QgsFields stretchFields()
     {
@@ -33,7 +27,7 @@ namespace stillhead
 
   } // namespace
 
-  ResultTable stretchTable( const ResultContext &context )
+  ResultTable stretchTable( const ResultContext &context, const std::vector<QgsGeometry> &outlines )
   {
     ResultTable table;
     table.output = output::STRETCHES;
@@ -41,9 +35,7 @@ namespace stillhead
     table.type = compat::WkbType::Polygon;
     table.fields = stretchFields();
     table.rows = context.result.stretches.size();
-    table.make = [&context]( std::size_t first, std::size_t last, QgsFeature *features ) {
-      const std::unique_ptr<PlanMeasure> measure = context.measure.clone();
-      const double distanceM = outlineDistanceM( context.units.lengthUnit() );
+    table.make = [&context, &outlines]( std::size_t first, std::size_t last, QgsFeature *features ) {
       for ( std::size_t i = first; i < last; ++i )
       {
         const Stretch &stretch = context.result.stretches[i];
@@ -58,7 +50,7 @@ namespace stillhead
                    << placeLabel( stretch.worstPa, stretch.worstElevationM, context.units,
                         context.limits.leastFor( role ), context.limits.mostFor( role ) );
         features[i - first].setAttributes( attributes );
-        features[i - first].setGeometry( stretchOutline( context, stretch, distanceM, *measure ) );
+        features[i - first].setGeometry( outlines[i] );
       }
     };
     return table;

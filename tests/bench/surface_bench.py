@@ -46,7 +46,7 @@ def theirs(folder, terrain):
     result = os.path.join(folder, "theirs.tif")
     remove(result)
     return timed(["gdal_calc.py", "-A", terrain, f"--outfile={result}", "--calc=1.4210580*(260.0-A)", "--type=Float32",
-                  "--co=COMPRESS=DEFLATE", "--co=BIGTIFF=IF_SAFER", "--quiet"], os.path.join(folder, "theirs.log"))
+                  "--co=COMPRESS=DEFLATE", "--co=BIGTIFF=YES", "--quiet"], os.path.join(folder, "theirs.log"))
 
 
 def copy(folder, terrain):

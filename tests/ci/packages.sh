@@ -6,7 +6,7 @@ stillheadBuildPackages="g++ cmake ninja-build libqgis-dev libgdal-dev libproj-de
   qtbase5-dev qttools5-dev libqt5svg5-dev"
 stillheadRunPackages="qgis qgis-providers python3-qgis gdal-bin proj-bin proj-data fonts-dejavu-core"
 stillheadTestPackages="xvfb xauth dpkg-dev file"
-stillheadCheckPackages="clang-format git"
+stillheadCheckPackages="clang-format git ccache"
 
 # ensure_packages name... : installs those of the named packages that are not installed.
 ensure_packages()

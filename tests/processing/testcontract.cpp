@@ -26,12 +26,15 @@ namespace
       // No limits of the platform's own: its refusal would not be a clear sentence.
       const QgsProcessingParameterNumber free( "free", "free", number->dataType() );
       const bool unlimited = number->minimum() == free.minimum() && number->maximum() == free.maximum();
-      return QString( "number%1%2" ).arg( definition.isDynamic() ? ", data-defined" : "", unlimited ? "" : ", limited" );
+      return QString( "number%1%2" )
+        .arg( definition.isDynamic() ? ", data-defined" : "", unlimited ? "" : ", limited" );
     }
     if ( const auto *source = dynamic_cast<const QgsProcessingParameterFeatureSource *>( &definition ) )
       return QString( "source of %1" ).arg( source->dataTypes().first() );
     if ( const auto *sink = dynamic_cast<const QgsProcessingParameterFeatureSink *>( &definition ) )
-      return QString( "sink of %1%2" ).arg( static_cast<int>( sink->dataType() ) ).arg( sink->createByDefault() ? "" : ", off by default" );
+      return QString( "sink of %1%2" )
+        .arg( static_cast<int>( sink->dataType() ) )
+        .arg( sink->createByDefault() ? "" : ", off by default" );
     if ( const auto *raster = dynamic_cast<const QgsProcessingParameterRasterDestination *>( &definition ) )
       return QString( "raster output%1" ).arg( raster->createByDefault() ? "" : ", off by default" );
     return definition.type();
@@ -67,7 +70,8 @@ namespace
     for ( const QString &name : layers )
     {
       const QgsVectorLayer *layer = outcome.layer( name );
-      lines << QString( "  layer %1: %2" ).arg( name, layer ? QgsWkbTypes::displayString( layer->wkbType() ) : QString( "missing" ) );
+      lines << QString( "  layer %1: %2" )
+                 .arg( name, layer ? QgsWkbTypes::displayString( layer->wkbType() ) : QString( "missing" ) );
       if ( !layer )
         continue;
       for ( const QgsField &field : layer->fields() )
@@ -113,6 +117,8 @@ void TestContract::isAsWritten()
     if ( id == "staticpressure" )
       lines << fieldsOf(
         runAlgorithm( id, mSlope.parameters() ), { "SPANS", "NODES", "STRETCHES", "EXTREMES", "FINDINGS" } );
+    if ( id == "pressuresurface" )
+      lines << fieldsOf( runAlgorithm( id, mSlope.surfaceParameters() ), { "BAND_AREAS" } );
   }
   lines << QString() << "states";
   for ( int state = 0; state <= static_cast<int>( stillhead::State::WithinLimits ); ++state )
@@ -154,7 +160,8 @@ void TestContract::everyAlgorithmSaysWhatItIs()
     QVERIFY( !described->shortDescription().isEmpty() );
     QVERIFY( described->tags().size() > 5 );
     const QString help = described->shortHelpString();
-    for ( const char *part : { "Inputs:", "Outputs:", "Units:", "Limits:", "With water running it is lower", "not a stamped design", "can fail open" } )
+    for ( const char *part : { "Inputs:", "Outputs:", "Units:", "Limits:", "With water running it is lower",
+            "not a stamped design", "can fail open" } )
       QVERIFY2( help.contains( part ), part );
     QVERIFY( described->flags() & compat::Algorithm::CanCancel );
     QVERIFY( !( described->flags() & compat::Algorithm::NoThreading ) );

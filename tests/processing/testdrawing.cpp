@@ -73,8 +73,7 @@ void TestDrawing::linesInAnotherCrs()
   const Outcome own = runAlgorithm( "staticpressure", mSlope.parameters() );
   const LayerPointer mains =
     drawLayer( "LineString?crs=" + crs, { { inCrs( line( { { 0, 0 }, { 300, 0 } } ), crs ) } }, "pipe" );
-  const Outcome outcome =
-    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   // A straight line in one CRS is bent by far less than a millimetre over 300 m in the other.
   STILLHEAD_NEAR( outcome.number( "LENGTH_TOTAL" ), own.number( "LENGTH_TOTAL" ), 1e-3 );
@@ -87,11 +86,12 @@ void TestDrawing::linesInAnotherCrs()
 void TestDrawing::lateralsInAnotherCrs()
 {
   // The lateral's start meets the main within the join tolerance although it took a way round.
-  const LayerPointer laterals = drawLayer( "LineString?crs=EPSG:4326",
-    { { inCrs( line( { { 100, 0 }, { 100, 30 } } ), "EPSG:4326" ) } }, "heads" );
+  const LayerPointer laterals =
+    drawLayer( "LineString?crs=EPSG:4326", { { inCrs( line( { { 100, 0 }, { 100, 30 } } ), "EPSG:4326" ) } }, "heads" );
   const Outcome outcome =
     runAlgorithm( "staticpressure", mSlope.parameters( { { "LATERALS", asParameter( laterals ) } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
+  QVERIFY( outcome.said( outcome.infos, "LATERALS (“heads”) is reprojected from EPSG:4326" ) );
   STILLHEAD_SAME( outcome.number( "LENGTH_NO_SOURCE" ), 0.0 );
   STILLHEAD_NEAR( outcome.number( "LENGTH_TOTAL" ), 330.0, 2e-3 );
   QCOMPARE( outcome.results.value( "NODE_COUNT" ).toInt(), 4 );
@@ -134,9 +134,10 @@ void TestDrawing::outlinesAreAsWideOnTheGround()
 void TestDrawing::partsAreLines()
 {
   const LayerPointer mains = drawLayer( "MultiLineString?crs=EPSG:32631",
-    { { QString( "MULTILINESTRING((%1, %2), (%3, %4))" ).arg( at( 0, 0 ), at( 100, 0 ), at( 100, 20 ), at( 100, 0 ) ) } }, "pipe" );
-  const Outcome outcome =
-    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
+    { { QString( "MULTILINESTRING((%1, %2), (%3, %4))" )
+          .arg( at( 0, 0 ), at( 100, 0 ), at( 100, 20 ), at( 100, 0 ) ) } },
+    "pipe" );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   STILLHEAD_NEAR( outcome.number( "LENGTH_TOTAL" ), 120.0, 1e-3 );
   STILLHEAD_SAME( outcome.number( "LENGTH_NO_SOURCE" ), 0.0 );
@@ -149,9 +150,9 @@ void TestDrawing::distanceRunsFromTheDrawnStart()
 {
   // Drawn uphill, in two parts: the highest pressure stands at the start of the second part.
   const LayerPointer mains = drawLayer( "MultiLineString?crs=EPSG:32631",
-    { { QString( "MULTILINESTRING((%1, %2), (%3, %4))" ).arg( at( 10, 0 ), at( 0, 0 ), at( 300, 0 ), at( 10, 0 ) ) } }, "pipe" );
-  const Outcome outcome =
-    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
+    { { QString( "MULTILINESTRING((%1, %2), (%3, %4))" ).arg( at( 10, 0 ), at( 0, 0 ), at( 300, 0 ), at( 10, 0 ) ) } },
+    "pipe" );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   // The lowest at the end of the first part: both 10 m along.
   for ( const Row &extreme : outcome.features( "EXTREMES" ) )
@@ -169,10 +170,10 @@ void TestDrawing::curvesAreFollowed()
 {
   // A half circle of radius 20 m: its chords are shorter by less than 1 cm of sagitta allows.
   const LayerPointer mains = drawLayer( "CompoundCurve?crs=EPSG:32631",
-    { { QString( "COMPOUNDCURVE((%1, %2), CIRCULARSTRING(%2, %3, %4))" ).arg( at( 0, 0 ), at( 100, 0 ), at( 120, 20 ), at( 140, 0 ) ) } },
+    { { QString( "COMPOUNDCURVE((%1, %2), CIRCULARSTRING(%2, %3, %4))" )
+          .arg( at( 0, 0 ), at( 100, 0 ), at( 120, 20 ), at( 140, 0 ) ) } },
     "pipe" );
-  const Outcome outcome =
-    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   QVERIFY( outcome.said( outcome.infos, "followed by chords to within 1 cm" ) );
   const double arc = 100.0 + M_PI * 20.0;
@@ -185,8 +186,7 @@ void TestDrawing::zAndMAreNoHindrance()
 {
   const LayerPointer mains = drawLayer( "LineStringZM?crs=EPSG:32631",
     { { QString( "LINESTRINGZM(%1 7 1, %2 9 2)" ).arg( at( 0, 0 ), at( 300, 0 ) ) } }, "pipe" );
-  const Outcome outcome =
-    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   STILLHEAD_NEAR( outcome.number( "P_HIGHEST" ), 80.0, 1e-6 );
 }
@@ -213,7 +213,8 @@ void TestDrawing::drawnZIsThePipe()
     "pipe" );
   // Cover is replaced along with the terrain.
   const Outcome outcome = runAlgorithm( "staticpressure",
-    mSlope.parameters( { { "MAINS", asParameter( mains ) }, { "USE_LINE_Z", true }, { "LINE_Z_UNIT", unit }, { "COVER", 5 } } ) );
+    mSlope.parameters(
+      { { "MAINS", asParameter( mains ) }, { "USE_LINE_Z", true }, { "LINE_Z_UNIT", unit }, { "COVER", 5 } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   STILLHEAD_NEAR( outcome.number( "P_LOWEST" ), 51.0, 1e-9 );
   STILLHEAD_NEAR( outcome.number( "P_HIGHEST" ), 60.0, 1e-9 );
@@ -247,8 +248,8 @@ void TestDrawing::coverMayBeDataDefined()
   const LayerPointer mains = drawLayer( Slope::lines() + "&field=depth:double",
     { { line( { { 0, 0 }, { 100, 0 } } ), { 2.5 } }, { line( { { 100, 0 }, { 200, 0 } } ), { QVariant() } } }, "pipe" );
   const Outcome outcome = runAlgorithm( "staticpressure",
-    mSlope.parameters( { { "MAINS", asParameter( mains ) }, { "COVER", QVariant::fromValue( QgsProperty::fromField( "depth" ) ) },
-      { "MOST", 900 }, { "BANDS", "900" } } ) );
+    mSlope.parameters( { { "MAINS", asParameter( mains ) },
+      { "COVER", QVariant::fromValue( QgsProperty::fromField( "depth" ) ) }, { "MOST", 900 }, { "BANDS", "900" } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   const std::vector<Row> spans = outcome.features( "SPANS" );
   STILLHEAD_NEAR( spans[0]["p_low"].toDouble(), 52.5, 1e-6 );
@@ -259,10 +260,10 @@ void TestDrawing::systemsStayApart()
 {
   const LayerPointer mains = drawLayer( Slope::lines() + "&field=SYSTEM:string",
     { { line( { { 0, 0 }, { 100, 0 } } ), { "drinking" } }, { line( { { 100, 0 }, { 200, 0 } } ), { " drinking " } },
-      { line( { { 100, 0 }, { 100, 30 } } ), { "reclaimed" } }, { line( { { 200, 0 }, { 300, 0 } } ), { QVariant() } } },
+      { line( { { 100, 0 }, { 100, 30 } } ), { "reclaimed" } },
+      { line( { { 200, 0 }, { 300, 0 } } ), { QVariant() } } },
     "pipe" );
-  const Outcome outcome =
-    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   // Reclaimed and the blank system differ from drinking water, and from each other.
   STILLHEAD_NEAR( outcome.number( "LENGTH_NO_SOURCE" ), 130.0, 1e-3 );
@@ -271,13 +272,15 @@ void TestDrawing::systemsStayApart()
 void TestDrawing::selectedFeaturesOnly()
 {
   const LayerPointer mains = drawLayer( Slope::lines(),
-    { { line( { { 0, 0 }, { 100, 0 } } ) }, { line( { { 100, 0 }, { 200, 0 } } ) }, { line( { { 200, 0 }, { 300, 0 } } ) } }, "pipe" );
+    { { line( { { 0, 0 }, { 100, 0 } } ) }, { line( { { 100, 0 }, { 200, 0 } } ) },
+      { line( { { 200, 0 }, { 300, 0 } } ) } },
+    "pipe" );
   mains->select( 1 );
   mains->select( 3 );
   QgsProject::instance()->addMapLayer( mains.get(), false, false );
   const Outcome outcome = runAlgorithm( "staticpressure",
-    mSlope.parameters( { { "MAINS",
-      QVariant::fromValue( QgsProcessingFeatureSourceDefinition( mains->id(), true ) ) } } ) );
+    mSlope.parameters(
+      { { "MAINS", QVariant::fromValue( QgsProcessingFeatureSourceDefinition( mains->id(), true ) ) } } ) );
   QgsProject::instance()->takeMapLayer( mains.get() );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   STILLHEAD_NEAR( outcome.number( "LENGTH_TOTAL" ), 200.0, 1e-3 );
@@ -290,11 +293,10 @@ void TestDrawing::selectedFeaturesOnly()
 
 void TestDrawing::inputsStayAsTheyWere()
 {
-  const LayerPointer mains = drawLayer( Slope::lines() + "&field=name:string",
-    { { line( { { 0, 0 }, { 300, 0 } } ), { "main" } } }, "pipe" );
+  const LayerPointer mains =
+    drawLayer( Slope::lines() + "&field=name:string", { { line( { { 0, 0 }, { 300, 0 } } ), { "main" } } }, "pipe" );
   const QString before = mains->getFeature( 1 ).geometry().asWkt( 9 );
-  const Outcome outcome =
-    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
   QVERIFY( outcome.ok );
   QCOMPARE( mains->featureCount(), 1LL );
   QCOMPARE( mains->getFeature( 1 ).geometry().asWkt( 9 ), before );

@@ -23,8 +23,8 @@ class TestDrawnFields : public QObject
 
     static QStringList ownFields()
     {
-      return { "span", "role", "drawn_fid", "length", "z_low", "z_high", "p_low", "p_high", "band", "band_text", "state",
-        "over", "short", "pressure_zone", "doubt", "close_call" };
+      return { "span", "role", "drawn_fid", "length", "z_low", "z_high", "p_low", "p_high", "band", "band_text",
+        "state", "over", "short", "pressure_zone", "doubt", "close_call" };
     }
 };
 
@@ -52,10 +52,10 @@ void TestDrawnFields::comeFirstAndJoinByName()
 
 void TestDrawnFields::clashesGetAnotherName()
 {
-  const LayerPointer mains = drawLayer( Slope::lines() + "&field=Length:double&field=length_drawn:string&field=STATE:string",
-    { { line( { { 0, 0 }, { 300, 0 } } ), { 12.5, "kept", "new" } } }, "pipe" );
-  const Outcome outcome =
-    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
+  const LayerPointer mains =
+    drawLayer( Slope::lines() + "&field=Length:double&field=length_drawn:string&field=STATE:string",
+      { { line( { { 0, 0 }, { 300, 0 } } ), { 12.5, "kept", "new" } } }, "pipe" );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   QCOMPARE( outcome.layer( "SPANS" )->fields().names(),
     QStringList( { "Length_drawn_2", "length_drawn", "STATE_drawn" } ) + ownFields() );
@@ -66,10 +66,11 @@ void TestDrawnFields::clashesGetAnotherName()
   QVERIFY( outcome.said( outcome.infos, "Length → Length_drawn_2" ) );
 
   // Two drawn fields of one name but for their case: a table can hold only one of them.
-  const LayerPointer twins = drawLayer(
-    Slope::lines() + "&field=zone:string&field=Zone:string", { { line( { { 0, 0 }, { 300, 0 } } ), { "a", "b" } } }, "pipe" );
+  const LayerPointer twins = drawLayer( Slope::lines() + "&field=zone:string&field=Zone:string",
+    { { line( { { 0, 0 }, { 300, 0 } } ), { "a", "b" } } }, "pipe" );
   const QString file = mSlope.path( "twins.gpkg" );
-  const Outcome stored = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( twins ) }, { "SPANS", file } } ) );
+  const Outcome stored =
+    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( twins ) }, { "SPANS", file } } ) );
   QVERIFY2( stored.ok, qPrintable( stored.errors.join( '\n' ) ) );
   const std::vector<Row> rows = stored.features( "SPANS" );
   QCOMPARE( rows[0]["zone"].toString(), QString( "a" ) );
@@ -109,7 +110,8 @@ void TestDrawnFields::keyIsNotCopied()
   QCOMPARE( QgsVectorFileWriter::writeAsVectorFormatV3( drawn.get(), plan, QgsCoordinateTransformContext(), options ),
     QgsVectorFileWriter::NoError );
   const QString result = mSlope.path( "keyed.gpkg" );
-  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", plan }, { "SPANS", result } } ) );
+  const Outcome outcome =
+    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", plan }, { "SPANS", result } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   QCOMPARE( outcome.layer( "SPANS" )->fields().names(), QStringList( { "fid", "name" } ) + ownFields() );
   const std::vector<Row> spans = outcome.features( "SPANS" );
@@ -125,10 +127,11 @@ void TestDrawnFields::keyIsNotCopied()
 
 void TestDrawnFields::fidThatIsNoKeyIsKept()
 {
-  const LayerPointer mains = drawLayer(
-    Slope::lines() + "&field=FID:string", { { line( { { 0, 0 }, { 300, 0 } } ), { "east" } } }, "pipe" );
+  const LayerPointer mains =
+    drawLayer( Slope::lines() + "&field=FID:string", { { line( { { 0, 0 }, { 300, 0 } } ), { "east" } } }, "pipe" );
   const QString file = mSlope.path( "fid.gpkg" );
-  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) }, { "SPANS", file } } ) );
+  const Outcome outcome =
+    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) }, { "SPANS", file } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   const std::vector<Row> spans = outcome.features( "SPANS" );
   QCOMPARE( spans.size(), std::size_t( 3 ) );
@@ -140,7 +143,8 @@ void TestDrawnFields::oddTypesSurvive()
   const LayerPointer mains = drawLayer( Slope::lines() + "&field=at:time&field=tags:string[]&field=ok:bool",
     { { line( { { 0, 0 }, { 300, 0 } } ), { QTime( 6, 30 ), QStringList( { "a", "b" } ), true } } }, "pipe" );
   const QString file = mSlope.path( "odd.gpkg" );
-  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) }, { "SPANS", file } } ) );
+  const Outcome outcome =
+    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) }, { "SPANS", file } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   const std::vector<Row> spans = outcome.features( "SPANS" );
   QCOMPARE( spans[0]["at"].toString().left( 5 ), QString( "06:30" ) );

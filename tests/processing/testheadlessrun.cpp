@@ -88,9 +88,10 @@ void TestHeadlessRun::pipe()
   QVERIFY2( finished.code == 0, finished.errors.constData() );
   const QJsonObject results = QJsonDocument::fromJson( finished.output ).object().value( "results" ).toObject();
   // The same figures as in a session, to the last digit.
-  const Outcome own = runAlgorithm( "staticpressure",
-    mSlope.parameters( { { "MAINS", mSlope.path( "plan.gpkg" ) }, { "SOURCE_LOW", QVariant() } } ) );
-  for ( const char *number : { "P_LOWEST", "P_HIGHEST", "LENGTH_TOTAL", "LENGTH_OVER", "STATIC_LEVEL_HIGH", "SPAN_COUNT" } )
+  const Outcome own = runAlgorithm(
+    "staticpressure", mSlope.parameters( { { "MAINS", mSlope.path( "plan.gpkg" ) }, { "SOURCE_LOW", QVariant() } } ) );
+  for ( const char *number :
+    { "P_LOWEST", "P_HIGHEST", "LENGTH_TOTAL", "LENGTH_OVER", "STATIC_LEVEL_HIGH", "SPAN_COUNT" } )
     STILLHEAD_SAME( results.value( number ).toDouble(), own.number( number ) );
   QCOMPARE( results.value( "SUMMARY" ).toString(), own.results.value( "SUMMARY" ).toString() );
   QCOMPARE( results.value( "FINDING_COUNT" ).toInt(), 1 );
@@ -101,8 +102,9 @@ void TestHeadlessRun::pipe()
 
 void TestHeadlessRun::surface()
 {
-  const Finished finished = runTool(
-    pipeArguments( "pressuresurface" ) << "--SOURCE_VALUE=150" << "--SURFACE=" + mSlope.path( "surface.tif" ) );
+  const Finished finished =
+    runTool( pipeArguments( "pressuresurface" ) << "--SOURCE_VALUE=150"
+                                                << "--SURFACE=" + mSlope.path( "surface.tif" ) );
   QVERIFY2( finished.code == 0, finished.errors.constData() );
   const QJsonObject results = QJsonDocument::fromJson( finished.output ).object().value( "results" ).toObject();
   STILLHEAD_NEAR( results.value( "GROUND_TOO_LOW" ).toDouble(), 95.0, 1e-9 );
@@ -111,10 +113,12 @@ void TestHeadlessRun::surface()
 
 void TestHeadlessRun::refusal()
 {
-  const Finished finished = runTool( pipeArguments( "staticpressure" )
-    << "--MAINS=" + mSlope.path( "plan.gpkg" ) << "--SOURCE_VALUE=65 psi" << "--SPANS=" + mSlope.path( "none.gpkg" ) );
+  const Finished finished =
+    runTool( pipeArguments( "staticpressure" ) << "--MAINS=" + mSlope.path( "plan.gpkg" ) << "--SOURCE_VALUE=65 psi"
+                                               << "--SPANS=" + mSlope.path( "none.gpkg" ) );
   QVERIFY( finished.code != 0 );
-  QVERIFY2( ( finished.output + finished.errors ).contains( "is “65 psi”, which is not a number." ), finished.errors.constData() );
+  QVERIFY2( ( finished.output + finished.errors ).contains( "is “65 psi”, which is not a number." ),
+    finished.errors.constData() );
   QVERIFY( !QFile::exists( mSlope.path( "none.gpkg" ) ) );
 }
 

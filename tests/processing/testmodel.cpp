@@ -77,8 +77,8 @@ void TestModel::stepsFeedEachOther()
   Listener listener;
   context.setFeedback( &listener );
   bool ok = false;
-  const QVariantMap results = model.run(
-    { { "pipe", asParameter( mains ) }, { "second:spans", Slope::temporary() } }, context, &listener, &ok );
+  const QVariantMap results =
+    model.run( { { "pipe", asParameter( mains ) }, { "second:spans", Slope::temporary() } }, context, &listener, &ok );
   QVERIFY2( ok, qPrintable( listener.errors.join( '\n' ) ) );
 
   const QVariantMap inner = results.value( "CHILD_RESULTS" ).toMap().value( "second" ).toMap();

@@ -79,8 +79,9 @@ void TestOutputs::cancelLeavesNothing()
   };
   Impatient impatient( percent );
   const Outcome outcome = runAlgorithm( "staticpressure",
-    mSlope.parameters( { { "SPANS", layer( "spans" ) }, { "NODES", layer( "nodes" ) }, { "STRETCHES", folder.filePath( "a.shp" ) },
-      { "EXTREMES", folder.filePath( "extremes.gpkg" ) }, { "SURFACE", folder.filePath( "surface.tif" ) } } ),
+    mSlope.parameters(
+      { { "SPANS", layer( "spans" ) }, { "NODES", layer( "nodes" ) }, { "STRETCHES", folder.filePath( "a.shp" ) },
+        { "EXTREMES", folder.filePath( "extremes.gpkg" ) }, { "SURFACE", folder.filePath( "surface.tif" ) } } ),
     impatient );
   QVERIFY( !outcome.ok );
   QCOMPARE( outcome.errors, QStringList( "Cancelled; nothing was written." ) );
@@ -103,12 +104,14 @@ void TestOutputs::failureLeavesEarlierResults()
   const QString file = mSlope.path( "standing.gpkg" );
   QVERIFY( runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file } } ) ).ok );
   const QByteArray before = contentOf( file );
-  QVERIFY( !runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file }, { "SOURCE", place( 0, 39 ) } } ) ).ok );
+  QVERIFY(
+    !runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file }, { "SOURCE", place( 0, 39 ) } } ) ).ok );
   // The shapefile is refused once all is computed: the GeoPackage named before it stays too.
-  const LayerPointer mains = drawLayer( Slope::lines(),
-    { { line( { { 0, 0 }, { 100, 0 } } ) }, { line( { { 0, 30 }, { 100, 30 } } ) } }, "pipe" );
+  const LayerPointer mains = drawLayer(
+    Slope::lines(), { { line( { { 0, 0 }, { 100, 0 } } ) }, { line( { { 0, 30 }, { 100, 30 } } ) } }, "pipe" );
   QVERIFY( !runAlgorithm( "staticpressure",
-    mSlope.parameters( { { "MAINS", asParameter( mains ) }, { "SPANS", file }, { "NODES", mSlope.path( "nodes.shp" ) } } ) )
+    mSlope.parameters(
+      { { "MAINS", asParameter( mains ) }, { "SPANS", file }, { "NODES", mSlope.path( "nodes.shp" ) } } ) )
               .ok );
   QCOMPARE( contentOf( file ), before );
 }
@@ -120,7 +123,8 @@ void TestOutputs::lateCancelFinishesWhatReplaces()
   QVERIFY( runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file } } ) ).ok );
   QCOMPARE( QgsVectorLayer( file, "earlier", "ogr" ).featureCount(), 3LL );
   Impatient impatient( 80.0 );
-  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file }, { "BANDS", "900" } } ), impatient );
+  const Outcome outcome =
+    runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file }, { "BANDS", "900" } } ), impatient );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   QCOMPARE( QgsVectorLayer( file, "new", "ogr" ).featureCount(), 2LL );
 }
@@ -128,9 +132,11 @@ void TestOutputs::lateCancelFinishesWhatReplaces()
 void TestOutputs::severalLayersInOneFile()
 {
   const QString file = mSlope.path( "result.gpkg" );
-  const auto layer = [&file]( const QString &name ) { return QString( "ogr:dbname='%1' table=\"%2\" (geom)" ).arg( file, name ); };
-  const QVariantMap sinks { { "SPANS", layer( "spans" ) }, { "NODES", layer( "nodes" ) }, { "STRETCHES", layer( "stretches" ) },
-    { "EXTREMES", layer( "extremes" ) }, { "FINDINGS", layer( "findings" ) } };
+  const auto layer = [&file]( const QString &name ) {
+    return QString( "ogr:dbname='%1' table=\"%2\" (geom)" ).arg( file, name );
+  };
+  const QVariantMap sinks { { "SPANS", layer( "spans" ) }, { "NODES", layer( "nodes" ) },
+    { "STRETCHES", layer( "stretches" ) }, { "EXTREMES", layer( "extremes" ) }, { "FINDINGS", layer( "findings" ) } };
   // Twice: the second run replaces the layers one by one and leaves others alone.
   for ( int run = 0; run < 2; ++run )
   {
@@ -148,9 +154,12 @@ void TestOutputs::formatsThatCannotHoldGaps_data()
 {
   QTest::addColumn<QString>( "sink" );
   QTest::addColumn<QString>( "file" );
-  QTest::newRow( "spans as shapefile" ) << "SPANS" << "spans.shp";
-  QTest::newRow( "spans as GeoJSON" ) << "SPANS" << "spans.geojson";
-  QTest::newRow( "nodes as shapefile" ) << "NODES" << "nodes.SHP";
+  QTest::newRow( "spans as shapefile" ) << "SPANS"
+                                        << "spans.shp";
+  QTest::newRow( "spans as GeoJSON" ) << "SPANS"
+                                      << "spans.geojson";
+  QTest::newRow( "nodes as shapefile" ) << "NODES"
+                                        << "nodes.SHP";
 }
 
 void TestOutputs::formatsThatCannotHoldGaps()
@@ -158,14 +167,15 @@ void TestOutputs::formatsThatCannotHoldGaps()
   QFETCH( QString, sink );
   QFETCH( QString, file );
   QTemporaryDir folder;
-  const LayerPointer mains = drawLayer( Slope::lines(),
-    { { line( { { 0, 0 }, { 100, 0 } } ) }, { line( { { 0, 30 }, { 100, 30 } } ) } }, "pipe" );
+  const LayerPointer mains = drawLayer(
+    Slope::lines(), { { line( { { 0, 0 }, { 100, 0 } } ) }, { line( { { 0, 30 }, { 100, 30 } } ) } }, "pipe" );
   QVariantMap changes { { "MAINS", asParameter( mains ) }, { "SPANS", folder.filePath( "spans.gpkg" ) } };
   changes.insert( sink, folder.filePath( file ) );
   const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( changes ) );
   QVERIFY( !outcome.ok );
-  QCOMPARE( outcome.errors, QStringList( sink + " has places without figures (no source or no terrain), which the format of "
-                              + folder.filePath( file ) + " cannot hold; choose a GeoPackage (.gpkg)." ) );
+  QCOMPARE( outcome.errors,
+    QStringList( sink + " has places without figures (no source or no terrain), which the format of "
+      + folder.filePath( file ) + " cannot hold; choose a GeoPackage (.gpkg)." ) );
   QCOMPARE( QDir( folder.path() ).entryList( QDir::Files ), QStringList() );
 }
 
@@ -190,9 +200,11 @@ void TestOutputs::neverOverAnInput()
   const QString mains = plan + "|layername=mainlines";
   for ( const QString &target : { plan, QString( "ogr:dbname='%1' table=\"Mainlines\" (geom)" ).arg( plan ) } )
   {
-    const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", mains }, { "SPANS", target } } ) );
+    const Outcome outcome =
+      runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", mains }, { "SPANS", target } } ) );
     QVERIFY( !outcome.ok );
-    QVERIFY2( outcome.errors.first().startsWith( "SPANS would replace the input MAINS" ), qPrintable( outcome.errors.first() ) );
+    QVERIFY2( outcome.errors.first().startsWith( "SPANS would replace the input MAINS" ),
+      qPrintable( outcome.errors.first() ) );
     QCOMPARE( contentOf( plan ), before );
   }
   const QString terrain = mSlope.path( "slope.tif" );
@@ -203,7 +215,8 @@ void TestOutputs::neverOverAnInput()
   QCOMPARE( contentOf( terrain ), ground );
   // A layer of another name in the same file is no input.
   const Outcome beside = runAlgorithm( "staticpressure",
-    mSlope.parameters( { { "MAINS", mains }, { "SPANS", QString( "ogr:dbname='%1' table=\"spans\" (geom)" ).arg( plan ) } } ) );
+    mSlope.parameters(
+      { { "MAINS", mains }, { "SPANS", QString( "ogr:dbname='%1' table=\"spans\" (geom)" ).arg( plan ) } } ) );
   QVERIFY2( beside.ok, qPrintable( beside.errors.join( '\n' ) ) );
   QCOMPARE( QgsVectorLayer( mains, "mains", "ogr" ).featureCount(), 1LL );
 }
@@ -211,7 +224,8 @@ void TestOutputs::neverOverAnInput()
 void TestOutputs::neverOverEachOther()
 {
   const QString file = mSlope.path( "both.gpkg" );
-  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file }, { "NODES", file } } ) );
+  const Outcome outcome =
+    runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file }, { "NODES", file } } ) );
   QVERIFY( !outcome.ok );
   QVERIFY2( outcome.errors.first().contains( "would both be written to" ), qPrintable( outcome.errors.first() ) );
   QVERIFY( !QFile::exists( file ) );
@@ -221,7 +235,8 @@ void TestOutputs::foldersThatCannotBeWritten()
 {
   // A file stands where a folder would be needed.
   const QString terrain = mSlope.path( "slope.tif" );
-  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", terrain + "/spans.gpkg" } } ) );
+  const Outcome outcome =
+    runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", terrain + "/spans.gpkg" } } ) );
   QVERIFY( !outcome.ok );
   QCOMPARE( outcome.errors.first(),
     QString( "SPANS cannot be written: no file can be made in the folder %1; choose another folder." ).arg( terrain ) );
@@ -230,20 +245,22 @@ void TestOutputs::foldersThatCannotBeWritten()
 void TestOutputs::metadataIsKept()
 {
   const QString file = mSlope.path( "told.gpkg" );
-  const Outcome outcome = runAlgorithm(
-    "staticpressure", mSlope.parameters( { { "SPANS", file }, { "SOURCE_NOTE", "Level staff, A. Gardener, 3 May, 6 h" } } ) );
+  const Outcome outcome = runAlgorithm( "staticpressure",
+    mSlope.parameters( { { "SPANS", file }, { "SOURCE_NOTE", "Level staff, A. Gardener, 3 May, 6 h" } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   for ( const QString &where : { QString( "stored" ), QString( "in memory" ) } )
   {
-    const QgsLayerMetadata metadata = where == "stored" ? QgsVectorLayer( file, "spans", "ogr" ).metadata()
-                                                        : outcome.layer( "NODES" )->metadata();
+    const QgsLayerMetadata metadata =
+      where == "stored" ? QgsVectorLayer( file, "spans", "ogr" ).metadata() : outcome.layer( "NODES" )->metadata();
     const QString history = metadata.history().join( '\n' );
-    QVERIFY2( metadata.abstract().contains( "of pipe" ), qPrintable( where + ": " + metadata.abstract() + metadata.title() ) );
+    QVERIFY2(
+      metadata.abstract().contains( "of pipe" ), qPrintable( where + ": " + metadata.abstract() + metadata.title() ) );
     QVERIFY( metadata.abstract().contains( "Pressure at rest. With water running it is lower" ) );
     QVERIFY( metadata.abstract().contains( "not a stamped design" ) );
-    for ( const char *fact : { "Made by Stillhead ", "Source: a water level at 150 m", "Level staff, A. Gardener, 3 May, 6 h",
-            "Ground: terrain “slope”, band 1: 401 × 81 cells of 1 × 1 m", "chosen by TERRAIN_UNIT",
-            "Weight of water: 9.79785 kPa per m of height, water at 15 °C", "PRESSURE_UNIT = 3", "MAINS = pipe" } )
+    for ( const char *fact :
+      { "Made by Stillhead ", "Source: a water level at 150 m", "Level staff, A. Gardener, 3 May, 6 h",
+        "Ground: terrain “slope”, band 1: 401 × 81 cells of 1 × 1 m", "chosen by TERRAIN_UNIT",
+        "Weight of water: 9.79785 kPa per m of height, water at 15 °C", "PRESSURE_UNIT = 3", "MAINS = pipe" } )
       QVERIFY2( history.contains( QString::fromUtf8( fact ) ), qPrintable( where + ": " + fact + " in\n" + history ) );
   }
 }
@@ -263,8 +280,11 @@ void TestOutputs::progressRises()
 {
   Listener listener;
   std::vector<double> seen;
-  QObject::connect( &listener, &QgsFeedback::progressChanged, &listener, [&seen]( double progress ) { seen.push_back( progress ); } );
-  QVERIFY( runAlgorithm( "staticpressure", mSlope.parameters( { { "SURFACE", mSlope.path( "progress.tif" ) } } ), listener ).ok );
+  QObject::connect(
+    &listener, &QgsFeedback::progressChanged, &listener, [&seen]( double progress ) { seen.push_back( progress ); } );
+  QVERIFY(
+    runAlgorithm( "staticpressure", mSlope.parameters( { { "SURFACE", mSlope.path( "progress.tif" ) } } ), listener )
+      .ok );
   QVERIFY( seen.size() > 10 );
   for ( std::size_t i = 1; i < seen.size(); ++i )
     QVERIFY2( seen[i] >= seen[i - 1], qPrintable( QString( "%1 after %2" ).arg( seen[i] ).arg( seen[i - 1] ) ) );

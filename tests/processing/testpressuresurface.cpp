@@ -22,6 +22,7 @@ class TestPressureSurface : public QObject
     void staysWithinTheArea();
     void terrainInFeet();
     void agreesWithThePipe();
+    void bandAreas();
     void refusals_data();
     void refusals();
     void keepsWhatItIs();
@@ -86,8 +87,8 @@ void TestPressureSurface::lowCaseIsTheSecondBand()
 
 void TestPressureSurface::groundsThatAreTooHighOrLow()
 {
-  const Outcome outcome =
-    runAlgorithm( "pressuresurface", parameters( { { "SOURCE_LOW", 140 }, { "COVER", 1 }, { "LEAST", 25 }, { "MOST", 60 } } ) );
+  const Outcome outcome = runAlgorithm(
+    "pressuresurface", parameters( { { "SOURCE_LOW", 140 }, { "COVER", 1 }, { "LEAST", 25 }, { "MOST", 60 } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   STILLHEAD_NEAR( outcome.number( "STATIC_LEVEL_HIGH" ), 150.0, 1e-9 );
   STILLHEAD_NEAR( outcome.number( "STATIC_LEVEL_LOW" ), 140.0, 1e-9 );
@@ -96,10 +97,37 @@ void TestPressureSurface::groundsThatAreTooHighOrLow()
   STILLHEAD_NEAR( outcome.number( "GROUND_TOO_LOW" ), 91.0, 1e-9 );
 }
 
+// 50 + east / 10: under 60 as far as east 100, 60 to 70 as far as 200, 70 and over beyond; the ground is 81 m wide and its
+// plan is true to scale within 0.1 %.
+void TestPressureSurface::bandAreas()
+{
+  const Outcome outcome = runAlgorithm(
+    "pressuresurface", parameters( { { "BANDS", "60 70" }, { "BAND_AREAS", QgsProcessing::TEMPORARY_OUTPUT } } ) );
+  QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
+  const std::vector<Row> areas = outcome.features( "BAND_AREAS" );
+  QCOMPARE( areas.size(), std::size_t( 3 ) );
+  const double widthsM[] { 100.5, 100.0, 200.5 };
+  for ( const Row &area : areas )
+  {
+    const int band = area["band"].toInt();
+    QVERIFY( band >= 0 && band <= 2 );
+    STILLHEAD_NEAR( area["area"].toDouble(), widthsM[band] * 81.0, widthsM[band] * 81.0 * 1e-3 );
+    QCOMPARE( area["p_from"].isNull(), band == 0 );
+    QCOMPARE( area["p_to"].isNull(), band == 2 );
+    if ( band == 1 )
+    {
+      STILLHEAD_SAME( area["p_from"].toDouble(), 60.0 );
+      STILLHEAD_SAME( area["p_to"].toDouble(), 70.0 );
+    }
+    QVERIFY( !area["band_text"].toString().isEmpty() );
+  }
+}
+
 void TestPressureSurface::staysWithinTheArea()
 {
   const LayerPointer area = drawLayer( "Polygon?crs=EPSG:32631",
-    { { QString( "POLYGON((%1, %2, %3, %4, %1))" ).arg( at( 10.5, -10.5 ), at( 20.5, -10.5 ), at( 20.5, 10.5 ), at( 10.5, 10.5 ) ) } },
+    { { QString( "POLYGON((%1, %2, %3, %4, %1))" )
+          .arg( at( 10.5, -10.5 ), at( 20.5, -10.5 ), at( 20.5, 10.5 ), at( 10.5, 10.5 ) ) } },
     "bed" );
   const Outcome outcome = runAlgorithm( "pressuresurface", parameters( { { "AREA", asParameter( area ) } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
@@ -113,7 +141,8 @@ void TestPressureSurface::staysWithinTheArea()
 
 void TestPressureSurface::terrainInFeet()
 {
-  const QString feet = mSlope.makeTerrain( "feet.tif", []( double east, double ) { return ( 100.0 - 0.1 * east ) / 0.3048; } );
+  const QString feet =
+    mSlope.makeTerrain( "feet.tif", []( double east, double ) { return ( 100.0 - 0.1 * east ) / 0.3048; } );
   const Outcome outcome =
     runAlgorithm( "pressuresurface", parameters( { { "TERRAIN", feet }, { "TERRAIN_UNIT", 2 } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
@@ -139,9 +168,12 @@ void TestPressureSurface::refusals_data()
   QTest::newRow( "no source" ) << QVariantMap { { "SOURCE", QVariant() } } << "SOURCE is not given";
   QTest::newRow( "no ground" ) << QVariantMap { { "SOURCE", place( 900, 0 ) }, { "SOURCE_KIND", 2 } }
                                << "The terrain has no elevation at the source; give SOURCE_ELEVATION";
-  QTest::newRow( "limits" ) << QVariantMap { { "LEAST", 60 }, { "MOST", 50 } } << "LEAST (60 m of water) is above MOST (50 m of water)";
-  QTest::newRow( "input" ) << QVariantMap { { "SURFACE", mSlope.path( "slope.tif" ) } } << "SURFACE would replace the input TERRAIN";
-  QTest::newRow( "area missing" ) << QVariantMap { { "AREA", "/nowhere/bed.gpkg" } } << "AREA (“/nowhere/bed.gpkg”) cannot be opened as a layer of polygons";
+  QTest::newRow( "limits" ) << QVariantMap { { "LEAST", 60 }, { "MOST", 50 } }
+                            << "LEAST (60 m of water) is above MOST (50 m of water)";
+  QTest::newRow( "input" ) << QVariantMap { { "SURFACE", mSlope.path( "slope.tif" ) } }
+                           << "SURFACE would replace the input TERRAIN";
+  QTest::newRow( "area missing" ) << QVariantMap { { "AREA", "/nowhere/bed.gpkg" } }
+                                  << "AREA (“/nowhere/bed.gpkg”) cannot be opened as a layer of polygons";
 }
 
 void TestPressureSurface::refusals()
@@ -159,7 +191,8 @@ void TestPressureSurface::refusals()
 
 void TestPressureSurface::keepsWhatItIs()
 {
-  const Outcome outcome = runAlgorithm( "pressuresurface", parameters( { { "SURFACE", mSlope.path( "told.tif" ) }, { "SOURCE_NOTE", "By staff" } } ) );
+  const Outcome outcome = runAlgorithm(
+    "pressuresurface", parameters( { { "SURFACE", mSlope.path( "told.tif" ) }, { "SOURCE_NOTE", "By staff" } } ) );
   QVERIFY( outcome.ok );
   QgsRasterLayer layer( mSlope.path( "told.tif" ), "told" );
   bool loaded = false;

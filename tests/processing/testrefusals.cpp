@@ -66,35 +66,44 @@ void TestRefusals::values_data()
     "BOOST_LOW (6 m of water) is above BOOST (5 m of water); a pump adds most at no flow: swap them." );
   row( "least above most", { { "LEAST", 60 }, { "MOST", 50 } },
     "LEAST (60 m of water) is above MOST (50 m of water); give limits that leave room between them." );
-  row( "least by default above most", { { "MOST", 15 } }, "LEAST (unset, so 20 m of water) is above MOST (15 m of water)" );
+  row( "least by default above most", { { "MOST", 15 } },
+    "LEAST (unset, so 20 m of water) is above MOST (15 m of water)" );
   row( "laterals' least above most", { { "LATERAL_LEAST", 30 }, { "LATERAL_MOST", 25 } },
     "LATERAL_LEAST (30 m of water) is above LATERAL_MOST (25 m of water)" );
   row( "band no number", { { "BANDS", "30, forty, 60" } }, "BANDS: entry 2, “forty”, is not a number" );
   row( "band twice", { { "BANDS", "30 45 45 60" } }, "BANDS: entry 3, “45”, is not above the entry before it, “45”" );
   row( "bands falling", { { "BANDS", "30;45;40" } }, "BANDS: entry 3, “40”, is not above the entry before it, “45”" );
-  row( "decimal comma", { { "BANDS", "2,5; 3,5" } }, "BANDS: “2,5” has a decimal comma, but a point is the decimal mark" );
+  row(
+    "decimal comma", { { "BANDS", "2,5; 3,5" } }, "BANDS: “2,5” has a decimal comma, but a point is the decimal mark" );
   row( "decimal comma that could rise", { { "BANDS", "2,5 6" } }, "“2,5” has a decimal comma" );
-  row( "decimal comma among commas", { { "BANDS", "2,5,3,5" } }, "entry 3, “3”, is not above the entry before it, “5”; write the limits in rising order (a point is the decimal mark" );
+  row( "decimal comma among commas", { { "BANDS", "2,5,3,5" } },
+    "entry 3, “3”, is not above the entry before it, “5”; write the limits in rising order (a point is the decimal "
+    "mark" );
   row( "band missing", { { "BANDS", "30,,60" } }, "BANDS: entry 2 is empty" );
   row( "band not finite", { { "BANDS", "30 inf" } }, "BANDS: entry 2, “inf”, is not a number" );
   row( "ice", { { "WATER_TEMPERATURE", -0.5 } }, "WATER_TEMPERATURE is −0.5 °C, out of range; give 0 to 40 °C." );
   row( "hot water", { { "WATER_TEMPERATURE", 40.5 } }, "WATER_TEMPERATURE is 40.5 °C, out of range" );
   row( "suction", { { "SOURCE_KIND", 0 }, { "SOURCE_VALUE", -5 }, { "SOURCE_LOW", -6 } },
     "SOURCE_VALUE is −5 m of water, out of range; give a pressure from 0 to 1,020.6 m of water" );
-  row( "far too much", { { "SOURCE_KIND", 0 }, { "SOURCE_VALUE", 150000 }, { "SOURCE_LOW", 1 }, { "PRESSURE_UNIT", 0 } },
+  row( "far too much",
+    { { "SOURCE_KIND", 0 }, { "SOURCE_VALUE", 150000 }, { "SOURCE_LOW", 1 }, { "PRESSURE_UNIT", 0 } },
     "SOURCE_VALUE is 150000 psi, out of range; give a pressure from 0 to 1,450 psi" );
   row( "negative limit", { { "LEAST", -1 } }, "LEAST is −1 m of water, out of range" );
   row( "negative reading error", { { "READING_ERROR", -1 } }, "READING_ERROR is −1 m of water, out of range" );
   row( "negative pump", { { "BOOST", -1 } }, "BOOST is −1 m of water, out of range" );
-  row( "negative terrain error", { { "TERRAIN_RMSE", -0.3 } }, "TERRAIN_RMSE is −0.3 m, below 0; give a distance of 0 or more." );
+  row( "negative terrain error", { { "TERRAIN_RMSE", -0.3 } },
+    "TERRAIN_RMSE is −0.3 m, below 0; give a distance of 0 or more." );
   row( "negative reach", { { "SOURCE_REACH", -1 } }, "SOURCE_REACH is −1 m, below 0" );
   row( "negative tolerance", { { "JOIN_TOLERANCE", -1 } }, "JOIN_TOLERANCE is −1 m, below 0" );
-  row( "text for a number", { { "SOURCE_VALUE", "65 psi" } }, "SOURCE_VALUE is “65 psi”, which is not a number. Give the number alone" );
+  row( "text for a number", { { "SOURCE_VALUE", "65 psi" } },
+    "SOURCE_VALUE is “65 psi”, which is not a number. Give the number alone" );
   row( "comma in a number", { { "SOURCE_VALUE", "4,5" } }, "with a point as decimal mark" );
-  row( "not a number", { { "COVER", std::numeric_limits<double>::quiet_NaN() } }, "COVER is “nan”, which is not a number" );
+  row( "not a number", { { "COVER", std::numeric_limits<double>::quiet_NaN() } },
+    "COVER is “nan”, which is not a number" );
   row( "no such unit", { { "PRESSURE_UNIT", 5 } },
     "PRESSURE_UNIT is “5”; choose one of 0 (psi), 1 (kPa), 2 (bar), 3 (metres of water), 4 (feet of water)." );
-  row( "no such kind", { { "SOURCE_KIND", "tank" } }, "SOURCE_KIND is “tank”; choose one of 0 (Pressure read on a gauge)" );
+  row( "no such kind", { { "SOURCE_KIND", "tank" } },
+    "SOURCE_KIND is “tank”; choose one of 0 (Pressure read on a gauge)" );
 }
 
 void TestRefusals::values()
@@ -111,13 +120,19 @@ void TestRefusals::lines_data()
   QTest::addColumn<QString>( "wkt" );
   QTest::addColumn<QString>( "sentence" );
   const QString good = line( { { 100, 0 }, { 100, 30 } } );
-  QTest::newRow( "mains without CRS" ) << "MAINS" << "LineString?crs=" << good
-                                       << "MAINS (“drawn”) has no coordinate reference system; set the layer's CRS first.";
-  QTest::newRow( "laterals without CRS" ) << "LATERALS" << "LineString?crs=" << good << "LATERALS (“drawn”) has no coordinate reference system";
-  QTest::newRow( "no lines" ) << "MAINS" << Slope::lines() << QString() << "MAINS (“drawn”) has no lines; draw the mainlines first";
-  QTest::newRow( "no length" ) << "MAINS" << Slope::lines() << line( { { 5, 5 }, { 5, 5 } } ) << "None of the drawn lines has any length";
-  QTest::newRow( "elsewhere" ) << "MAINS" << Slope::lines() << line( { { 9000, 0 }, { 9100, 0 } } )
-                               << "No drawn line lies on the terrain; check that lines and terrain cover the same ground";
+  QTest::newRow( "mains without CRS" )
+    << "MAINS"
+    << "LineString?crs=" << good << "MAINS (“drawn”) has no coordinate reference system; set the layer's CRS first.";
+  QTest::newRow( "laterals without CRS" )
+    << "LATERALS"
+    << "LineString?crs=" << good << "LATERALS (“drawn”) has no coordinate reference system";
+  QTest::newRow( "no lines" ) << "MAINS" << Slope::lines() << QString()
+                              << "MAINS (“drawn”) has no lines; draw the mainlines first";
+  QTest::newRow( "no length" ) << "MAINS" << Slope::lines() << line( { { 5, 5 }, { 5, 5 } } )
+                               << "None of the drawn lines has any length";
+  QTest::newRow( "elsewhere" )
+    << "MAINS" << Slope::lines() << line( { { 9000, 0 }, { 9100, 0 } } )
+    << "No drawn line lies on the terrain; check that lines and terrain cover the same ground";
 }
 
 void TestRefusals::lines()
@@ -140,11 +155,17 @@ void TestRefusals::terrains_data()
 {
   QTest::addColumn<QString>( "file" );
   QTest::addColumn<QString>( "sentence" );
-  QTest::newRow( "missing" ) << "nowhere.tif" << "nowhere.tif”) cannot be opened as a raster; check the file and its path.";
-  QTest::newRow( "no raster" ) << "text.tif" << "text.tif”) cannot be opened as a raster";
-  QTest::newRow( "no CRS" ) << "nocrs.tif" << "TERRAIN (“nocrs”) has no coordinate reference system; set the layer's CRS first.";
-  QTest::newRow( "picture" ) << "rgb.tif" << "is a picture in colours, not elevations; choose a raster whose cells hold ground elevations.";
-  QTest::newRow( "palette" ) << "palette.tif" << "is a picture whose cells are colours of a palette, not elevations";
+  QTest::newRow( "missing" ) << "nowhere.tif"
+                             << "nowhere.tif”) cannot be opened as a raster; check the file and its path.";
+  QTest::newRow( "no raster" ) << "text.tif"
+                               << "text.tif”) cannot be opened as a raster";
+  QTest::newRow( "no CRS" ) << "nocrs.tif"
+                            << "TERRAIN (“nocrs”) has no coordinate reference system; set the layer's CRS first.";
+  QTest::newRow( "picture" )
+    << "rgb.tif"
+    << "is a picture in colours, not elevations; choose a raster whose cells hold ground elevations.";
+  QTest::newRow( "palette" ) << "palette.tif"
+                             << "is a picture whose cells are colours of a palette, not elevations";
 }
 
 void TestRefusals::terrains()
@@ -166,12 +187,14 @@ void TestRefusals::terrains()
       raster.bands = { raster.bands[0], raster.bands[0], raster.bands[0] };
     } );
   else if ( file == "palette.tif" )
-    mSlope.makeTerrain( file, flat, []( SmallRaster &raster ) { raster.type = GDT_Byte; }, []( GDALDataset &dataset ) {
-      GDALColorTable colours;
-      const GDALColorEntry white { 255, 255, 255, 255 };
-      colours.SetColorEntry( 0, &white );
-      dataset.GetRasterBand( 1 )->SetColorTable( &colours );
-    } );
+    mSlope.makeTerrain(
+      file, flat, []( SmallRaster &raster ) { raster.type = GDT_Byte; },
+      []( GDALDataset &dataset ) {
+        GDALColorTable colours;
+        const GDALColorEntry white { 255, 255, 255, 255 };
+        colours.SetColorEntry( 0, &white );
+        dataset.GetRasterBand( 1 )->SetColorTable( &colours );
+      } );
   refuse( { { "TERRAIN", mSlope.path( file ) } }, sentence );
 }
 
@@ -179,22 +202,32 @@ void TestRefusals::places_data()
 {
   QTest::addColumn<QVariantMap>( "changes" );
   QTest::addColumn<QString>( "sentence" );
-  QTest::newRow( "no mains" ) << QVariantMap { { "MAINS", QVariant() } } << "MAINS is not given; choose a layer of lines.";
-  QTest::newRow( "mains missing" ) << QVariantMap { { "MAINS", "/nowhere/pipe.gpkg" } }
-                                   << "MAINS (“/nowhere/pipe.gpkg”) cannot be opened as a layer of lines; check the file and its path.";
-  QTest::newRow( "laterals missing" ) << QVariantMap { { "LATERALS", "/nowhere/heads.gpkg" } } << "LATERALS (“/nowhere/heads.gpkg”) cannot be opened";
-  QTest::newRow( "no terrain" ) << QVariantMap { { "TERRAIN", QVariant() } } << "TERRAIN is not given; choose a raster of ground elevations.";
-  QTest::newRow( "no such band" ) << QVariantMap { { "TERRAIN_BAND", 2 } } << "TERRAIN_BAND is 2, but the terrain's bands are numbered 1 to 1";
-  QTest::newRow( "no source" ) << QVariantMap { { "SOURCE", QVariant() } } << "SOURCE is not given; choose the point where the pressure comes from.";
-  QTest::newRow( "no point" ) << QVariantMap { { "SOURCE", "the meter" } } << "SOURCE is “the meter”, which is no point; write it as x,y [EPSG:code]";
-  QTest::newRow( "no such CRS" ) << QVariantMap { { "SOURCE", "1,2 [EPSG:999999]" } } << "SOURCE names a CRS that is not known, “EPSG:999999”";
+  QTest::newRow( "no mains" ) << QVariantMap { { "MAINS", QVariant() } }
+                              << "MAINS is not given; choose a layer of lines.";
+  QTest::newRow( "mains missing" ) << QVariantMap {
+    { "MAINS", "/nowhere/pipe.gpkg" }
+  } << "MAINS (“/nowhere/pipe.gpkg”) cannot be opened as a layer of lines; check the file and its path.";
+  QTest::newRow( "laterals missing" ) << QVariantMap { { "LATERALS", "/nowhere/heads.gpkg" } }
+                                      << "LATERALS (“/nowhere/heads.gpkg”) cannot be opened";
+  QTest::newRow( "no terrain" ) << QVariantMap { { "TERRAIN", QVariant() } }
+                                << "TERRAIN is not given; choose a raster of ground elevations.";
+  QTest::newRow( "no such band" ) << QVariantMap { { "TERRAIN_BAND", 2 } }
+                                  << "TERRAIN_BAND is 2, but the terrain's bands are numbered 1 to 1";
+  QTest::newRow( "no source" ) << QVariantMap { { "SOURCE", QVariant() } }
+                               << "SOURCE is not given; choose the point where the pressure comes from.";
+  QTest::newRow( "no point" ) << QVariantMap { { "SOURCE", "the meter" } }
+                              << "SOURCE is “the meter”, which is no point; write it as x,y [EPSG:code]";
+  QTest::newRow( "no such CRS" ) << QVariantMap { { "SOURCE", "1,2 [EPSG:999999]" } }
+                                 << "SOURCE names a CRS that is not known, “EPSG:999999”";
   QTest::newRow( "source far away" ) << QVariantMap { { "SOURCE", place( 100, 12.5 ) } }
-                                     << "The source lies 12.500 m from the nearest pipe, farther than SOURCE_REACH (10 m); move it onto the pipe, or raise SOURCE_REACH.";
+                                     << "The source lies 12.500 m from the nearest pipe, farther than SOURCE_REACH (10 "
+                                        "m); move it onto the pipe, or raise SOURCE_REACH.";
   QTest::newRow( "source beyond a short reach, in feet" )
     << QVariantMap { { "SOURCE", place( 100, 3.048 ) }, { "SOURCE_REACH", 5 }, { "LENGTH_UNIT", 0 } }
     << "The source lies 10.00 ft from the nearest pipe, farther than SOURCE_REACH (5 ft)";
-  QTest::newRow( "source off the terrain" ) << QVariantMap { { "SOURCE", place( -5, 0 ) }, { "SOURCE_KIND", 2 }, { "SOURCE_VALUE", 50 }, { "SOURCE_LOW", 50 } }
-                                            << "The terrain has no elevation at the source; give SOURCE_ELEVATION, or a terrain that reaches there.";
+  QTest::newRow( "source off the terrain" )
+    << QVariantMap { { "SOURCE", place( -5, 0 ) }, { "SOURCE_KIND", 2 }, { "SOURCE_VALUE", 50 }, { "SOURCE_LOW", 50 } }
+    << "The terrain has no elevation at the source; give SOURCE_ELEVATION, or a terrain that reaches there.";
 }
 
 void TestRefusals::places()
@@ -232,7 +265,8 @@ void TestRefusals::checkedBeforeTheRun()
     QgsApplication::processingRegistry()->createAlgorithmById( "stillhead:staticpressure" ) );
   QgsProcessingContext context;
   QString message;
-  QVERIFY( !algorithm->checkParameterValues( mSlope.parameters( { { "SOURCE_VALUE", "65 psi" } } ), context, &message ) );
+  QVERIFY(
+    !algorithm->checkParameterValues( mSlope.parameters( { { "SOURCE_VALUE", "65 psi" } } ), context, &message ) );
   QVERIFY2( message.startsWith( "SOURCE_VALUE is “65 psi”, which is not a number." ), qPrintable( message ) );
   QVERIFY( !algorithm->checkParameterValues( mSlope.parameters( { { "LENGTH_UNIT", 2 } } ), context, &message ) );
   QVERIFY2( message.startsWith( "LENGTH_UNIT is “2”; choose one of 0 (feet), 1 (metres)." ), qPrintable( message ) );

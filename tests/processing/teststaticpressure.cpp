@@ -171,20 +171,22 @@ void TestStaticPressure::gaugePumpAndCover()
 
   // Surveyed ground goes before the terrain; both are told with their difference.
   const Outcome surveyed = runAlgorithm( "staticpressure",
-    mSlope.parameters( { { "SOURCE_KIND", 2 }, { "SOURCE_VALUE", 50 }, { "SOURCE_LOW", 48 }, { "SOURCE_ELEVATION", 101.5 } } ) );
+    mSlope.parameters(
+      { { "SOURCE_KIND", 2 }, { "SOURCE_VALUE", 50 }, { "SOURCE_LOW", 48 }, { "SOURCE_ELEVATION", 101.5 } } ) );
   QVERIFY( surveyed.ok );
   STILLHEAD_NEAR( surveyed.number( "STATIC_LEVEL_HIGH" ), 151.5, 1e-9 );
   STILLHEAD_NEAR( surveyed.number( "STATIC_LEVEL_LOW" ), 149.5, 1e-9 );
-  QVERIFY( surveyed.said( surveyed.infos, "101.50 m surveyed, which is used; 100.00 m by the terrain; difference 1.50 m" ) );
+  QVERIFY(
+    surveyed.said( surveyed.infos, "101.50 m surveyed, which is used; 100.00 m by the terrain; difference 1.50 m" ) );
 }
 
 void TestStaticPressure::withoutSourceThereAreNoFigures()
 {
   const LayerPointer mains = drawLayer( Slope::lines(),
-    { { line( { { 0, 0 }, { 100, 0 } } ) }, { line( { { 0, 30 }, { 100, 30 } } ) }, { line( { { 100, 0 }, { 100, -60 } } ) } },
+    { { line( { { 0, 0 }, { 100, 0 } } ) }, { line( { { 0, 30 }, { 100, 30 } } ) },
+      { line( { { 100, 0 }, { 100, -60 } } ) } },
     "pipe" );
-  const Outcome outcome =
-    runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   STILLHEAD_NEAR( outcome.number( "LENGTH_NO_SOURCE" ), 100.0, 1e-3 );
   // Beyond the edge at −40.5 there is no terrain.
@@ -206,11 +208,14 @@ void TestStaticPressure::withoutSourceThereAreNoFigures()
   QCOMPARE( without, 2 );
 
   // Nothing has figures: the extremes are null, not 0.
-  const LayerPointer off = drawLayer( Slope::lines(), { { line( { { 50, 80 }, { 50, 40.4 }, { 50, 90 } } ) } }, "pipe" );
+  const LayerPointer off =
+    drawLayer( Slope::lines(), { { line( { { 50, 80 }, { 50, 40.4 }, { 50, 90 } } ) } }, "pipe" );
   const Outcome none = runAlgorithm( "staticpressure",
     mSlope.parameters( { { "MAINS", asParameter( off ) }, { "SOURCE", place( 50, 90 ) },
-      { "TERRAIN", mSlope.makeTerrain( "hole.tif", []( double, double ) { return -9999.0; }, {},
-                     []( GDALDataset &dataset ) { dataset.GetRasterBand( 1 )->SetNoDataValue( -9999 ); } ) } } ) );
+      { "TERRAIN",
+        mSlope.makeTerrain(
+          "hole.tif", []( double, double ) { return -9999.0; }, {},
+          []( GDALDataset &dataset ) { dataset.GetRasterBand( 1 )->SetNoDataValue( -9999 ); } ) } } ) );
   QVERIFY2( none.ok, qPrintable( none.errors.join( '\n' ) ) );
   QVERIFY( none.results.contains( "P_LOWEST" ) );
   QVERIFY( !none.results.value( "P_LOWEST" ).isValid() );
@@ -241,7 +246,8 @@ void TestStaticPressure::bandsFollowTheLimits()
   QStringList texts;
   for ( const Row &span : thirds.features( "SPANS" ) )
     texts << span["band_text"].toString();
-  QCOMPARE( texts, QStringList( { "50 to 55 m of water", "55 to 60 m of water", "60 to 75 m of water", "75 m of water and over" } ) );
+  QCOMPARE( texts,
+    QStringList( { "50 to 55 m of water", "55 to 60 m of water", "60 to 75 m of water", "75 m of water and over" } ) );
 
   const Outcome given = runAlgorithm( "staticpressure", mSlope.parameters( { { "BANDS", "52.5; 60 78" } } ) );
   QVERIFY( given.ok );
@@ -249,14 +255,14 @@ void TestStaticPressure::bandsFollowTheLimits()
   for ( const Row &span : given.features( "SPANS" ) )
     texts << span["band_text"].toString();
   // MOST (55) cuts too, within a band.
-  QCOMPARE( texts, QStringList( { "under 52.5 m of water", "52.5 to 60 m of water", "52.5 to 60 m of water", "60 to 78 m of water",
-                     "78 m of water and over" } ) );
+  QCOMPARE( texts,
+    QStringList( { "under 52.5 m of water", "52.5 to 60 m of water", "52.5 to 60 m of water", "60 to 78 m of water",
+      "78 m of water and over" } ) );
 }
 
 void TestStaticPressure::lateralsHaveTheirOwnLimits()
 {
-  const LayerPointer laterals =
-    drawLayer( Slope::lines(), { { line( { { 40, 0 }, { 40, 20 } } ) } }, "heads" );
+  const LayerPointer laterals = drawLayer( Slope::lines(), { { line( { { 40, 0 }, { 40, 20 } } ) } }, "heads" );
   const Outcome outcome = runAlgorithm( "staticpressure",
     mSlope.parameters( { { "LATERALS", asParameter( laterals ) }, { "LATERAL_LEAST", 10 }, { "LATERAL_MOST", 50 } } ) );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
@@ -270,13 +276,15 @@ void TestStaticPressure::lateralsHaveTheirOwnLimits()
     QCOMPARE( span["state"].toString(), QString( "over limit" ) );
   }
   QCOMPARE( seen, 1 );
-  QVERIFY( outcome.results.value( "SUMMARY" ).toString().contains( "20 to 55 m of water (laterals 10 to 50 m of water)" ) );
+  QVERIFY(
+    outcome.results.value( "SUMMARY" ).toString().contains( "20 to 55 m of water (laterals 10 to 50 m of water)" ) );
 }
 
 void TestStaticPressure::geometryIsInTheTerrainsUnit()
 {
   // The same ground in feet; figures stay in metres, Z turns to feet, M is the pressure.
-  const QString feet = mSlope.makeTerrain( "feet.tif", []( double east, double ) { return ( 100.0 - 0.1 * east ) / 0.3048; }, {},
+  const QString feet = mSlope.makeTerrain(
+    "feet.tif", []( double east, double ) { return ( 100.0 - 0.1 * east ) / 0.3048; }, {},
     []( GDALDataset &dataset ) { dataset.GetRasterBand( 1 )->SetUnitType( "ft" ); } );
   const Outcome outcome =
     runAlgorithm( "staticpressure", mSlope.parameters( { { "TERRAIN", feet }, { "TERRAIN_UNIT", 0 } } ) );
@@ -294,13 +302,17 @@ void TestStaticPressure::geometryIsInTheTerrainsUnit()
 void TestStaticPressure::summaryTellsFiguresAndCautions()
 {
   const Outcome outcome = runAlgorithm( "staticpressure",
-    mSlope.parameters( { { "PRESSURE_UNIT", 0 }, { "LENGTH_UNIT", 0 }, { "SOURCE_VALUE", 492.126 }, { "SOURCE_LOW", 492.126 } } ) );
+    mSlope.parameters(
+      { { "PRESSURE_UNIT", 0 }, { "LENGTH_UNIT", 0 }, { "SOURCE_VALUE", 492.126 }, { "SOURCE_LOW", 492.126 } } ) );
   QVERIFY( outcome.ok );
   const QString summary = outcome.results.value( "SUMMARY" ).toString();
   // 80 psi stands 56.30 m of water, which is met 62.96 m along; 300 m are 984 ft.
-  QVERIFY2( summary.startsWith( "Of 984 ft of pipe, 207 ft stands within 30 to 80 psi at rest, 778 ft is over (778 ft of it mainlines)." ),
+  QVERIFY2(
+    summary.startsWith(
+      "Of 984 ft of pipe, 207 ft stands within 30 to 80 psi at rest, 778 ft is over (778 ft of it mainlines)." ),
     qPrintable( summary ) );
-  QVERIFY( summary.contains( "The highest pressure is 113.7 psi at pipe elevation 230 ft (high case), the lowest 71.1 psi at 328 ft (low case)." ) );
+  QVERIFY( summary.contains( "The highest pressure is 113.7 psi at pipe elevation 230 ft (high case), the lowest 71.1 "
+                             "psi at 328 ft (low case)." ) );
   QVERIFY( summary.contains( "elevation 492.1 ft in the high case and 492.1 ft in the low case" ) );
   QVERIFY( summary.contains( "0.43314 psi per ft of height, water at 15 °C" ) );
   QVERIFY( summary.contains( "Pressure at rest. With water running it is lower" ) );

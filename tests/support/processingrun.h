@@ -27,7 +27,7 @@ namespace stillhead::test
 {
 
   //! Runs all tests of \a Test within a QGIS session that has the provider.
-  template<class Test> int runWithQgis( int argc, char *argv[] )
+  template <class Test> int runWithQgis( int argc, char *argv[] )
   {
     QgsApplication application( argc, argv, true );
     QgsApplication::init();
@@ -203,8 +203,15 @@ namespace stillhead::test
       Slope()
       {
         makeTerrain( QStringLiteral( "slope.tif" ), []( double east, double ) { return 100.0 - 0.1 * east; } );
-        mMains =
-          drawLayer( lines(), { { line( { { 0, 0 }, { 300, 0 } } ) } }, QStringLiteral( "pipe" ) );
+        mMains = drawLayer( lines(), { { line( { { 0, 0 }, { 300, 0 } } ) } }, QStringLiteral( "pipe" ) );
+      }
+
+      //! Parameters of a surface with band areas over the slope.
+      QVariantMap surfaceParameters() const
+      {
+        return { { "TERRAIN", path( "slope.tif" ) }, { "SOURCE", place( 0, 0 ) }, { "SOURCE_KIND", 1 },
+          { "SOURCE_VALUE", 150 }, { "PRESSURE_UNIT", 3 }, { "LENGTH_UNIT", 1 }, { "SURFACE", path( "contract.tif" ) },
+          { "BAND_AREAS", QgsProcessing::TEMPORARY_OUTPUT } };
       }
 
       static QString lines() { return QStringLiteral( "LineString?crs=EPSG:32631" ); }
@@ -213,7 +220,8 @@ namespace stillhead::test
 
       //! A terrain of the same cells; \a change may alter what is written.
       QString makeTerrain( const QString &file, const std::function<double( double east, double north )> &ground,
-        const std::function<void( SmallRaster & )> &change = {}, const std::function<void( GDALDataset & )> &finish = {} ) const
+        const std::function<void( SmallRaster & )> &change = {},
+        const std::function<void( GDALDataset & )> &finish = {} ) const
       {
         SmallRaster raster;
         raster.columns = COLUMNS;
