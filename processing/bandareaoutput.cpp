@@ -1,10 +1,12 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Polygons go from the tracer to the sink as they are closed; none is kept.
+// Polygons go on as they are closed; none is kept in memory.
 #include "processing/bandareaoutput.h"
 
 #include "core/geo/gdalcachelimit.h"
+#include "core/judgement/limits.h"
 #include "core/surface/bandareas.h"
 #include "processing/parameternames.h"
+#include "processing/qgiscompat.h"
 
 #include <qgsdistancearea.h>
 #include <qgsexception.h>
@@ -23,17 +25,6 @@ namespace stillhead
     constexpr double NO_AREA = std::numeric_limits<double>::quiet_NaN();
 
     using Rings = std::vector<std::vector<TerrainPoint>>;
-
-    QgsFields bandAreaFields()
-    {
-      QgsFields fields;
-      fields.append( QgsField( field::BAND, compat::Field::Int ) );
-      fields.append( QgsField( field::BAND_TEXT, compat::Field::String ) );
-      fields.append( QgsField( field::P_FROM, compat::Field::Double ) );
-      fields.append( QgsField( field::P_TO, compat::Field::Double ) );
-      fields.append( QgsField( field::AREA, compat::Field::Double ) );
-      return fields;
-    }
 
     QgsGeometry polygonOf( const Rings &rings )
     {
@@ -77,7 +68,18 @@ namespace stillhead
 
   } // namespace
 
-  QString writeBandAreas( OutputSet &outputs, const SurfaceInput &input, const Terrain &terrain, const Limits &limits,
+  QgsFields bandAreaFields()
+  {
+    QgsFields fields;
+    fields.append( QgsField( field::BAND, compat::Field::Int ) );
+    fields.append( QgsField( field::BAND_TEXT, compat::Field::String ) );
+    fields.append( QgsField( field::P_FROM, compat::Field::Double ) );
+    fields.append( QgsField( field::P_TO, compat::Field::Double ) );
+    fields.append( QgsField( field::AREA, compat::Field::Double ) );
+    return fields;
+  }
+
+  void collectBandAreas( RowSpool &spool, const SurfaceInput &input, const Terrain &terrain, const Limits &limits,
     const ResultStyle &style, const DisplayUnits &units, const QgsCoordinateTransformContext &transforms,
     Monitor &monitor )
   {
@@ -94,20 +96,17 @@ namespace stillhead
     measure.setEllipsoid( terrain.crs.ellipsoidAcronym() );
     const double squareMetresPerUnit = units.metres( 1.0 ) * units.metres( 1.0 );
 
-    return outputs.writeStream( output::BAND_AREAS, bandAreaFields(), compat::WkbType::Polygon, terrain.crs,
-      [&]( const OutputSet::TakeRow &take ) {
-        traceBandAreas( *terrain.source, request, monitor, 0.0, 1.0, [&]( int band, const Rings &rings ) {
-          QgsFeature row;
-          row.setGeometry( polygonOf( rings ) );
-          const double areaM2 = groundAreaM2( measure, row.geometry() );
-          QgsAttributes attributes;
-          attributes << band << bandText( band, style ) << limitValue( request.limits, band - 1 )
-                     << limitValue( request.limits, band )
-                     << ( std::isnan( areaM2 ) ? QVariant() : QVariant( areaM2 / squareMetresPerUnit ) );
-          row.setAttributes( attributes );
-          take( row );
-        } );
-      } );
+    traceBandAreas( *terrain.source, request, monitor, 0.0, 1.0, [&]( int band, const Rings &rings ) {
+      QgsFeature row;
+      row.setGeometry( polygonOf( rings ) );
+      const double areaM2 = groundAreaM2( measure, row.geometry() );
+      QgsAttributes attributes;
+      attributes << band << bandText( band, style ) << limitValue( request.limits, band - 1 )
+                 << limitValue( request.limits, band )
+                 << ( std::isnan( areaM2 ) ? QVariant() : QVariant( areaM2 / squareMetresPerUnit ) );
+      row.setAttributes( attributes );
+      spool.add( row );
+    } );
   }
 
 } // namespace stillhead

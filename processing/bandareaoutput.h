@@ -6,19 +6,21 @@
 #include "processing/reading/terrainreader.h"
 #include "processing/styles/resultstyle.h"
 #include "processing/surfaceoutput.h"
-#include "processing/writing/outputset.h"
+#include "processing/writing/rowspool.h"
 
 #include <qgscoordinatetransformcontext.h>
+#include <qgsfields.h>
 
 namespace stillhead
 {
 
+  QgsFields bandAreaFields();
+
   /**
-   * Writes the bands of the high case of \a input; \a area of each polygon is ground area in squared length units.
-   * \returns the id of the layer
+   * Puts the polygons of the bands of the high case of \a input into \a spool; `area` is ground area in squared length units.
    * \throws QgsProcessingException, Cancelled, std::runtime_error
    */
-  QString writeBandAreas( OutputSet &outputs, const SurfaceInput &input, const Terrain &terrain, const Limits &limits,
+  void collectBandAreas( RowSpool &spool, const SurfaceInput &input, const Terrain &terrain, const Limits &limits,
     const ResultStyle &style, const DisplayUnits &units, const QgsCoordinateTransformContext &transforms,
     Monitor &monitor );
 

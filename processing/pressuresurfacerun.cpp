@@ -19,6 +19,16 @@
 namespace stillhead
 {
 
+  namespace
+  {
+
+    // How the progress bar is shared out.
+    constexpr double AREAS_TO = 45.0;
+    constexpr double SURFACE_TO = 92.0;
+    constexpr double WRITE_TO = 99.0;
+
+  } // namespace
+
   QStringList pressureSurfaceLayers()
   {
     return { output::SURFACE, output::BAND_AREAS };
@@ -73,41 +83,52 @@ namespace stillhead
     return facts;
   }
 
-  void PressureSurfaceRun::writeAreas( OutputSet &outputs, double fromPercent, QVariantMap &results )
+  void PressureSurfaceRun::writeSurface( OutputSet &outputs, double fromPercent, QVariantMap &results )
   {
-    if ( !outputs.isAsked( output::BAND_AREAS ) )
-      return;
-    FeedbackMonitor monitor( &mFeedback, fromPercent, 99.0 );
-    WrittenLayer areas;
-    areas.id = writeBandAreas(
-      outputs, mInput, mTerrain, mLimits, mStyle, mUnits, mValues.context().transformContext(), monitor );
-    areas.what = ResultLayer::BandAreas;
-    areas.metadata =
-      resultMetadata( facts(), mValues.definition( output::BAND_AREAS )->description(), layerNameOf( areas.id ) );
-    areas.inGeoPackage = outputs.isGeoPackage( output::BAND_AREAS );
-    finishOnLoading( areas, mStyle, mValues.context() );
-    results.insert( output::BAND_AREAS, areas.id );
-    mWritten.push_back( areas );
+    FeedbackMonitor monitor( &mFeedback, fromPercent, SURFACE_TO );
+    const QgsProcessingParameterDefinition *definition = mValues.definition( output::SURFACE );
+    WrittenLayer surface;
+    surface.id = QgsProcessingParameters::parameterAsOutputLayer( definition, mValues.values(), mValues.context() );
+    surface.what = ResultLayer::Surface;
+    surface.metadata = resultMetadata( facts(), definition->description(), layerNameOf( surface.id ) );
+    writeSurfaceFile( surface.id, mInput, mTerrain, mUnits, monitor );
+    outputs.noteWritten( output::SURFACE );
+    finishOnLoading( surface, mStyle, mValues.context() );
+    mWritten.push_back( surface );
+    results.insert( output::SURFACE, surface.id );
+  }
+
+  void PressureSurfaceRun::writeAreas( OutputSet &outputs, RowSpool &areas, QVariantMap &results )
+  {
+    FeedbackMonitor monitor( &mFeedback, SURFACE_TO, WRITE_TO );
+    WrittenLayer layer;
+    layer.id = outputs.writeSpool(
+      output::BAND_AREAS, bandAreaFields(), compat::WkbType::Polygon, mTerrain.crs, areas, monitor );
+    layer.what = ResultLayer::BandAreas;
+    layer.metadata =
+      resultMetadata( facts(), mValues.definition( output::BAND_AREAS )->description(), layerNameOf( layer.id ) );
+    layer.inGeoPackage = outputs.isGeoPackage( output::BAND_AREAS );
+    finishOnLoading( layer, mStyle, mValues.context() );
+    mWritten.push_back( layer );
+    results.insert( output::BAND_AREAS, layer.id );
   }
 
   QVariantMap PressureSurfaceRun::write()
   {
     OutputSet outputs( mValues, pressureSurfaceLayers() );
-    const double surfaceTo = outputs.isAsked( output::BAND_AREAS ) ? 50.0 : 99.0;
-    FeedbackMonitor monitor( &mFeedback, 0.0, surfaceTo );
+    const bool wantsAreas = outputs.isAsked( output::BAND_AREAS );
+    RowSpool areas;
+    if ( wantsAreas )
+    {
+      FeedbackMonitor monitor( &mFeedback, 0.0, AREAS_TO );
+      collectBandAreas(
+        areas, mInput, mTerrain, mLimits, mStyle, mUnits, mValues.context().transformContext(), monitor );
+    }
+    // From here on a cancel may come too late: the surface takes an earlier one's place when it is whole.
     QVariantMap results;
-    WrittenLayer surface;
-    surface.id = QgsProcessingParameters::parameterAsOutputLayer(
-      mValues.definition( output::SURFACE ), mValues.values(), mValues.context() );
-    surface.what = ResultLayer::Surface;
-    surface.metadata =
-      resultMetadata( facts(), mValues.definition( output::SURFACE )->description(), layerNameOf( surface.id ) );
-    writeSurfaceFile( surface.id, mInput, mTerrain, mUnits, monitor );
-    finishOnLoading( surface, mStyle, mValues.context() );
-    mWritten.push_back( surface );
-    outputs.noteWritten( output::SURFACE );
-    results.insert( output::SURFACE, surface.id );
-    writeAreas( outputs, surfaceTo, results );
+    writeSurface( outputs, wantsAreas ? AREAS_TO : 0.0, results );
+    if ( wantsAreas )
+      writeAreas( outputs, areas, results );
     outputs.commit();
     mFeedback.setProgress( 100.0 );
 

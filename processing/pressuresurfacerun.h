@@ -40,7 +40,8 @@ namespace stillhead
 
     private:
       RunFacts facts() const;
-      void writeAreas( OutputSet &outputs, double fromPercent, QVariantMap &results );
+      void writeSurface( OutputSet &outputs, double fromPercent, QVariantMap &results );
+      void writeAreas( OutputSet &outputs, RowSpool &areas, QVariantMap &results );
 
       const ParameterValues &mValues;
       Terrain &mTerrain;

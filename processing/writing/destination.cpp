@@ -115,11 +115,11 @@ namespace stillhead
 
   bool Destination::holdsGaps() const
   {
-    // Tried with each format's driver: it refuses such features, drops their geometry, or writes what cannot be read.
+    // Tried with each driver: shapefiles refuse such features, GeoJSON drops their geometry, GML writes 0 for what is no
+    // number, KML a word that few programs read. Formats that keep no Z and M at all lose nothing by it.
     static const QSet<QString> cannot { QStringLiteral( "shp" ), QStringLiteral( "dbf" ), QStringLiteral( "geojson" ),
-      QStringLiteral( "json" ), QStringLiteral( "geojsonl" ), QStringLiteral( "geojsons" ), QStringLiteral( "kml" ),
-      QStringLiteral( "kmz" ), QStringLiteral( "gml" ), QStringLiteral( "dxf" ), QStringLiteral( "gpx" ),
-      QStringLiteral( "tab" ), QStringLiteral( "mif" ) };
+      QStringLiteral( "json" ), QStringLiteral( "geojsonl" ), QStringLiteral( "geojsons" ), QStringLiteral( "gml" ),
+      QStringLiteral( "kml" ), QStringLiteral( "kmz" ) };
     return !cannot.contains( QFileInfo( mPath ).suffix().toLower() );
   }
 

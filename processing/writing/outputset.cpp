@@ -19,7 +19,7 @@ namespace stillhead
   {
 
     constexpr std::size_t BATCH_ROWS = 4096;
-    constexpr int STREAM_ROWS = 256; //!< rows that may be great polygons
+    constexpr int SPOOL_ROWS = 256; //!< rows that may be great polygons
 
     QgsFeatureList makeBatch( const ResultTable &table, std::size_t first, Monitor &monitor )
     {
@@ -155,32 +155,27 @@ namespace stillhead
     return destination;
   }
 
-  QString OutputSet::writeStream( const QString &output, const QgsFields &fields, compat::WkbType type,
-    const QgsCoordinateReferenceSystem &crs, const std::function<void( const TakeRow &take )> &produce )
+  QString OutputSet::writeSpool( const QString &output, const QgsFields &fields, compat::WkbType type,
+    const QgsCoordinateReferenceSystem &crs, RowSpool &spool, Monitor &monitor )
   {
+    stopIfCancelled( monitor );
     QString destination;
     mWritten.push_back( output );
     std::unique_ptr<QgsFeatureSink> sink( QgsProcessingParameters::parameterAsSink(
       mValues.definition( output ), mValues.values(), fields, type, crs, mValues.context(), destination ) );
     if ( !sink )
       refuseWrite( output, mDestinations.at( output ).path() );
-    QgsFeatureList batch;
-    std::size_t rows = 0;
-    const auto flush = [&] {
-      if ( !batch.isEmpty() && !sink->addFeatures( batch, QgsFeatureSink::FastInsert ) )
+    spool.rewind();
+    for ( QgsFeatureList batch = spool.take( SPOOL_ROWS ); !batch.isEmpty(); batch = spool.take( SPOOL_ROWS ) )
+    {
+      if ( !sink->addFeatures( batch, QgsFeatureSink::FastInsert ) )
         refuseWrite( output, destination );
-      rows += static_cast<std::size_t>( batch.size() );
-      batch.clear();
-    };
-    produce( [&]( QgsFeature &row ) {
-      batch.append( row );
-      if ( batch.size() >= STREAM_ROWS )
-        flush();
-    } );
-    flush();
+      if ( !mReplaces )
+        stopIfCancelled( monitor );
+    }
     const bool flushed = sink->flushBuffer();
     sink.reset();
-    if ( !flushed || !mDestinations.at( output ).holdsRows( rows ) )
+    if ( !flushed || !mDestinations.at( output ).holdsRows( spool.rows() ) )
       refuseWrite( output, destination );
     return destination;
   }

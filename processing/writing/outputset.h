@@ -6,10 +6,10 @@
 #include "core/feedback/monitor.h"
 #include "processing/writing/destination.h"
 #include "processing/writing/resulttable.h"
+#include "processing/writing/rowspool.h"
 
 #include <qgsprocessingfeedback.h>
 
-#include <functional>
 #include <map>
 #include <vector>
 
@@ -45,16 +45,13 @@ namespace stillhead
       QString write( const ResultTable &table, const QgsCoordinateReferenceSystem &crs, QgsProcessingFeedback &feedback,
         double fromPercent, double toPercent );
 
-      //! Takes one row; called from one thread at a time.
-      using TakeRow = std::function<void( QgsFeature &row )>;
-
       /**
-       * Writes rows whose number is not known before: \a produce makes them and hands each to what it is given.
+       * Writes rows that were made beforehand.
        * \returns the id of the layer
-       * \throws QgsProcessingException, Cancelled, and what \a produce throws
+       * \throws QgsProcessingException, Cancelled
        */
-      QString writeStream( const QString &output, const QgsFields &fields, compat::WkbType type,
-        const QgsCoordinateReferenceSystem &crs, const std::function<void( const TakeRow &take )> &produce );
+      QString writeSpool( const QString &output, const QgsFields &fields, compat::WkbType type,
+        const QgsCoordinateReferenceSystem &crs, RowSpool &spool, Monitor &monitor );
 
       //! Says that the output \a name, which somebody else writes, is there from now on.
       void noteWritten( const QString &name ) { mWritten.push_back( name ); }

@@ -1,13 +1,14 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Every run of pipe is widened by itself, in a plane of metres laid at its stretch: exact there, and off by far less than
-// a pen's width over any stretch, in degrees and in stretched map projections alike. Neighbours are then united two by
-// two, round after round: widening thousands of lines at once costs many times as much, and on one thread only.
+// Pipe is widened in a plane of metres laid at its stretch: exact there, and off by far less than a pen's width over any
+// stretch, in degrees and in stretched map projections alike. Groups of neighbours are widened together and then united
+// two by two, round after round: widening thousands of lines at once costs many times as much, and on one thread only.
 #include "processing/writing/stretchoutline.h"
 
 #include "core/feedback/parallel.h"
 #include "processing/writing/piperuns.h"
 
 #include <qgslinestring.h>
+#include <qgsmultilinestring.h>
 
 #include <QTransform>
 
@@ -24,6 +25,9 @@ namespace stillhead
 
     //! Straight pieces to a quarter circle: round enough for a pen.
     constexpr int SEGMENTS = 5;
+
+    //! Runs widened together: tried with ten thousand lines, far apart and crossing each other twenty times.
+    constexpr std::size_t GROUP_RUNS = 256;
 
     //! Widening takes the first share of the progress.
     constexpr double WIDENED = 0.3;
@@ -73,11 +77,10 @@ namespace stillhead
       return planes;
     }
 
-    //! An outline under way, and where it lies in an order that keeps neighbours together.
+    //! An outline under way.
     struct Outline
     {
         std::size_t stretch = 0;
-        std::uint64_t order = 0;
         QgsGeometry geometry;
     };
 
@@ -99,21 +102,62 @@ namespace stillhead
       return static_cast<std::uint32_t>( static_cast<std::int64_t>( std::floor( metres / step ) ) + ( 1LL << 31 ) );
     }
 
-    Outline widened( const PipeRun &run, const StaticResult &result, const LocalPlane &plane, double distanceM )
+    //! Puts the runs of each stretch in an order that keeps neighbours together.
+    void sortByPlace(
+      std::vector<PipeRun> &runs, const StaticResult &result, const std::vector<LocalPlane> &planes, double stepM )
     {
+      using Key = std::tuple<std::size_t, std::uint64_t, std::size_t>;
+      std::vector<Key> keys;
+      keys.reserve( runs.size() );
+      for ( std::size_t i = 0; i < runs.size(); ++i )
+      {
+        const PipeRun &run = runs[i];
+        const CanonicalLine &line = result.drawing.lines[static_cast<std::size_t>( run.line )];
+        const PlanPoint middle = result.drawing.placeAt( line, 0.5 * ( run.fromM + run.toM ) );
+        const LocalPlane &plane = planes[run.stretch];
+        keys.emplace_back(
+          run.stretch, interleaved( stepsOf( plane.x( middle ), stepM ), stepsOf( plane.y( middle ), stepM ) ), i );
+      }
+      std::sort( keys.begin(), keys.end() );
+      std::vector<PipeRun> sorted;
+      sorted.reserve( runs.size() );
+      for ( const Key &key : keys )
+        sorted.push_back( runs[std::get<2>( key )] );
+      runs = std::move( sorted );
+    }
+
+    //! Firsts of groups of at most GROUP_RUNS runs of one stretch, and the end.
+    std::vector<std::size_t> groupsOf( const std::vector<PipeRun> &runs )
+    {
+      std::vector<std::size_t> firsts;
+      for ( std::size_t i = 0; i < runs.size(); ++i )
+      {
+        if ( firsts.empty() || i - firsts.back() == GROUP_RUNS || runs[i].stretch != runs[i - 1].stretch )
+          firsts.push_back( i );
+      }
+      firsts.push_back( runs.size() );
+      return firsts;
+    }
+
+    //! The runs [first, last), which belong to one stretch, widened.
+    Outline widened( const std::vector<PipeRun> &runs, std::size_t first, std::size_t last, const StaticResult &result,
+      const LocalPlane &plane, double distanceM )
+    {
+      auto lines = std::make_unique<QgsMultiLineString>();
       QVector<double> x;
       QVector<double> y;
-      for ( const PlanPoint &place : placesOf( run, result ) )
+      for ( std::size_t i = first; i < last; ++i )
       {
-        x << plane.x( place );
-        y << plane.y( place );
+        x.clear();
+        y.clear();
+        for ( const PlanPoint &place : placesOf( runs[i], result ) )
+        {
+          x << plane.x( place );
+          y << plane.y( place );
+        }
+        lines->addGeometry( new QgsLineString( x, y ) );
       }
-      const int middle = x.size() / 2;
-      Outline outline;
-      outline.stretch = run.stretch;
-      outline.order = interleaved( stepsOf( x[middle], distanceM ), stepsOf( y[middle], distanceM ) );
-      outline.geometry = QgsGeometry( std::make_unique<QgsLineString>( x, y ) ).buffer( distanceM, SEGMENTS );
-      return outline;
+      return { runs[first].stretch, QgsGeometry( std::move( lines ) ).buffer( distanceM, SEGMENTS ) };
     }
 
     //! Unites neighbours of one stretch two by two, once.
@@ -143,18 +187,18 @@ namespace stillhead
   std::vector<QgsGeometry> stretchOutlines( const ResultContext &context, double distanceM, Monitor &monitor )
   {
     const std::vector<LocalPlane> planes = planesOf( context );
-    const std::vector<PipeRun> runs = pipeRuns( context.result );
-    std::vector<Outline> outlines( runs.size() );
-    parallelRanges( runs.size(), 32, 0, monitor, 0.0, WIDENED, [&]( std::size_t first, std::size_t last, unsigned ) {
+    std::vector<PipeRun> runs = pipeRuns( context.result );
+    sortByPlace( runs, context.result, planes, distanceM );
+    const std::vector<std::size_t> groups = groupsOf( runs );
+    std::vector<Outline> outlines( groups.size() - 1 );
+    parallelRanges( outlines.size(), 1, 0, monitor, 0.0, WIDENED, [&]( std::size_t first, std::size_t last, unsigned ) {
       for ( std::size_t i = first; i < last; ++i )
-        outlines[i] = widened( runs[i], context.result, planes[runs[i].stretch], distanceM );
-    } );
-    std::sort( outlines.begin(), outlines.end(), []( const Outline &a, const Outline &b ) {
-      return std::tie( a.stretch, a.order ) < std::tie( b.stretch, b.order );
+        outlines[i] =
+          widened( runs, groups[i], groups[i + 1], context.result, planes[runs[groups[i]].stretch], distanceM );
     } );
 
     // Every round costs about the same: half the outlines, twice as large.
-    const double rounds = std::ceil( std::log2( static_cast<double>( std::max<std::size_t>( 2, runs.size() ) ) ) );
+    const double rounds = std::ceil( std::log2( static_cast<double>( std::max<std::size_t>( 2, outlines.size() ) ) ) );
     double from = WIDENED;
     while ( outlines.size() > planes.size() )
     {

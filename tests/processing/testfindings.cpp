@@ -18,6 +18,7 @@ class TestFindings : public QObject
     void ofTheSource();
     void summits();
     void summitThatCannotBeRuledOut();
+    void systemsThatTouch();
     void missingSurvey();
     void undeclaredNoData();
 
@@ -163,6 +164,18 @@ void TestFindings::summitThatCannotBeRuledOut()
     QString( "Every way to 140.0 m of pipe leads through pipe without elevation, so a summit on the way cannot be "
              "ruled out." ) );
   STILLHEAD_NEAR( outcome.number( "LENGTH_NO_TERRAIN" ), 20.0, 1e-3 );
+}
+
+void TestFindings::systemsThatTouch()
+{
+  const LayerPointer mains = drawLayer( Slope::lines() + "&field=system:string",
+    { { line( { { 0, 0 }, { 300, 0 } } ), { "drinking" } }, { line( { { 100, 0 }, { 100, 30 } } ) } }, "pipe" );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( { { "MAINS", asParameter( mains ) } } ) );
+  QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
+  QCOMPARE( only( outcome, "systems touch" )["message"].toString(),
+    QString(
+      "Mainlines feature 2 (without a system) meets mainlines feature 1 (of system “drinking”); lines of different "
+      "systems are not joined." ) );
 }
 
 void TestFindings::missingSurvey()

@@ -1,12 +1,16 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Inside a model: layers and numbers of one step feed the next.
+// Inside a model, where layers and numbers of one step feed the next, and in a background task, as the desktop runs it:
+// prepared in the main thread, computed in another, its layers then loaded and styled in the main thread.
 #include "tests/support/processingrun.h"
 #include "tests/support/tolerance.h"
 
+#include <qgsprocessingalgrunnertask.h>
 #include <qgsprocessingmodelalgorithm.h>
 #include <qgsprocessingmodelchildalgorithm.h>
 #include <qgsprocessingmodelchildparametersource.h>
 #include <qgsprocessingmodeloutput.h>
+#include <qgsrenderer.h>
+#include <qgstaskmanager.h>
 
 using namespace stillhead::test;
 
@@ -37,6 +41,7 @@ class TestModel : public QObject
 
   private slots:
     void stepsFeedEachOther();
+    void inABackgroundTask();
 
   private:
     Slope mSlope;
@@ -90,6 +95,39 @@ void TestModel::stepsFeedEachOther()
   QVERIFY( spans );
   QVERIFY( spans->fields().names().contains( "p_high_drawn" ) );
   QVERIFY( spans->featureCount() >= 3 );
+}
+
+void TestModel::inABackgroundTask()
+{
+  const std::unique_ptr<QgsProcessingAlgorithm> algorithm(
+    QgsApplication::processingRegistry()->createAlgorithmById( "stillhead:staticpressure" ) );
+  QgsProcessingContext context;
+  context.setProject( QgsProject::instance() );
+  Listener listener;
+  const QString file = mSlope.path( "background.gpkg" );
+  const QgsProcessingOutputLayerDefinition spans( file, QgsProject::instance() );
+  const QVariantMap parameters = mSlope.parameters( { { "SPANS", QVariant::fromValue( spans ) } } );
+  auto *task = new QgsProcessingAlgRunnerTask( algorithm.get(), parameters, context, &listener );
+  bool finished = false;
+  bool ok = false;
+  QObject::connect( task, &QgsProcessingAlgRunnerTask::executed, task, [&]( bool successful, const QVariantMap & ) {
+    finished = true;
+    ok = successful;
+  } );
+  QgsApplication::taskManager()->addTask( task );
+  QTRY_VERIFY_WITH_TIMEOUT( finished, 60000 );
+  QVERIFY2( ok, qPrintable( listener.errors.join( '\n' ) ) );
+
+  // What the desktop does with the result.
+  const QString id = context.layersToLoadOnCompletion().firstKey();
+  QVERIFY( id.contains( "background.gpkg" ) );
+  QgsProcessingLayerPostProcessorInterface *finisher = context.layerToLoadOnCompletionDetails( id ).postProcessor();
+  QVERIFY( finisher );
+  QgsVectorLayer layer( id, "spans", "ogr", QgsVectorLayer::LayerOptions( false ) );
+  QCOMPARE( layer.renderer()->type(), QString( "singleSymbol" ) );
+  finisher->postProcessLayer( &layer, context, &listener );
+  QCOMPARE( layer.renderer()->type(), QString( "RuleRenderer" ) );
+  QVERIFY( layer.metadata().history().join( ' ' ).contains( "Made by Stillhead" ) );
 }
 
 int main( int argc, char *argv[] )

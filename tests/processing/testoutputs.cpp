@@ -48,6 +48,8 @@ class TestOutputs : public QObject
     void cancelLeavesEarlierResults();
     void failureLeavesEarlierResults();
     void lateCancelFinishesWhatReplaces();
+    void cancelOfTheSurface_data();
+    void cancelOfTheSurface();
     void severalLayersInOneFile();
     void formatsThatCannotHoldGaps_data();
     void formatsThatCannotHoldGaps();
@@ -127,6 +129,33 @@ void TestOutputs::lateCancelFinishesWhatReplaces()
     runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file }, { "BANDS", "900" } } ), impatient );
   QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
   QCOMPARE( QgsVectorLayer( file, "new", "ogr" ).featureCount(), 2LL );
+}
+
+void TestOutputs::cancelOfTheSurface_data()
+{
+  QTest::addColumn<double>( "percent" );
+  for ( const double percent : { 0.1, 30.0, 60.0 } )
+    QTest::newRow( QByteArray::number( percent ) ) << percent;
+}
+
+void TestOutputs::cancelOfTheSurface()
+{
+  QFETCH( double, percent );
+  QTemporaryDir folder;
+  const QVariantMap parameters { { "TERRAIN", mSlope.path( "slope.tif" ) }, { "SOURCE", place( 0, 0 ) },
+    { "SOURCE_KIND", 1 }, { "SOURCE_VALUE", 150 }, { "SURFACE", folder.filePath( "surface.tif" ) },
+    { "BAND_AREAS", folder.filePath( "areas.gpkg" ) } };
+  Impatient impatient( percent );
+  QVERIFY( !runAlgorithm( "pressuresurface", parameters, impatient ).ok );
+  QCOMPARE( QDir( folder.path() ).entryList( QDir::Files ), QStringList() );
+
+  QVERIFY( runAlgorithm( "pressuresurface", parameters ).ok );
+  const QByteArray surface = contentOf( folder.filePath( "surface.tif" ) );
+  const QByteArray areas = contentOf( folder.filePath( "areas.gpkg" ) );
+  Impatient again( percent );
+  QVERIFY( !runAlgorithm( "pressuresurface", parameters, again ).ok );
+  QCOMPARE( contentOf( folder.filePath( "surface.tif" ) ), surface );
+  QCOMPARE( contentOf( folder.filePath( "areas.gpkg" ) ), areas );
 }
 
 void TestOutputs::severalLayersInOneFile()
