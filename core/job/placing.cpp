@@ -20,6 +20,9 @@ namespace stillhead
     constexpr double USUAL_LEAST_PA = 15.0 * PASCALS_PER_PSI;
     constexpr double USUAL_MOST_PA = 250.0 * PASCALS_PER_PSI;
 
+    //! A device near a joint stands on the leg it was put on, be it the lateral; only where legs coincide is it the mainline's.
+    constexpr double SAME_DISTANCE_M = 1e-6;
+
     bool needsElevation( const Device &device )
     {
       return device.regulates() || device.kind == DeviceKind::Booster;
@@ -129,7 +132,7 @@ namespace stillhead
     for ( std::size_t i = 0; i < mJob.devices.size(); ++i )
     {
       const Device &device = mJob.devices[i];
-      const auto pipe = nearestPipe( mDrawing, *mJob.measure, device.place, device.system, mJob.joins.toleranceM );
+      const auto pipe = nearestPipe( mDrawing, *mJob.measure, device.place, device.system, SAME_DISTANCE_M );
       if ( pipe && pipe->distanceM <= mJob.joins.toleranceM )
       {
         places.push_back( { static_cast<int>( i ), pipe->on, -1 } );

@@ -122,9 +122,19 @@ namespace stillhead
               parts.push_back( part );
               continue;
             }
-            runsOf( profile, piece.fromM, piece.toM, cutsM, runs );
+            const bool afterGap = i > mFirstPiece[span] && std::isnan( mResult.pieces[i - 1].lowestM );
+            const bool beforeGap = i + 1 < mFirstPiece[span + 1] && std::isnan( mResult.pieces[i + 1].lowestM );
+            std::vector<double> ownCutsM = cutsM;
+            if ( afterGap )
+              ownCutsM.push_back( piece.fromM + FROM_GAP_M );
+            if ( beforeGap )
+              ownCutsM.push_back( piece.toM - FROM_GAP_M );
+            std::sort( ownCutsM.begin(), ownCutsM.end() );
+            runsOf( profile, piece.fromM, piece.toM, ownCutsM, runs );
             for ( const Run &run : runs )
             {
+              part.canStand = !( afterGap && run.toM <= piece.fromM + FROM_GAP_M )
+                && !( beforeGap && run.fromM >= piece.toM - FROM_GAP_M );
               part.fromM = run.fromM;
               part.toM = run.toM;
               part.elevation = { run.fromElevationM, run.toElevationM, 0.0 };

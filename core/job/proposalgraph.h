@@ -9,6 +9,9 @@
 namespace stillhead
 {
 
+  //! A regulator stands no nearer than this to pipe without elevation: read back, it must find its own.
+  constexpr double FROM_GAP_M = 0.001;
+
   /**
    * All fed pipe of \a result, the result of \a job. Runs of the profile stand for the pipe: their ends are exact, between them
    * they are straight, which keeps every elevation and so every count; ProposalPlaces turns places into exact ones.

@@ -109,8 +109,10 @@ namespace stillhead
       const Quadratic piece = quadraticOf( profile, i );
       const double low = shareAt( profile, i, run.fromM, 0.0 );
       const double high = shareAt( profile, i, run.toM, 1.0 );
-      const auto [least, most] = std::minmax( piece.at( low ), piece.at( high ) );
-      if ( elevationM < least || elevationM > most )
+      const double fromElevationM = piece.at( low );
+      const double toElevationM = piece.at( high );
+      if ( elevationM < std::min( fromElevationM, toElevationM )
+        || elevationM > std::max( fromElevationM, toElevationM ) )
         continue;
       const double share = piece.rootIn( elevationM, low, high );
       return std::clamp(

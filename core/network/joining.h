@@ -36,7 +36,8 @@ namespace stillhead
   };
 
   /**
-   * The pipe nearest to \a place on the ground; a mainline before a lateral where both lie equally near within \a toleranceM.
+   * The pipe nearest to \a place on the ground; a mainline before a lateral where both lie equally near within
+   * \a toleranceM.
    * Only lines of \a system, if it is not 0 (blank). Nothing where the drawing has no such line.
    */
   std::optional<NearestPipe> nearestPipe( const CanonicalDrawing &drawing, const PlanMeasure &measure,

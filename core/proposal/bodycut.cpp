@@ -149,6 +149,12 @@ namespace stillhead
     for ( const int limb : torn )
     {
       const LimbOrigin &origin = grown.origins[index( marked.given[index( limb )] )];
+      if ( std::any_of(
+             origin.edges.begin(), origin.edges.end(), [&]( int edge ) { return graph.edges[index( edge )].whole; } ) )
+      {
+        giveUp( graph, origin );
+        continue;
+      }
       BodyPieces body = sortBody( graph, grown, marked, limb, rules );
       const bool changed = std::any_of( body.pieces.begin(), body.pieces.end(), []( const BodyPiece &piece ) {
         return piece.low || std::any_of( piece.parts.begin(), piece.parts.end(), []( const ForestPart &part ) {

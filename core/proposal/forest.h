@@ -31,6 +31,7 @@ namespace stillhead
       int zone = 0;        //!< index into Forest::zones
       Role role = Role::Mainline;
       bool known = true;      //!< has an elevation
+      bool canStand = true;   //!< far enough from pipe without elevation for a regulator
       bool served = false;    //!< today the low case reaches it and is no less than LEAST
       bool leaveOver = false; //!< given up: to mend it would cut off pipe that is served by way of it
       bool over = false;      //!< today the high case is above MOST

@@ -14,4 +14,11 @@ namespace stillhead
    */
   Proposal proposeOnGraph( PipeGraph graph, const ProposalRules &rules );
 
+  /**
+   * After a plan failed at \a places when it was tried: forbids cuts in the looped pipe there; if that is done already, in
+   * all looped pipe; last, leaves over the pipe there (legs that coincide with others, on which no device stands plainly).
+   * \returns false if nothing is left to give
+   */
+  bool giveWay( PipeGraph &graph, const std::vector<PlaceOnLine> &places );
+
 } // namespace stillhead

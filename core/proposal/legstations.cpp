@@ -42,6 +42,8 @@ namespace stillhead
         }
 
       private:
+        static bool takesRegulator( const ForestPart &part ) { return part.known && part.canStand; }
+
         double distance( double alongM ) const { return std::abs( alongM - mStartM ); }
 
         void cut( const ForestPart &part )
@@ -89,7 +91,7 @@ namespace stillhead
           const double at = distance( alongM );
           for ( const ForestPart &part : mLeg.segments )
           {
-            if ( !part.known || at < distance( part.fromM ) || at > distance( part.toM ) )
+            if ( !takesRegulator( part ) || at < distance( part.fromM ) || at > distance( part.toM ) )
               continue;
             const double share = part.toM != part.fromM ? ( alongM - part.fromM ) / ( part.toM - part.fromM ) : 0.0;
             stations.push_back(
@@ -103,11 +105,11 @@ namespace stillhead
         {
           const ForestPart *above = boundary > 0 ? &mLeg.segments[boundary - 1] : nullptr;
           const ForestPart *below = boundary < mLeg.segments.size() ? &mLeg.segments[boundary] : nullptr;
-          const bool useAbove =
-            above && above->known && !( below && below->known && below->elevation.from <= above->elevation.to );
-          if ( useAbove )
+          const bool canAbove = above && takesRegulator( *above );
+          const bool canBelow = below && takesRegulator( *below );
+          if ( canAbove && !( canBelow && below->elevation.from <= above->elevation.to ) )
             stations.push_back( { boundary, above->toM, above->elevation.to, above->zone, above->role } );
-          else if ( below && below->known )
+          else if ( canBelow )
             stations.push_back( { boundary, below->fromM, below->elevation.from, below->zone, below->role } );
         }
 
@@ -160,8 +162,7 @@ namespace stillhead
         void standAnywhere()
         {
           mLeg.onePlace = true;
-          const auto known = std::find_if(
-            mLeg.segments.begin(), mLeg.segments.end(), []( const ForestPart &part ) { return part.known; } );
+          const auto known = std::find_if( mLeg.segments.begin(), mLeg.segments.end(), takesRegulator );
           if ( known != mLeg.segments.end() )
             mLeg.stations.push_back( { static_cast<std::size_t>( known - mLeg.segments.begin() ),
               0.5 * ( known->fromM + known->toM ), known->elevation.at( 0.5 ), known->zone, known->role } );

@@ -161,9 +161,10 @@ namespace stillhead
             ForestPart piece = count == 1 ? part : part.between( shares[i], shares[i + 1] );
             const double middleM = 0.5 * ( piece.elevation.from + piece.elevation.to );
             piece.over = middleM < overBelow - SAME_LEVEL_M;
-            piece.mend = piece.over && !ownFault && middleM >= mendFromM - SAME_LEVEL_M;
+            // What no regulator can stand above (a millimetre beside pipe without elevation) is not judged.
+            piece.mend = piece.over && piece.canStand && !ownFault && middleM >= mendFromM - SAME_LEVEL_M;
             mAny = mAny || piece.mend;
-            if ( piece.over && !piece.mend )
+            if ( piece.over && !piece.mend && piece.canStand )
               excuse( piece, part.leaveOver ? Need() : ( ownFault ? own : behind ) );
             mMarked.forest.parts.push_back( piece );
           }

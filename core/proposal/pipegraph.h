@@ -25,6 +25,7 @@ namespace stillhead
       double boostHighM = 0.0; //!< what a given booster adds
       double boostLowM = 0.0;
       double inletNeedM = NO_LEVEL_M; //!< what it needs at its inlet
+      bool whole = false;             //!< looped pipe that must not be cut: a plan that did so failed
       bool cut = false;               //!< here a regulator must stand: `inlet`
       Inlet inlet;
   };

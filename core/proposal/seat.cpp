@@ -62,7 +62,7 @@ namespace stillhead
   bool Seat::isOpen( std::size_t segment ) const
   {
     const ForestPart &part = segmentAt( segment );
-    return part.known && distanceM( part.fromM ) >= mFromM - SAME_PLACE_M
+    return part.known && part.canStand && distanceM( part.fromM ) >= mFromM - SAME_PLACE_M
       && distanceM( part.toM ) <= mToM + SAME_PLACE_M;
   }
 

@@ -214,8 +214,14 @@ namespace
     return graph;
   }
 
+  struct Fault
+  {
+      std::string what; //!< blank: none
+      PlaceOnLine at;
+  };
+
   //! What is wrong after \a proposal: pipe over that is not excused, or served pipe that has become short.
-  std::string faultOf( const Net &net, const Proposal &proposal )
+  Fault firstFault( const Net &net, const Proposal &proposal )
   {
     std::vector<Valve> valves;
     for ( const ProposedRegulator &own : proposal.regulators )
@@ -238,14 +244,20 @@ namespace
           && own.alongM <= std::max( e.fromM, e.toM ) + STEP_M;
       } );
       const std::string where = " on pipe " + std::to_string( own.pipe ) + " at " + std::to_string( own.alongM );
+      const PlaceOnLine at { own.pipe, own.alongM };
       // Levels are exact, places to half a step.
       if ( own.highM > own.heightM + net.rules.mostM( Role::Mainline ) + 1e-6 && !excused )
-        return "over" + where;
+        return { "over" + where, at };
       const bool served = before->reached && before->lowM >= own.heightM + leastM + 1e-6;
       if ( served && ( !own.reached || own.lowM < own.heightM + leastM - 1e-6 ) )
-        return "short" + where;
+        return { "short" + where, at };
     }
     return {};
+  }
+
+  std::string faultOf( const Net &net, const Proposal &proposal )
+  {
+    return firstFault( net, proposal ).what;
   }
 
 } // namespace
@@ -408,6 +420,7 @@ void TestLoops::randomNetworks()
   const auto pickInt = [&]( int low, int high ) { return std::uniform_int_distribution<int>( low, high )( random ); };
   int looped = 0;
   int cut = 0;
+  int gaveWay = 0;
   for ( int i = 0; i < 800; ++i )
   {
     Net net;
@@ -428,10 +441,18 @@ void TestLoops::randomNetworks()
       join( pickInt( 0, node - 1 ), node );
     for ( int k = pickInt( 0, 3 ); k > 0; --k )
       join( pickInt( 0, net.nodes - 1 ), pickInt( 0, net.nodes - 1 ) );
-    const Proposal proposal = proposeOnGraph( graphOf( net ), net.rules );
-    const std::string fault = faultOf( net, proposal );
-    QVERIFY2(
-      fault.empty(), qPrintable( QStringLiteral( "net %1: %2" ).arg( i ).arg( QString::fromStdString( fault ) ) ) );
+    // As the job does: a plan that fails when it is tried gives way.
+    PipeGraph graph = graphOf( net );
+    Proposal proposal = proposeOnGraph( graph, net.rules );
+    Fault fault = firstFault( net, proposal );
+    gaveWay += fault.what.empty() ? 0 : 1;
+    while ( !fault.what.empty() && giveWay( graph, { fault.at } ) )
+    {
+      proposal = proposeOnGraph( graph, net.rules );
+      fault = firstFault( net, proposal );
+    }
+    QVERIFY2( fault.what.empty(),
+      qPrintable( QStringLiteral( "net %1: %2" ).arg( i ).arg( QString::fromStdString( fault.what ) ) ) );
     QVERIFY2( static_cast<int>( proposal.regulators.size() ) >= proposal.bound, qPrintable( QString::number( i ) ) );
     looped += static_cast<int>( net.pipes.size() ) >= net.nodes ? 1 : 0;
     cut += std::any_of( proposal.regulators.begin(), proposal.regulators.end(),
@@ -441,6 +462,7 @@ void TestLoops::randomNetworks()
   }
   QVERIFY( looped > 400 );
   QVERIFY( cut > 50 );
+  QVERIFY( gaveWay < 5 );
 }
 
 QTEST_GUILESS_MAIN( TestLoops )
