@@ -1,19 +1,26 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Keeps the style of a result with its data: a result in a GeoPackage carries it as the layer's default style, so that
-// it comes up styled wherever it is opened, also when the run was headless.
+// The style of a result as text, so that a file can carry it as the layer's default style and the result comes up styled
+// wherever it is opened, also when the run was headless.
 #pragma once
 
+#include "processing/qgiscompat.h"
 #include "processing/styles/resultstyle.h"
+
+#include <qgsfields.h>
 
 #include <QString>
 
 namespace stillhead
 {
 
-  /**
-   * Stores the style of the output beside the vector layer that \a source names, once the sink has been closed. Does
-   * nothing for formats that keep no styles. \returns an error text, empty when all is well
-   */
-  QString storeDefaultStyle( const QString &source, ResultLayer what, const ResultStyle &style );
+  //! A style in the platform's own format and in that of the open standard (Styled Layer Descriptor).
+  struct StyleText
+  {
+      QString qml;
+      QString sld;
+  };
+
+  //! The style of the output \a what with \a fields and geometries of \a type. Call it in the main thread: it makes symbols.
+  StyleText styleText( ResultLayer what, const QgsFields &fields, compat::WkbType type, const ResultStyle &style );
 
 } // namespace stillhead
