@@ -13,7 +13,7 @@
 namespace stillhead
 {
 
-  StyleText styleText( ResultLayer what, const QgsFields &fields, compat::WkbType type, const ResultStyle &style )
+  QString styleText( ResultLayer what, const QgsFields &fields, compat::WkbType type, const ResultStyle &style )
   {
     const std::unique_ptr<QgsVectorLayer> layer( QgsMemoryProviderUtils::createMemoryLayer(
       QStringLiteral( "result" ), fields, type, QgsCoordinateReferenceSystem() ) );
@@ -21,9 +21,7 @@ namespace stillhead
     QString error;
     QDomDocument qml;
     layer->exportNamedStyle( qml, error );
-    QDomDocument sld;
-    layer->exportSldStyle( sld, error );
-    return { qml.toString(), sld.toString() };
+    return qml.toString();
   }
 
 } // namespace stillhead

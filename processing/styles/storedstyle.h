@@ -13,14 +13,10 @@
 namespace stillhead
 {
 
-  //! A style in the platform's own format and in that of the open standard (Styled Layer Descriptor).
-  struct StyleText
-  {
-      QString qml;
-      QString sld;
-  };
-
-  //! The style of the output \a what with \a fields and geometries of \a type. Call it in the main thread: it makes symbols.
-  StyleText styleText( ResultLayer what, const QgsFields &fields, compat::WkbType type, const ResultStyle &style );
+  /**
+   * The style of the output \a what with \a fields and geometries of \a type, in the platform's own format. Call it in the main
+   * thread: it makes symbols.
+   */
+  QString styleText( ResultLayer what, const QgsFields &fields, compat::WkbType type, const ResultStyle &style );
 
 } // namespace stillhead

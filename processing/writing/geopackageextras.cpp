@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Rows are written by statement: opening every layer through the platform to style it costs more than a usual run.
+// The styles' second column, for Styled Layer Descriptors, stays blank: that format has none of the patterns that tell states
+// apart. Rows are written by statement: opening every layer through the platform to style it costs more than a usual run.
 // Source of the metadata tables: OGC GeoPackage Encoding Standard 1.2.1 (OGC 12-128r15), annex F.8 (Metadata).
 #include "processing/writing/geopackageextras.h"
 
@@ -84,9 +85,9 @@ namespace stillhead
           .arg( table ),
         QStringLiteral( "INSERT INTO layer_styles (f_table_catalog, f_table_schema, f_table_name, f_geometry_column, "
                         "styleName, styleQML, styleSLD, useAsDefault, description, owner) VALUES ('', '', " )
-          + table + QStringLiteral( ", 'geom', 'Stillhead', " ) + quoted( layer.style.qml ) + QStringLiteral( ", " )
-          + quoted( layer.style.sld ) + QStringLiteral( ", 1, " )
-          + quoted( Text::tr( "Made by the run that wrote the layer" ) ) + QStringLiteral( ", '')" ),
+          + table + QStringLiteral( ", 'geom', 'Stillhead', " ) + quoted( layer.styleQml )
+          + QStringLiteral( ", '', 1, " ) + quoted( Text::tr( "Made by the run that wrote the layer" ) )
+          + QStringLiteral( ", '')" ),
         QStringLiteral( "DELETE FROM gpkg_metadata WHERE id IN (%1)" ).arg( ownMetadata ),
         QStringLiteral( "DELETE FROM gpkg_metadata_reference WHERE lower(table_name) = lower(%1)" ).arg( table ),
         QStringLiteral( "INSERT INTO gpkg_metadata (md_scope, md_standard_uri, mime_type, metadata) VALUES "

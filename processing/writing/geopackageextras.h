@@ -3,8 +3,6 @@
 // metadata, by the standard's own extension.
 #pragma once
 
-#include "processing/styles/storedstyle.h"
-
 #include <qgslayermetadata.h>
 
 #include <QString>
@@ -17,7 +15,7 @@ namespace stillhead
   struct LayerExtras
   {
       QString table; //!< the layer's name in the file
-      StyleText style;
+      QString styleQml; //!< the default style, in the platform's own format
       QgsLayerMetadata metadata;
   };
 

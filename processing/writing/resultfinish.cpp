@@ -3,6 +3,7 @@
 #include "processing/writing/resultfinish.h"
 
 #include "processing/styles/resultstyler.h"
+#include "processing/styles/storedstyle.h"
 #include "processing/writing/geopackageextras.h"
 
 #include <qgsmaplayer.h>
