@@ -107,7 +107,9 @@ namespace stillhead
     layer.what = ResultLayer::BandAreas;
     layer.metadata =
       resultMetadata( facts(), mValues.definition( output::BAND_AREAS )->description(), layerNameOf( layer.id ) );
-    layer.inGeoPackage = outputs.isGeoPackage( output::BAND_AREAS );
+    layer.geoPackage = outputs.geoPackageOf( output::BAND_AREAS );
+    layer.fields = bandAreaFields();
+    layer.type = compat::WkbType::Polygon;
     finishOnLoading( layer, mStyle, mValues.context() );
     mWritten.push_back( layer );
     results.insert( output::BAND_AREAS, layer.id );

@@ -2,6 +2,7 @@
 // Nothing is created before the computation has succeeded and every format has been asked whether it can hold the result.
 #include "processing/staticpressurerun.h"
 
+#include "core/feedback/background.h"
 #include "core/geo/gdalcachelimit.h"
 #include "core/geo/geodesicmeasure.h"
 #include "core/geo/terraintransform.h"
@@ -31,8 +32,7 @@ namespace stillhead
     // How the progress bar is shared out.
     constexpr double READ_TO = 8.0;
     constexpr double SOLVE_TO = 65.0;
-    constexpr double OUTLINE_TO = 80.0;
-    constexpr double SURFACE_TO = 90.0;
+    constexpr double SURFACE_TO = 85.0;
     constexpr double WRITE_TO = 99.0;
 
     std::unique_ptr<PlanToTerrain> wayToTerrain( const QgsCoordinateReferenceSystem &lines,
@@ -48,6 +48,32 @@ namespace stillhead
     {
       const int choice = values.choice( parameter::LINE_Z_UNIT );
       return choice == 0 ? terrain.unit.metresPerUnit : metresPer( static_cast<ElevationUnit>( choice - 1 ) );
+    }
+
+    double rowShare( const ResultTable &table )
+    {
+      return static_cast<double>( table.rows ) + 1.0;
+    }
+
+    //! Drawing outlines takes about as long as writing everything; without stretches it is nothing.
+    double outlineShare( const std::vector<ResultTable> &tables )
+    {
+      double rows = 0.0;
+      bool asked = false;
+      for ( const ResultTable &table : tables )
+      {
+        rows += rowShare( table );
+        asked = asked || ( table.output == output::STRETCHES && table.rows > 0 );
+      }
+      return asked ? rows : 0.0;
+    }
+
+    double workIn( const std::vector<ResultTable> &tables )
+    {
+      double work = outlineShare( tables );
+      for ( const ResultTable &table : tables )
+        work += rowShare( table );
+      return work;
     }
 
   } // namespace
@@ -261,14 +287,26 @@ namespace stillhead
     QVariantMap results;
     const QString summary = summaryText( context, mSources.front().source );
     const RunFacts runFacts = facts( summary );
-    // The longest work first: a cancel then finds nothing replaced yet.
-    if ( outputs.isAsked( output::STRETCHES ) )
-    {
-      FeedbackMonitor monitor( &mFeedback, SOLVE_TO, OUTLINE_TO );
-      outlines = stretchOutlines( context, outlineDistanceM( mUnits.lengthUnit() ), monitor );
-    }
+    Background<std::vector<QgsGeometry>> outlineWork( [this, &context, &outputs]( Monitor &monitor ) {
+      return outputs.isAsked( output::STRETCHES )
+        ? stretchOutlines( context, outlineDistanceM( mUnits.lengthUnit() ), monitor )
+        : std::vector<QgsGeometry>();
+    } );
+    const auto takeOutlines = [&]( const ProgressShares::Share &share ) {
+      FeedbackMonitor monitor( &mFeedback, share.from, share.to );
+      outlines = outlineWork.take( monitor );
+    };
+    ProgressShares shares( outputs.isAsked( output::SURFACE ) ? SURFACE_TO : SOLVE_TO, WRITE_TO, workIn( tables ) );
     writeSurface( outputs, runFacts, results );
-    writeTables( outputs, tables, runFacts, results );
+    // Where something is replaced as it is written, all work comes first: a cancel then finds it untouched.
+    if ( outputs.replacesAtOnce() )
+      takeOutlines( shares.next( outlineShare( tables ) ) );
+    for ( const ResultTable &table : tables )
+    {
+      if ( table.output == output::STRETCHES && !outputs.replacesAtOnce() )
+        takeOutlines( shares.next( outlineShare( tables ) ) );
+      writeTable( outputs, table, runFacts, shares.next( rowShare( table ) ), results );
+    }
     outputs.commit();
     mFeedback.setProgress( 100.0 );
     results.insert( output::SUMMARY, summary );
@@ -286,7 +324,7 @@ namespace stillhead
     input.hasLow = mSources.front().source.low.has_value();
     if ( !QgsProcessingParameters::isDynamic( mValues.values(), parameter::COVER ) )
       input.coverM = mUnits.metres( mValues.number( parameter::COVER ) );
-    FeedbackMonitor monitor( &mFeedback, OUTLINE_TO, SURFACE_TO );
+    FeedbackMonitor monitor( &mFeedback, SOLVE_TO, SURFACE_TO );
     WrittenLayer written;
     written.id = QgsProcessingParameters::parameterAsOutputLayer(
       mValues.definition( output::SURFACE ), mValues.values(), mValues.context() );
@@ -300,28 +338,20 @@ namespace stillhead
     mWritten.push_back( written );
   }
 
-  void StaticPressureRun::writeTables(
-    OutputSet &outputs, const std::vector<ResultTable> &tables, const RunFacts &facts, QVariantMap &results )
+  void StaticPressureRun::writeTable( OutputSet &outputs, const ResultTable &table, const RunFacts &facts,
+    const ProgressShares::Share &share, QVariantMap &results )
   {
-    double from = outputs.isAsked( output::SURFACE ) ? SURFACE_TO : OUTLINE_TO;
-    double rows = 0.0;
-    for ( const ResultTable &table : tables )
-      rows += static_cast<double>( table.rows ) + 1.0;
-    const double percentPerRow = ( WRITE_TO - from ) / rows;
-    for ( const ResultTable &table : tables )
-    {
-      const double to = from + percentPerRow * ( static_cast<double>( table.rows ) + 1.0 );
-      WrittenLayer written;
-      written.id = outputs.write( table, mDrawn.crs, mFeedback, from, to );
-      written.what = table.what;
-      written.metadata =
-        resultMetadata( facts, mValues.definition( table.output )->description(), layerNameOf( written.id ) );
-      written.inGeoPackage = outputs.isGeoPackage( table.output );
-      finishOnLoading( written, mStyle, mValues.context() );
-      results.insert( table.output, written.id );
-      mWritten.push_back( written );
-      from = to;
-    }
+    WrittenLayer written;
+    written.id = outputs.write( table, mDrawn.crs, mFeedback, share.from, share.to );
+    written.what = table.what;
+    written.metadata =
+      resultMetadata( facts, mValues.definition( table.output )->description(), layerNameOf( written.id ) );
+    written.geoPackage = outputs.geoPackageOf( table.output );
+    written.fields = table.fields;
+    written.type = table.type;
+    finishOnLoading( written, mStyle, mValues.context() );
+    results.insert( table.output, written.id );
+    mWritten.push_back( written );
   }
 
   void StaticPressureRun::addNumbers( QVariantMap &results ) const

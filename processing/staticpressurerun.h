@@ -2,6 +2,7 @@
 // One run of the main job: from parameters to core's job, and from core's result to outputs.
 #pragma once
 
+#include "core/feedback/progressshares.h"
 #include "core/job/staticjob.h"
 #include "processing/displayunits.h"
 #include "processing/reading/devicelayer.h"
@@ -47,8 +48,8 @@ namespace stillhead
 
     private:
       void writeSurface( OutputSet &outputs, const RunFacts &facts, QVariantMap &results );
-      void writeTables(
-        OutputSet &outputs, const std::vector<ResultTable> &tables, const RunFacts &facts, QVariantMap &results );
+      void writeTable( OutputSet &outputs, const ResultTable &table, const RunFacts &facts,
+        const ProgressShares::Share &share, QVariantMap &results );
       void readFeeds( const QgsProcessingFeatureSource *sources, const QgsProcessingFeatureSource *devices );
       StaticJob job( const PlanToTerrain &planToTerrain ) const;
       RefusalNames refusalNames() const;

@@ -17,6 +17,16 @@ namespace stillhead
   {
     constexpr double NO_ELEVATION = std::numeric_limits<double>::quiet_NaN();
 
+    template <typename Value> constexpr Value none()
+    {
+      return std::numeric_limits<Value>::quiet_NaN();
+    }
+
+    std::size_t pixelsOf( const GdalBand::Window &window )
+    {
+      return static_cast<std::size_t>( window.columns ) * static_cast<std::size_t>( window.rows );
+    }
+
     // Handles of one mosaic opened in one thread share the handles of its tiles, unless told not to; ours wander
     // between threads.
     class UnsharedSources
@@ -102,6 +112,11 @@ namespace stillhead
     mIsPlain = mScale == 1.0 && mOffset == 0.0;
     const char *pixelType = GDALGetMetadataItem( mBand, "PIXELTYPE", "IMAGE_STRUCTURE" );
     mIsSignedByte = type == GDT_Byte && pixelType && std::strcmp( pixelType, "SIGNEDBYTE" ) == 0;
+    mIsFloats = mIsPlain && !mIsSignedByte
+      && ( type == GDT_Float32 || type == GDT_Int16 || type == GDT_UInt16 || type == GDT_Byte );
+    // Other types are converted, which only the cached way does.
+    if ( type == GDT_Float32 )
+      GDALGetBlockSize( mBand, &mBlockColumns, &mBlockRows );
 
     const int flags = GDALGetMaskFlags( mBand );
     if ( !( flags & GMF_ALL_VALID ) && flags != GMF_NODATA )
@@ -120,24 +135,73 @@ namespace stillhead
 
   void GdalBand::read( const Window &window, double *elevationsM )
   {
+    readCovered( window, elevationsM, [&]( const GdalErrors &errors ) {
+      readRaw( mBand, window, elevationsM, GDT_Float64, errors );
+      toElevations( elevationsM, pixelsOf( window ) );
+    } );
+  }
+
+  void GdalBand::readFloats( const Window &window, float *values )
+  {
+    readCovered( window, values, [&]( const GdalErrors &errors ) {
+      if ( isOneBlock( window ) )
+        readOneBlock( window, values, errors );
+      else
+        readRaw( mBand, window, values, GDT_Float32, errors );
+      toFloats( values, pixelsOf( window ) );
+    } );
+  }
+
+  bool GdalBand::isOneBlock( const Window &window ) const
+  {
+    if ( mBlockColumns == 0 || window.column % mBlockColumns != 0 || window.row % mBlockRows != 0 )
+      return false;
+    const int columns = std::min( mBlockColumns, GDALGetRasterBandXSize( mBand ) - window.column );
+    const int rows = std::min( mBlockRows, GDALGetRasterBandYSize( mBand ) - window.row );
+    return window.columns == columns && window.rows == rows;
+  }
+
+  //! Past the library's block cache: our own cache keeps the block, a second copy would only cost.
+  void GdalBand::readOneBlock( const Window &window, float *values, const GdalErrors &errors )
+  {
+    mBlock.resize( static_cast<std::size_t>( mBlockColumns ) * static_cast<std::size_t>( mBlockRows ) );
+    if ( GDALReadBlock( mBand, window.column / mBlockColumns, window.row / mBlockRows, mBlock.data() ) != CE_None )
+      throwUnreadable( window, errors );
+    for ( int row = 0; row < window.rows; ++row )
+      std::copy_n( mBlock.data() + static_cast<std::ptrdiff_t>( row ) * mBlockColumns, window.columns,
+        values + static_cast<std::ptrdiff_t>( row ) * window.columns );
+  }
+
+  template <typename Value, typename ReadValues>
+  void GdalBand::readCovered( const Window &window, Value *values, ReadValues readValues )
+  {
     const GdalErrors errors;
     const UnsharedSources unshared;
-    const std::size_t count = static_cast<std::size_t>( window.columns ) * static_cast<std::size_t>( window.rows );
     const Coverage coverage = mMayHaveHoles ? coverageOf( window ) : Coverage::Whole;
     // Asking opens the files of a mosaic: one that is missing shows here, and would pass for a gap.
     if ( coverage != Coverage::Whole && !errors.text().empty() )
       throwUnreadable( window, errors );
     if ( coverage == Coverage::None )
     {
-      std::fill_n( elevationsM, count, NO_ELEVATION );
+      std::fill_n( values, pixelsOf( window ), none<Value>() );
       return;
     }
-    readRaw( mBand, window, elevationsM, GDT_Float64, errors );
-    toElevations( elevationsM, count );
+    readValues( errors );
     if ( mMask )
-      leaveOutMasked( window, elevationsM, errors );
+      leaveOutMasked( window, values, errors );
     if ( coverage == Coverage::Part )
-      leaveOutUncovered( window, elevationsM, window.columns );
+      leaveOutUncovered( window, values, window.columns );
+  }
+
+  void GdalBand::toFloats( float *values, std::size_t count ) const
+  {
+    if ( mHasNodata )
+    {
+      for ( std::size_t i = 0; i < count; ++i )
+        values[i] = static_cast<double>( values[i] ) == mNodata ? none<float>() : values[i];
+    }
+    for ( std::size_t i = 0; i < count; ++i )
+      values[i] = std::abs( values[i] ) <= std::numeric_limits<float>::max() ? values[i] : none<float>();
   }
 
   void GdalBand::toElevations( double *values, std::size_t count ) const
@@ -167,14 +231,15 @@ namespace stillhead
       values[i] = std::abs( values[i] ) <= std::numeric_limits<double>::max() ? values[i] : NO_ELEVATION;
   }
 
-  void GdalBand::leaveOutMasked( const Window &window, double *elevationsM, const GdalErrors &errors )
+  template <typename Value>
+  void GdalBand::leaveOutMasked( const Window &window, Value *values, const GdalErrors &errors )
   {
     mMaskValues.resize( static_cast<std::size_t>( window.columns ) * static_cast<std::size_t>( window.rows ) );
     readRaw( mMask, window, mMaskValues.data(), GDT_Byte, errors );
     for ( std::size_t i = 0; i < mMaskValues.size(); ++i )
     {
       if ( mMaskValues[i] == 0 )
-        elevationsM[i] = NO_ELEVATION;
+        values[i] = none<Value>();
     }
   }
 
@@ -187,7 +252,7 @@ namespace stillhead
     return status & GDAL_DATA_COVERAGE_STATUS_DATA ? Coverage::Part : Coverage::None;
   }
 
-  void GdalBand::leaveOutUncovered( const Window &window, double *elevationsM, int stride )
+  template <typename Value> void GdalBand::leaveOutUncovered( const Window &window, Value *values, int stride )
   {
     const Coverage coverage = coverageOf( window );
     if ( coverage == Coverage::Whole )
@@ -195,7 +260,7 @@ namespace stillhead
     if ( coverage == Coverage::None || ( window.columns == 1 && window.rows == 1 ) )
     {
       for ( int row = 0; row < window.rows; ++row )
-        std::fill_n( elevationsM + static_cast<std::ptrdiff_t>( row ) * stride, window.columns, NO_ELEVATION );
+        std::fill_n( values + static_cast<std::ptrdiff_t>( row ) * stride, window.columns, none<Value>() );
       return;
     }
     // Covered in part: halve the longer side until the parts are plain.
@@ -213,9 +278,9 @@ namespace stillhead
       second.row += first.rows;
       second.rows -= first.rows;
     }
-    leaveOutUncovered( first, elevationsM, stride );
+    leaveOutUncovered( first, values, stride );
     leaveOutUncovered( second,
-      elevationsM + static_cast<std::ptrdiff_t>( second.row - window.row ) * stride + ( second.column - window.column ),
+      values + static_cast<std::ptrdiff_t>( second.row - window.row ) * stride + ( second.column - window.column ),
       stride );
   }
 

@@ -42,6 +42,12 @@ namespace stillhead
       //! As ElevationSource::read().
       void read( const Window &window, double *elevationsM );
 
+      //! True where the band's own values are 32-bit floats, or integers that such floats hold, with neither scale nor offset.
+      bool isFloats() const { return mIsFloats; }
+
+      //! As ElevationSource::readFloats(): the band's own values.
+      void readFloats( const Window &window, float *values );
+
     private:
       //! How much of a window the sources of a mosaic, or the blocks of a sparse file, cover.
       enum class Coverage
@@ -53,10 +59,17 @@ namespace stillhead
 
       void readRaw(
         GDALRasterBandH band, const Window &window, void *values, GDALDataType type, const GdalErrors &errors );
+      bool isOneBlock( const Window &window ) const;
+      void readOneBlock( const Window &window, float *values, const GdalErrors &errors );
       void toElevations( double *values, std::size_t count ) const;
-      void leaveOutMasked( const Window &window, double *elevationsM, const GdalErrors &errors );
+      void toFloats( float *values, std::size_t count ) const;
       Coverage coverageOf( const Window &window ) const;
-      void leaveOutUncovered( const Window &window, double *elevationsM, int stride );
+
+      //! Reads by \a readValues( errors ) what is covered and not masked; NaN elsewhere.
+      template <typename Value, typename ReadValues>
+      void readCovered( const Window &window, Value *values, ReadValues readValues );
+      template <typename Value> void leaveOutMasked( const Window &window, Value *values, const GdalErrors &errors );
+      template <typename Value> void leaveOutUncovered( const Window &window, Value *values, int stride );
 
       GdalDataset mDataset;
       GDALRasterBandH mBand = nullptr;
@@ -67,7 +80,11 @@ namespace stillhead
       double mOffset = 0.0;
       double mMetresPerUnit = 1.0;
       bool mIsSignedByte = false;
-      bool mIsPlain = true;       //!< Neither scale nor offset
+      bool mIsPlain = true; //!< Neither scale nor offset
+      bool mIsFloats = false;
+      int mBlockColumns = 0;
+      int mBlockRows = 0;
+      std::vector<float> mBlock;  //!< One block as it is stored; kept between reads
       bool mMayHaveHoles = false; //!< Nothing declared says where there is no value: ask what is covered
       std::vector<unsigned char> mMaskValues;
   };

@@ -192,7 +192,9 @@ namespace stillhead
     const char *unitText = GDALGetRasterUnitType( handle );
     mUnit = decideElevationUnit( unit, unitText ? unitText : "", mCrsDefinition );
     mPool = std::make_unique<Pool>( source, openOptions, band, mUnit.metresPerUnit );
-    mPool->giveBack( std::make_unique<GdalBand>( std::move( dataset ), band, mUnit.metresPerUnit ) );
+    auto first = std::make_unique<GdalBand>( std::move( dataset ), band, mUnit.metresPerUnit );
+    mMetresPerFloat = first->isFloats() ? mUnit.metresPerUnit : 0.0;
+    mPool->giveBack( std::move( first ) );
   }
 
   GdalTerrain::~GdalTerrain() = default;
@@ -202,6 +204,13 @@ namespace stillhead
     // A handle whose read failed is not given back: the next read starts afresh.
     std::unique_ptr<GdalBand> band = mPool->take();
     band->read( { column, row, columns, rows }, elevationsM );
+    mPool->giveBack( std::move( band ) );
+  }
+
+  void GdalTerrain::readFloats( int column, int row, int columns, int rows, float *values ) const
+  {
+    std::unique_ptr<GdalBand> band = mPool->take();
+    band->readFloats( { column, row, columns, rows }, values );
     mPool->giveBack( std::move( band ) );
   }
 

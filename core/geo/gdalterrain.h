@@ -66,6 +66,8 @@ namespace stillhead
       int blockColumns() const override { return mBlockColumns; }
       int blockRows() const override { return mBlockRows; }
       void read( int column, int row, int columns, int rows, double *elevationsM ) const override;
+      double metresPerFloat() const override { return mMetresPerFloat; }
+      void readFloats( int column, int row, int columns, int rows, float *values ) const override;
 
       //! The raster's CRS as WKT2, vertical part included; blank where it has none.
       const std::string &crsDefinition() const { return mCrsDefinition; }
@@ -84,6 +86,7 @@ namespace stillhead
       std::string mCrsDefinition;
       bool mHasCrs = false;
       ElevationUnitDecision mUnit;
+      double mMetresPerFloat = 0.0;
       std::unique_ptr<Pool> mPool;
   };
 

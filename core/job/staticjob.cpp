@@ -137,6 +137,12 @@ namespace stillhead
           return order;
         }
 
+        //! Neighbours in chunks large enough that threads seldom wait for the same tile, and enough of them to share out.
+        static std::size_t chunkOf( std::size_t lines, std::size_t threads )
+        {
+          return std::clamp<std::size_t>( lines / ( 16 * threads ), 1, 64 );
+        }
+
         void judgeLines()
         {
           const LineParts parts( mResult.network, mResult.drawing.lines.size() );
@@ -147,7 +153,7 @@ namespace stillhead
           std::vector<LineOutcome> outcomes( order.size() );
           std::vector<double> nodeElevationsM( mResult.network.nodes.size(), NO_ELEVATION );
           std::vector<std::unique_ptr<LineJudge>> judges( threadCount( mJob.threads ) );
-          parallelRanges( order.size(), 8, mJob.threads, mMonitor, 0.14, 0.9,
+          parallelRanges( order.size(), chunkOf( order.size(), judges.size() ), mJob.threads, mMonitor, 0.14, 0.9,
             [&]( std::size_t first, std::size_t last, unsigned worker ) {
               if ( !judges[worker] )
                 judges[worker] = std::make_unique<LineJudge>(

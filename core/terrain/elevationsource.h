@@ -5,6 +5,8 @@
 
 #include "core/terrain/rastergrid.h"
 
+#include <stdexcept>
+
 namespace stillhead
 {
 
@@ -29,6 +31,20 @@ namespace stillhead
        * \throws std::runtime_error with a sentence that says what could not be read
        */
       virtual void read( int column, int row, int columns, int rows, double *elevationsM ) const = 0;
+
+      /**
+       * Where every elevation is, to the bit, a 32-bit float times one factor: that factor in metres, and readFloats() gives the
+       * floats, which take half the memory. 0 where it is not so.
+       */
+      virtual double metresPerFloat() const { return 0.0; }
+
+      //! As read(), in 32-bit floats; called only where metresPerFloat() is not 0.
+      virtual void readFloats( int column, int row, int columns, int rows, float *values ) const;
   };
+
+  inline void ElevationSource::readFloats( int, int, int, int, float * ) const
+  {
+    throw std::logic_error( "This terrain offers no 32-bit floats." );
+  }
 
 } // namespace stillhead

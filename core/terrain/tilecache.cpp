@@ -100,7 +100,7 @@ namespace stillhead
       slot.loading = {};
       mLoadedByUse.push_front( key );
       slot.use = mLoadedByUse.begin();
-      mHeldBytes += tile->elevationsM.size() * sizeof( double );
+      mHeldBytes += tile->bytes();
       makeRoom();
     }
     promise.set_value( tile );
@@ -114,8 +114,18 @@ namespace stillhead
     tile->row = static_cast<int>( key / mTilesAcross ) * mShape.rows;
     tile->columns = std::min( mShape.columns, grid().columns() - tile->column );
     tile->rows = std::min( mShape.rows, grid().rows() - tile->row );
-    tile->elevationsM.resize( static_cast<std::size_t>( tile->columns ) * static_cast<std::size_t>( tile->rows ) );
-    mSource.read( tile->column, tile->row, tile->columns, tile->rows, tile->elevationsM.data() );
+    // Plain new leaves the memory as it is: reading fills it.
+    tile->metresPerFloat = mSource.metresPerFloat();
+    if ( tile->metresPerFloat != 0.0 )
+    {
+      tile->floats.reset( new float[tile->pixels()] );
+      mSource.readFloats( tile->column, tile->row, tile->columns, tile->rows, tile->floats.get() );
+    }
+    else
+    {
+      tile->elevationsM.reset( new double[tile->pixels()] );
+      mSource.read( tile->column, tile->row, tile->columns, tile->rows, tile->elevationsM.get() );
+    }
     return tile;
   }
 
@@ -124,7 +134,7 @@ namespace stillhead
     while ( mHeldBytes > mBudgetBytes && mLoadedByUse.size() > 1 )
     {
       const auto oldest = mSlots.find( mLoadedByUse.back() );
-      mHeldBytes -= oldest->second.tile->elevationsM.size() * sizeof( double );
+      mHeldBytes -= oldest->second.tile->bytes();
       mSlots.erase( oldest );
       mLoadedByUse.pop_back();
     }

@@ -11,25 +11,29 @@
 #include <memory>
 #include <mutex>
 #include <unordered_map>
-#include <vector>
 
 namespace stillhead
 {
 
-  //! A rectangle of elevations in metres, NaN where there is none.
+  //! A rectangle of elevations in metres, NaN where there is none. Kept as 32-bit floats where these say the same.
   struct ElevationTile
   {
       int column = 0;
       int row = 0;
       int columns = 0;
       int rows = 0;
-      std::vector<double> elevationsM;
+      std::unique_ptr<float[]> floats; //!< times metresPerFloat; null where `elevationsM` holds the values
+      double metresPerFloat = 0.0;
+      std::unique_ptr<double[]> elevationsM;
 
+      std::size_t pixels() const { return static_cast<std::size_t>( columns ) * static_cast<std::size_t>( rows ); }
+      std::size_t bytes() const { return pixels() * ( floats ? sizeof( float ) : sizeof( double ) ); }
       bool holds( int c, int r ) const { return c >= column && c < column + columns && r >= row && r < row + rows; }
       double at( int c, int r ) const
       {
-        return elevationsM[static_cast<std::size_t>( r - row ) * static_cast<std::size_t>( columns )
-          + static_cast<std::size_t>( c - column )];
+        const std::size_t index = static_cast<std::size_t>( r - row ) * static_cast<std::size_t>( columns )
+          + static_cast<std::size_t>( c - column );
+        return floats ? static_cast<double>( floats[index] ) * metresPerFloat : elevationsM[index];
       }
   };
 
@@ -57,7 +61,7 @@ namespace stillhead
   class TileCache
   {
     public:
-      static constexpr std::size_t DEFAULT_BUDGET_BYTES = 96u << 20;
+      static constexpr std::size_t DEFAULT_BUDGET_BYTES = 64u << 20;
 
       explicit TileCache( const ElevationSource &source, std::size_t budgetBytes = DEFAULT_BUDGET_BYTES );
       TileCache( const TileCache & ) = delete;

@@ -1,52 +1,27 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Opens the written layer, styles it and saves it under our own name. A style of that name is removed first: QGIS would
-// ask before it replaces one, and a run has nobody to ask.
+// A layer in memory with the same fields is styled and asked for its style; opening the written one would cost far more.
 #include "processing/styles/storedstyle.h"
 
-#include "processing/text/text.h"
-
+#include <qgscoordinatereferencesystem.h>
+#include <qgsmemoryproviderutils.h>
 #include <qgsvectorlayer.h>
+
+#include <QDomDocument>
+
+#include <memory>
 
 namespace stillhead
 {
 
-  namespace
+  QString styleText( ResultLayer what, const QgsFields &fields, compat::WkbType type, const ResultStyle &style )
   {
-
-    QString styleName()
-    {
-      return QStringLiteral( "Stillhead" );
-    }
-
-    void removeOwnStyles( QgsVectorLayer &layer )
-    {
-      QStringList ids;
-      QStringList names;
-      QStringList descriptions;
-      QString error;
-      const int own = layer.listStylesInDatabase( ids, names, descriptions, error );
-      for ( int index = 0; index < own; ++index )
-      {
-        if ( names.at( index ) == styleName() )
-          layer.deleteStyleFromDatabase( ids.at( index ), error );
-      }
-    }
-
-  } // namespace
-
-  QString storeDefaultStyle( const QString &source, ResultLayer what, const ResultStyle &style )
-  {
-    if ( !source.contains( QLatin1String( ".gpkg" ), Qt::CaseInsensitive ) )
-      return QString();
-    QgsVectorLayer layer( source, QStringLiteral( "result" ), QStringLiteral( "ogr" ) );
-    if ( !layer.isValid() )
-      return Text::tr( "The style of %1 could not be stored: the layer does not open." ).arg( source );
-    styleResult( layer, what, style );
-    removeOwnStyles( layer );
+    const std::unique_ptr<QgsVectorLayer> layer( QgsMemoryProviderUtils::createMemoryLayer(
+      QStringLiteral( "result" ), fields, type, QgsCoordinateReferenceSystem() ) );
+    styleResult( *layer, what, style );
     QString error;
-    layer.saveStyleToDatabase(
-      styleName(), Text::tr( "Made by the run that wrote the layer" ), true, QString(), error );
-    return error;
+    QDomDocument qml;
+    layer->exportNamedStyle( qml, error );
+    return qml.toString();
   }
 
 } // namespace stillhead

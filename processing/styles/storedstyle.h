@@ -1,9 +1,12 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Keeps the style of a result with its data: a result in a GeoPackage carries it as the layer's default style, so that
-// it comes up styled wherever it is opened, also when the run was headless.
+// The style of a result as text, so that a file can carry it as the layer's default style and the result comes up styled
+// wherever it is opened, also when the run was headless.
 #pragma once
 
+#include "processing/qgiscompat.h"
 #include "processing/styles/resultstyle.h"
+
+#include <qgsfields.h>
 
 #include <QString>
 
@@ -11,9 +14,9 @@ namespace stillhead
 {
 
   /**
-   * Stores the style of the output beside the vector layer that \a source names, once the sink has been closed. Does
-   * nothing for formats that keep no styles. \returns an error text, empty when all is well
+   * The style of the output \a what with \a fields and geometries of \a type, in the platform's own format. Call it in the main
+   * thread: it makes symbols.
    */
-  QString storeDefaultStyle( const QString &source, ResultLayer what, const ResultStyle &style );
+  QString styleText( ResultLayer what, const QgsFields &fields, compat::WkbType type, const ResultStyle &style );
 
 } // namespace stillhead

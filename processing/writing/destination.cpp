@@ -38,6 +38,13 @@ namespace stillhead
       return value.toString();
     }
 
+    bool isRemapped( const ParameterValues &values, const QString &name )
+    {
+      const QVariant value = values.values().value( name );
+      return value.canConvert<QgsProcessingOutputLayerDefinition>()
+        && value.value<QgsProcessingOutputLayerDefinition>().useRemapping();
+    }
+
     //! True where the file \a path holds the layer \a table already.
     bool holdsTable( const QString &path, const QString &table )
     {
@@ -84,6 +91,7 @@ namespace stillhead
   {
     const QString text = destinationText( values, name );
     mIsAsked = !text.isEmpty();
+    mIsRemapped = isRemapped( values, name );
     mIsMemory = text == QgsProcessing::TEMPORARY_OUTPUT || text.startsWith( QLatin1String( "memory:" ) );
     if ( !mIsAsked || mIsMemory )
       return;
@@ -93,7 +101,7 @@ namespace stillhead
       mPath = uri.database();
       mTable = uri.table();
       mFileWasThere = QFileInfo::exists( mPath );
-      mReplaces = mFileWasThere && holdsTable( mPath, mTable );
+      mReplaces = mFileWasThere && !isOwnGeoPackage() && holdsTable( mPath, mTable );
     }
     else if ( QgsProviderRegistry::instance()->providerMetadata( text.section( ':', 0, 0 ) ) )
     {
@@ -104,7 +112,7 @@ namespace stillhead
     {
       mPath = text;
       mFileWasThere = QFileInfo::exists( mPath );
-      mReplaces = mFileWasThere;
+      mReplaces = mFileWasThere && !isOwnGeoPackage();
     }
   }
 
@@ -167,21 +175,6 @@ namespace stillhead
       throw QgsProcessingException( Text::tr(
         "%1 and %2 would both be written to %3, one over the other; give each a file or a layer name of its own." )
                                       .arg( mName, other.mName, mPath ) );
-  }
-
-  bool Destination::holdsRows( std::size_t rows ) const
-  {
-    if ( !isGeoPackage() )
-      return true;
-    const GDALDatasetH file =
-      GDALOpenEx( mPath.toUtf8().constData(), GDAL_OF_VECTOR | GDAL_OF_READONLY, nullptr, nullptr, nullptr );
-    if ( !file )
-      return false;
-    const OGRLayerH layer = mTable.isEmpty() ? GDALDatasetGetLayer( file, 0 )
-                                             : GDALDatasetGetLayerByName( file, mTable.toUtf8().constData() );
-    const bool holds = layer && OGR_L_GetFeatureCount( layer, TRUE ) == static_cast<GIntBig>( rows );
-    GDALClose( file );
-    return holds;
   }
 
   void Destination::remove() const

@@ -24,10 +24,16 @@ namespace stillhead
 
       bool isGeoPackage() const;
 
+      //! The layer in the file; blank where the output is the file itself.
+      const QString &table() const { return mTable; }
+
+      //! True where the output is a GeoPackage, or a layer of one, that nobody wants appended to: then we write it ourselves.
+      bool isOwnGeoPackage() const { return isGeoPackage() && !mIsRemapped; }
+
       //! True where the format can hold Z and M that are no numbers.
       bool holdsGaps() const;
 
-      //! True where the output would take the place of something, or may.
+      //! True where the output would take the place of something, or may, before the run is through.
       bool replaces() const { return mReplaces; }
 
       /**
@@ -41,18 +47,16 @@ namespace stillhead
       //! \throws QgsProcessingException where this output and \a other would be written over each other
       void refuseSamePlace( const Destination &other ) const;
 
-      //! False where a GeoPackage does not hold \a rows after they were written: errors on closing show nowhere else.
-      bool holdsRows( std::size_t rows ) const;
-
       //! Takes away what a failed run has left where nothing was before.
       void remove() const;
 
     private:
       QString mName;
       QString mPath;
-      QString mTable; //!< in the file, blank where the output is the file itself
+      QString mTable;
       bool mIsAsked = false;
       bool mIsMemory = false;
+      bool mIsRemapped = false; //!< rows are to go into the fields of a layer that is there
       bool mFileWasThere = false;
       bool mReplaces = false;
   };

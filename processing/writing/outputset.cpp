@@ -5,9 +5,14 @@
 #include "core/feedback/parallel.h"
 #include "processing/feedbackmonitor.h"
 #include "processing/text/text.h"
+#include "processing/writing/resultfinish.h"
 
 #include <qgsexception.h>
 #include <qgsfeaturesink.h>
+#include <qgsprocessingutils.h>
+
+#include <QDir>
+#include <QFileInfo>
 
 #include <algorithm>
 #include <future>
@@ -35,14 +40,14 @@ namespace stillhead
       return list;
     }
 
-    [[noreturn]] void refuseWrite( const QString &output, const QString &destination )
+    [[noreturn]] void refuseWrite( const QString &output, const QString &destination, const QString &reason = {} )
     {
       throw QgsProcessingException(
-        Text::tr( "%1 could not be written to %2; check that the place has room and that nobody else holds it open." )
-          .arg( output, destination ) );
+        Text::tr( "%1 could not be written to %2%3; check that the place has room and that nobody else holds it open." )
+          .arg( output, destination, reason.isEmpty() ? QString() : QStringLiteral( " (%1)" ).arg( reason ) ) );
     }
 
-    void writeRows( const ResultTable &table, QgsFeatureSink &sink, const QString &destination, Monitor &monitor )
+    void writeRows( const ResultTable &table, const std::function<void( QgsFeatureList & )> &add, Monitor &monitor )
     {
       if ( table.rows == 0 )
         return;
@@ -70,14 +75,62 @@ namespace stillhead
         const std::size_t done = first + BATCH_ROWS;
         if ( done < table.rows )
           next = makeLater( done );
-        if ( !sink.addFeatures( batch, QgsFeatureSink::FastInsert ) )
-          refuseWrite( table.output, destination );
+        add( batch );
         monitor.progress( std::min( 1.0, static_cast<double>( done ) / static_cast<double>( table.rows ) ) );
         stopIfCancelled( monitor );
       }
     }
 
   } // namespace
+
+  //! Where the rows of one output go: our own file, or a sink of the platform's.
+  class OutputSet::Rows
+  {
+    public:
+      Rows( OutputSet &set, const QString &output, const QgsFields &fields, compat::WkbType type,
+        const QgsCoordinateReferenceSystem &crs )
+        : mOutput( output )
+      {
+        const Destination &destination = set.mDestinations.at( output );
+        if ( destination.isOwnGeoPackage() )
+        {
+          mFile = &set.fileFor( destination );
+          mId = set.idOf( output );
+          if ( !mFile->beginLayer( layerNameOf( mId ), fields, type, crs ) )
+            refuseWrite( output, destination.path(), mFile->reason() );
+          set.loadOnCompletion( output, mId );
+          return;
+        }
+        set.mWritten.push_back( output );
+        mSink.reset( QgsProcessingParameters::parameterAsSink(
+          set.mValues.definition( output ), set.mValues.values(), fields, type, crs, set.mValues.context(), mId ) );
+        if ( !mSink )
+          refuseWrite( output, destination.path() );
+      }
+
+      void add( QgsFeatureList &rows )
+      {
+        if ( mFile && !mFile->add( rows ) )
+          refuseWrite( mOutput, mId, mFile->reason() );
+        if ( mSink && !mSink->addFeatures( rows, QgsFeatureSink::FastInsert ) )
+          refuseWrite( mOutput, mId );
+      }
+
+      //! The id of the layer, once all its rows are there.
+      QString finished()
+      {
+        if ( mSink && !mSink->flushBuffer() )
+          refuseWrite( mOutput, mId );
+        mSink.reset();
+        return mId;
+      }
+
+    private:
+      QString mOutput;
+      QString mId;
+      GeoPackageFile *mFile = nullptr;
+      std::unique_ptr<QgsFeatureSink> mSink;
+  };
 
   OutputSet::OutputSet( const ParameterValues &values, const QStringList &names )
     : mValues( values )
@@ -141,43 +194,78 @@ namespace stillhead
     Monitor &monitor = mReplaces ? static_cast<Monitor &>( unstoppable ) : stoppable;
 
     stopIfCancelled( monitor );
-    QString destination;
-    mWritten.push_back( table.output );
-    std::unique_ptr<QgsFeatureSink> sink( QgsProcessingParameters::parameterAsSink( mValues.definition( table.output ),
-      mValues.values(), table.fields, table.type, crs, mValues.context(), destination ) );
-    if ( !sink )
-      refuseWrite( table.output, mDestinations.at( table.output ).path() );
-    writeRows( table, *sink, destination, monitor );
-    const bool flushed = sink->flushBuffer();
-    sink.reset();
-    if ( !flushed || !mDestinations.at( table.output ).holdsRows( table.rows ) )
-      refuseWrite( table.output, destination );
-    return destination;
+    Rows rows( *this, table.output, table.fields, table.type, crs );
+    writeRows(
+      table, [&rows]( QgsFeatureList &batch ) { rows.add( batch ); }, monitor );
+    return rows.finished();
   }
 
   QString OutputSet::writeSpool( const QString &output, const QgsFields &fields, compat::WkbType type,
     const QgsCoordinateReferenceSystem &crs, RowSpool &spool, Monitor &monitor )
   {
     stopIfCancelled( monitor );
-    QString destination;
-    mWritten.push_back( output );
-    std::unique_ptr<QgsFeatureSink> sink( QgsProcessingParameters::parameterAsSink(
-      mValues.definition( output ), mValues.values(), fields, type, crs, mValues.context(), destination ) );
-    if ( !sink )
-      refuseWrite( output, mDestinations.at( output ).path() );
+    Rows rows( *this, output, fields, type, crs );
     spool.rewind();
     for ( QgsFeatureList batch = spool.take( SPOOL_ROWS ); !batch.isEmpty(); batch = spool.take( SPOOL_ROWS ) )
     {
-      if ( !sink->addFeatures( batch, QgsFeatureSink::FastInsert ) )
-        refuseWrite( output, destination );
+      rows.add( batch );
       if ( !mReplaces )
         stopIfCancelled( monitor );
     }
-    const bool flushed = sink->flushBuffer();
-    sink.reset();
-    if ( !flushed || !mDestinations.at( output ).holdsRows( spool.rows() ) )
-      refuseWrite( output, destination );
-    return destination;
+    return rows.finished();
+  }
+
+  GeoPackageFile &OutputSet::fileFor( const Destination &destination )
+  {
+    const QString path = QDir::cleanPath( QFileInfo( destination.path() ).absoluteFilePath() );
+    std::unique_ptr<GeoPackageFile> &file = mFiles[path];
+    if ( !file )
+      file = std::make_unique<GeoPackageFile>( path, destination.table().isEmpty() );
+    return *file;
+  }
+
+  QString OutputSet::geoPackageOf( const QString &name ) const
+  {
+    const Destination &destination = mDestinations.at( name );
+    return destination.isOwnGeoPackage() ? destination.path() : QString();
+  }
+
+  QString OutputSet::idOf( const QString &name ) const
+  {
+    const Destination &destination = mDestinations.at( name );
+    return destination.table().isEmpty()
+      ? destination.path()
+      : QStringLiteral( "%1|layername=%2" ).arg( destination.path(), destination.table() );
+  }
+
+  //! What the platform does for the sinks that it makes itself.
+  void OutputSet::loadOnCompletion( const QString &name, const QString &id ) const
+  {
+    const QVariant value = mValues.values().value( name );
+    if ( !value.canConvert<QgsProcessingOutputLayerDefinition>() )
+      return;
+    const auto definition = value.value<QgsProcessingOutputLayerDefinition>();
+    if ( !definition.destinationProject )
+      return;
+    const QString title =
+      definition.destinationName.isEmpty() ? mValues.definition( name )->description() : definition.destinationName;
+    mValues.context().addLayerToLoadOnCompletion( id,
+      QgsProcessingContext::LayerDetails(
+        title, definition.destinationProject, name, QgsProcessingUtils::LayerHint::Vector ) );
+  }
+
+  void OutputSet::commit()
+  {
+    for ( const auto &[path, file] : mFiles )
+    {
+      if ( !file->commit() )
+        throw QgsProcessingException(
+          Text::tr( "%1 could not be completed%2; check that the place has room and that "
+                    "nobody else holds it open." )
+            .arg( path, file->reason().isEmpty() ? QString() : QStringLiteral( " (%1)" ).arg( file->reason() ) ) );
+    }
+    mFiles.clear();
+    mWritten.clear();
   }
 
 } // namespace stillhead

@@ -4,8 +4,8 @@
 
 #include "processing/styles/resultstyler.h"
 #include "processing/styles/storedstyle.h"
+#include "processing/writing/geopackageextras.h"
 
-#include <qgsexception.h>
 #include <qgsmaplayer.h>
 #include <qgsprocessingutils.h>
 #include <qgsproviderregistry.h>
@@ -13,6 +13,8 @@
 
 #include <QDir>
 #include <QFileInfo>
+
+#include <map>
 
 namespace stillhead
 {
@@ -40,25 +42,6 @@ namespace stillhead
       private:
         QgsLayerMetadata mMetadata;
     };
-
-    //! An error text, blank where all is well.
-    QString storeMetadata( const WrittenLayer &written )
-    {
-      // Without its name the layer is not found, and nothing is said.
-      const QString uri = written.id.contains( QLatin1String( "|layername=" ) )
-        ? written.id
-        : QStringLiteral( "%1|layername=%2" ).arg( written.id, layerNameOf( written.id ) );
-      QString error;
-      try
-      {
-        QgsProviderRegistry::instance()->saveLayerMetadata( QStringLiteral( "ogr" ), uri, written.metadata, error );
-      }
-      catch ( const QgsException &e )
-      {
-        error = e.what();
-      }
-      return error;
-    }
 
     //! A raster keeps style and metadata in files beside it, which the application reads by itself.
     void storeBeside( const WrittenLayer &written, const ResultStyle &style )
@@ -93,18 +76,21 @@ namespace stillhead
   void finishNow( const std::vector<WrittenLayer> &layers, const ResultStyle &style, QgsProcessingContext &context,
     QgsProcessingFeedback &feedback )
   {
+    std::map<QString, std::vector<LayerExtras>> extras;
     for ( const WrittenLayer &written : layers )
     {
-      if ( written.inGeoPackage )
-      {
-        // Metadata first: the session keeps what it saw when a file was opened, and styling opens it.
-        for ( const QString &error :
-          { storeMetadata( written ), storeDefaultStyle( written.id, written.what, style ) } )
-        {
-          if ( !error.isEmpty() )
-            feedback.pushWarning( error );
-        }
-      }
+      if ( !written.geoPackage.isEmpty() )
+        extras[written.geoPackage].push_back( { layerNameOf( written.id ),
+          styleText( written.what, written.fields, written.type, style ), written.metadata } );
+    }
+    for ( const auto &[path, ofLayers] : extras )
+    {
+      const QString error = storeExtras( path, ofLayers );
+      if ( !error.isEmpty() )
+        feedback.pushWarning( error );
+    }
+    for ( const WrittenLayer &written : layers )
+    {
       if ( written.what == ResultLayer::Surface )
         storeBeside( written, style );
       if ( QgsMapLayer *layer = QgsProcessingUtils::mapLayerFromString( written.id, context, false ) )

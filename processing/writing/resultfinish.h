@@ -3,8 +3,10 @@
 // memory, and in whatever layer the application loads at the end.
 #pragma once
 
+#include "processing/qgiscompat.h"
 #include "processing/styles/resultstyle.h"
 
+#include <qgsfields.h>
 #include <qgslayermetadata.h>
 #include <qgsprocessingcontext.h>
 #include <qgsprocessingfeedback.h>
@@ -20,7 +22,9 @@ namespace stillhead
       QString id; //!< as results name it
       ResultLayer what = ResultLayer::Spans;
       QgsLayerMetadata metadata;
-      bool inGeoPackage = false; //!< which keeps style and metadata
+      QString geoPackage; //!< the file, which keeps style and metadata; blank where the layer is elsewhere
+      QgsFields fields;
+      compat::WkbType type = compat::WkbType::NoGeometry;
   };
 
   //! The name by which a file knows the layer \a id; a GeoPackage wants its layers' identifiers to differ.
