@@ -10,6 +10,7 @@ namespace stillhead::algorithm
 {
   inline const QString STATIC_PRESSURE = QStringLiteral( "staticpressure" );
   inline const QString PRESSURE_SURFACE = QStringLiteral( "pressuresurface" );
+  inline const QString PROPOSE_REGULATORS = QStringLiteral( "proposeregulators" );
 } // namespace stillhead::algorithm
 
 namespace stillhead::parameter
@@ -32,6 +33,9 @@ namespace stillhead::parameter
   inline const QString DEVICES = QStringLiteral( "DEVICES" );
   inline const QString LOCKUP_RISE = QStringLiteral( "LOCKUP_RISE" );
   inline const QString FAILED_OPEN = QStringLiteral( "FAILED_OPEN" );
+  inline const QString LEAST_DROP = QStringLiteral( "LEAST_DROP" );
+  inline const QString MOST_RATIO = QStringLiteral( "MOST_RATIO" );
+  inline const QString SETTING_STEP = QStringLiteral( "SETTING_STEP" );
   inline const QString SOURCE_NOTE = QStringLiteral( "SOURCE_NOTE" );
   inline const QString COVER = QStringLiteral( "COVER" );
   inline const QString USE_LINE_Z = QStringLiteral( "USE_LINE_Z" );
@@ -61,6 +65,11 @@ namespace stillhead::output
   inline const QString FINDINGS = QStringLiteral( "FINDINGS" );
   inline const QString SURFACE = QStringLiteral( "SURFACE" );
   inline const QString SCHEDULE = QStringLiteral( "SCHEDULE" );
+  inline const QString REGULATORS = QStringLiteral( "REGULATORS" );
+  inline const QString REGULATOR_COUNT = QStringLiteral( "REGULATOR_COUNT" );
+  inline const QString REGULATOR_BOUND = QStringLiteral( "REGULATOR_BOUND" );
+  inline const QString PROVEN = QStringLiteral( "PROVEN" );
+  inline const QString LENGTH_NOT_MENDED = QStringLiteral( "LENGTH_NOT_MENDED" );
   inline const QString BAND_AREAS = QStringLiteral( "BAND_AREAS" );
   inline const QString SUMMARY = QStringLiteral( "SUMMARY" );
   inline const QString SPAN_COUNT = QStringLiteral( "SPAN_COUNT" );
@@ -118,6 +127,20 @@ namespace stillhead::field
   inline const QString SET = QStringLiteral( "set" );
   inline const QString RISE = QStringLiteral( "rise" );
   inline const QString DIRECTION = QStringLiteral( "direction" );
+  inline const QString STAGE = QStringLiteral( "stage" );
+  inline const QString GROUND = QStringLiteral( "ground" );
+  inline const QString INLET_LOW = QStringLiteral( "inlet_low" );
+  inline const QString INLET_HIGH = QStringLiteral( "inlet_high" );
+  inline const QString DIFFERENTIAL = QStringLiteral( "differential" );
+  inline const QString RATIO = QStringLiteral( "ratio" );
+  inline const QString SET_LEAST = QStringLiteral( "set_least" );
+  inline const QString SET_MOST = QStringLiteral( "set_most" );
+  inline const QString LOCKUP = QStringLiteral( "lockup" );
+  inline const QString SERVES_UP_TO = QStringLiteral( "serves_up_to" );
+  inline const QString HOLDS_DOWN_TO = QStringLiteral( "holds_down_to" );
+  inline const QString PLACE_FROM = QStringLiteral( "place_from" );
+  inline const QString PLACE_TO = QStringLiteral( "place_to" );
+  inline const QString WHY = QStringLiteral( "why" );
   inline const QString NODE = QStringLiteral( "node" );
   inline const QString KIND = QStringLiteral( "kind" );
   inline const QString DEGREE = QStringLiteral( "degree" );

@@ -4,6 +4,7 @@
 
 #include "core/version.h"
 #include "processing/pressuresurfacealgorithm.h"
+#include "processing/proposeregulatorsalgorithm.h"
 #include "processing/staticpressurealgorithm.h"
 
 #include <qgsprocessingalgorithm.h>
@@ -19,7 +20,7 @@ namespace stillhead
     //! Every algorithm of the provider, in the order in which the toolbox shows them.
     QList<QgsProcessingAlgorithm *> algorithmList()
     {
-      return { new StaticPressureAlgorithm(), new PressureSurfaceAlgorithm() };
+      return { new StaticPressureAlgorithm(), new PressureSurfaceAlgorithm(), new ProposeRegulatorsAlgorithm() };
     }
 
   } // namespace

@@ -155,6 +155,21 @@ namespace stillhead
     return list;
   }
 
+  ParameterList proposalParameters()
+  {
+    ParameterList list;
+    add( list, optionalNumber( parameter::LEAST_DROP, Text::tr( "Least drop over a regulator" ) ),
+      Text::tr(
+        "How far the low-case pressure at a regulator's inlet must stand above its setting, so that it holds: see its "
+        "maker's sheet. In the pressure unit. Unset: 10 psi, 70 kPa, 0.7 bar, 7 m or 25 ft of water." ) );
+    add( list, number( parameter::MOST_RATIO, Text::tr( "Largest ratio of inlet to setting" ), 3.0 ),
+      Text::tr( "Of gauge pressures, high case: a larger reduction wears a valve out and is split between two. "
+                "0: no limit. Default: 3." ) );
+    add( list, number( parameter::SETTING_STEP, Text::tr( "Settings are multiples of" ), 0.0 ),
+      Text::tr( "In the pressure unit; 5 gives settings such as 35 and 40. Default: 0, any setting." ) );
+    return list;
+  }
+
   ParameterList failedOpenParameter()
   {
     ParameterList list;

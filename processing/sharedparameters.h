@@ -29,6 +29,9 @@ namespace stillhead
   //! LOCKUP_RISE.
   ParameterList lockupParameter();
 
+  //! LEAST_DROP, MOST_RATIO and SETTING_STEP.
+  ParameterList proposalParameters();
+
   //! FAILED_OPEN.
   ParameterList failedOpenParameter();
 

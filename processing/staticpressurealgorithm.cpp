@@ -1,6 +1,5 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Layers are asked in the main thread for what only they know (keys, the terrain's provider); the work itself touches
-// neither project nor session.
+// Names, texts, parameters and outputs of the main job.
 #include "processing/staticpressurealgorithm.h"
 
 #include "processing/parameternames.h"
@@ -9,23 +8,8 @@
 #include "processing/text/helptext.h"
 #include "processing/text/text.h"
 
-#include <qgsexception.h>
-#include <qgsrasterlayer.h>
-#include <qgsvectordataprovider.h>
-#include <qgsvectorlayer.h>
-
 namespace stillhead
 {
-
-  namespace
-  {
-
-    QList<int> keysOf( const QgsVectorLayer *layer )
-    {
-      return layer && layer->dataProvider() ? layer->dataProvider()->pkAttributeIndexes() : QList<int>();
-    }
-
-  } // namespace
 
   QString StaticPressureAlgorithm::name() const
   {
@@ -40,7 +24,7 @@ namespace stillhead
   QString StaticPressureAlgorithm::shortDescription() const
   {
     return Text::tr(
-      "Pressure of water at rest on every metre of drawn irrigation pipe, from terrain and one source." );
+      "Pressure of water at rest on every metre of drawn irrigation pipe, from terrain and its sources." );
   }
 
   QString StaticPressureAlgorithm::shortHelpString() const
@@ -59,24 +43,9 @@ namespace stillhead
     return new StaticPressureAlgorithm();
   }
 
-  void StaticPressureAlgorithm::addSink(
-    const QString &name, const QString &description, int sourceType, bool optional )
-  {
-    addParameter( new QgsProcessingParameterFeatureSink(
-      name, description, static_cast<compat::SourceType>( sourceType ), QVariant(), optional ) );
-  }
-
   void StaticPressureAlgorithm::initAlgorithm( const QVariantMap & )
   {
-    addParameters( drawingParameters() );
-    addParameters( terrainParameters() );
-    addParameters( sourceParameters( true ) );
-    addParameters( feedLayerParameters() );
-    addParameters( pipeParameters() );
-    addParameters( limitParameters() );
-    addParameters( unitParameters() );
-    addParameters( judgementParameters() );
-    addParameters( lockupParameter() );
+    addNetworkParameters();
     addParameters( failedOpenParameter() );
 
     addSink( output::SPANS, Text::tr( "Pipe by static pressure" ), static_cast<int>( compat::Source::Line ), false );
@@ -85,6 +54,7 @@ namespace stillhead
       output::STRETCHES, Text::tr( "Stretches over or short" ), static_cast<int>( compat::Source::Polygon ), true );
     addSink( output::EXTREMES, Text::tr( "Worst places" ), static_cast<int>( compat::Source::Point ), true );
     addSink( output::FINDINGS, Text::tr( "Findings" ), static_cast<int>( compat::Source::Point ), true );
+    addSink( output::SCHEDULE, Text::tr( "Schedule of devices" ), static_cast<int>( compat::Source::Point ), true );
     addParameter( new QgsProcessingParameterRasterDestination(
       output::SURFACE, Text::tr( "Static pressure surface" ), QVariant(), true, false ) );
 
@@ -108,80 +78,15 @@ namespace stillhead
     } );
   }
 
-  bool StaticPressureAlgorithm::prepareAlgorithm(
-    const QVariantMap &parameters, QgsProcessingContext &context, QgsProcessingFeedback *feedback )
+  QStringList StaticPressureAlgorithm::layers() const
   {
-    QgsProcessingFeedback silent;
-    guarded( [&] {
-      const ParameterValues values = valuesOf( parameters, context );
-      values.checkAll();
-      const QgsVectorLayer *mains = parameterAsVectorLayer( parameters, parameter::MAINS, context );
-      const QgsVectorLayer *laterals = parameterAsVectorLayer( parameters, parameter::LATERALS, context );
-      mMainKeys = keysOf( mains );
-      mLateralKeys = keysOf( laterals );
-      mTerrain = readTerrain( values, feedbackOr( feedback, silent ) );
-      const QgsRasterLayer *terrain = parameterAsRasterLayer( parameters, parameter::TERRAIN, context );
-      OutputSet( values, staticPressureLayers() )
-        .check( { { parameter::MAINS, mains }, { parameter::LATERALS, laterals }, { parameter::TERRAIN, terrain } } );
-      return QVariantMap();
-    } );
-    return true;
+    return staticPressureLayers();
   }
 
-  DrawnLayer StaticPressureAlgorithm::drawnLayer(
-    const QString &name, const QList<int> &keys, const QVariantMap &parameters, QgsProcessingContext &context ) const
+  std::unique_ptr<NetworkRun> StaticPressureAlgorithm::makeRun(
+    const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback ) const
   {
-    DrawnLayer layer;
-    layer.parameterName = name;
-    layer.role = name == parameter::MAINS ? Role::Mainline : Role::Lateral;
-    layer.source.reset( parameterAsSource( parameters, name, context ) );
-    layer.keys = keys;
-    if ( !layer.source )
-    {
-      const QString given = parameters.value( name ).toString();
-      throw QgsProcessingException( given.isEmpty()
-          ? Text::tr( "%1 is not given; choose a layer of lines." ).arg( name )
-          : Text::tr( "%1 (“%2”) cannot be opened as a layer of lines; check the file and its path." )
-              .arg( name, given ) );
-    }
-    layer.expressions = createExpressionContext( parameters, context, layer.source.get() );
-    return layer;
-  }
-
-  QVariantMap StaticPressureAlgorithm::processAlgorithm(
-    const QVariantMap &parameters, QgsProcessingContext &context, QgsProcessingFeedback *feedback )
-  {
-    QgsProcessingFeedback silent;
-    return guarded( [&] {
-      const ParameterValues values = valuesOf( parameters, context );
-      StaticPressureRun run( values, *mTerrain, feedbackOr( feedback, silent ) );
-      std::vector<DrawnLayer> layers;
-      layers.push_back( drawnLayer( parameter::MAINS, mMainKeys, parameters, context ) );
-      if ( values.isSet( parameter::LATERALS ) )
-        layers.push_back( drawnLayer( parameter::LATERALS, mLateralKeys, parameters, context ) );
-      const auto optionalSource = [&]( const QString &name ) {
-        return std::unique_ptr<QgsProcessingFeatureSource>(
-          values.isSet( name ) ? parameterAsSource( parameters, name, context ) : nullptr );
-      };
-      const auto sources = optionalSource( parameter::SOURCES );
-      const auto devices = optionalSource( parameter::DEVICES );
-      run.read( layers, sources.get(), devices.get() );
-      run.solve();
-      const QVariantMap results = run.write();
-      mWritten = run.written();
-      mStyle = run.style();
-      return results;
-    } );
-  }
-
-  QVariantMap StaticPressureAlgorithm::postProcessAlgorithm(
-    QgsProcessingContext &context, QgsProcessingFeedback *feedback )
-  {
-    QgsProcessingFeedback silent;
-    finishNow( mWritten, mStyle, context, feedbackOr( feedback, silent ) );
-    mWritten.clear();
-    mTerrain.reset();
-    return QVariantMap();
+    return std::make_unique<StaticPressureRun>( values, terrain, feedback );
   }
 
 } // namespace stillhead

@@ -1,22 +1,9 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// One run of the main job: from parameters to core's job, and from core's result to outputs.
+// One run of the main job.
 #pragma once
 
-#include "core/feedback/progressshares.h"
-#include "core/job/staticjob.h"
-#include "processing/displayunits.h"
-#include "processing/reading/devicelayer.h"
-#include "processing/reading/drawingreader.h"
-#include "processing/reading/sourcereader.h"
-#include "processing/reading/terrainreader.h"
-#include "processing/text/findingtext.h"
-#include "processing/text/refusaltext.h"
-#include "processing/writing/outputset.h"
-#include "processing/writing/resultfinish.h"
-#include "processing/writing/resultmetadata.h"
-
-#include <memory>
-#include <vector>
+#include "processing/networkrun.h"
+#include "processing/writing/regulatortable.h"
 
 namespace stillhead
 {
@@ -24,55 +11,22 @@ namespace stillhead
   //! Names of the outputs that are layers.
   QStringList staticPressureLayers();
 
-  class StaticPressureRun
+  class StaticPressureRun : public NetworkRun
   {
     public:
-      //! Reads all that needs no layer. \throws QgsProcessingException
+      //! \throws QgsProcessingException
       StaticPressureRun( const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback );
 
-      /**
-       * Reads the drawing, the sources (from \a sources if given) and the devices (from \a devices if given).
-       * \throws QgsProcessingException, Cancelled
-       */
-      void read( const std::vector<DrawnLayer> &layers, const QgsProcessingFeatureSource *sources,
-        const QgsProcessingFeatureSource *devices );
-
-      //! Computes. \throws QgsProcessingException, Cancelled
-      void solve();
-
-      //! Writes what was asked for and returns the results. \throws QgsProcessingException, Cancelled
-      QVariantMap write();
-
-      const std::vector<WrittenLayer> &written() const { return mWritten; }
-      const ResultStyle &style() const { return mStyle; }
+    protected:
+      void compute( const StaticJob &job, Monitor &monitor ) override;
+      std::vector<ResultTable> tables(
+        const ResultContext &context, const std::vector<QgsGeometry> &outlines ) const override;
+      QString title() const override;
+      QString summary( const ResultContext &context ) const override;
+      void addNumbers( QVariantMap &results ) const override;
 
     private:
-      void writeSurface( OutputSet &outputs, const RunFacts &facts, QVariantMap &results );
-      void writeTable( OutputSet &outputs, const ResultTable &table, const RunFacts &facts,
-        const ProgressShares::Share &share, QVariantMap &results );
-      void readFeeds( const QgsProcessingFeatureSource *sources, const QgsProcessingFeatureSource *devices );
-      StaticJob job( const PlanToTerrain &planToTerrain ) const;
-      RefusalNames refusalNames() const;
-      void logSources() const;
-      void logSource( std::size_t number ) const;
-      void logFindings() const;
-      void warnOfElevations() const;
-      RunFacts facts( const QString &summary ) const;
-      void addNumbers( QVariantMap &results ) const;
-
-      const ParameterValues &mValues;
-      Terrain &mTerrain;
-      QgsProcessingFeedback &mFeedback;
-      DisplayUnits mUnits;
-      Limits mLimits;
-      ResultStyle mStyle;
-      DrawnInput mDrawn;
-      std::vector<SourceInput> mSources;
-      DeviceInput mDevices;
-      FeedNames mNames;
-      std::unique_ptr<PlanMeasure> mMeasure;
-      StaticResult mResult;
-      std::vector<WrittenLayer> mWritten;
+      std::vector<RegulatorRow> mSchedule;
   };
 
 } // namespace stillhead

@@ -80,7 +80,6 @@ namespace stillhead
       Device device;
       device.kind = DeviceKind::Regulator;
       device.place = drawing.placeAt( line, regulator.at.alongM );
-      device.system = line.system;
       device.setPa = regulator.setPa;
       device.risePa = risePa;
       device.direction =
@@ -119,6 +118,7 @@ namespace stillhead
       result.proposal = proposeOnGraph( graph, rulesOf( job ) );
       makeExact( result.proposal, places );
       StaticJob with = job.statics;
+      with.schedule = true;
       for ( const ProposedRegulator &regulator : result.proposal.regulators )
         with.devices.push_back( deviceOf( regulator, result.before.drawing, job.risePa ) );
       result.devices = with.devices;

@@ -51,6 +51,7 @@ namespace stillhead
       double readingErrorPa = 0.0; //!< ± at 95 %
       double leastDropPa = 0.0;    //!< below this difference of low inlet over set a regulator is short of differential
       FailedOpen failedOpen = FailedOpen::NotAsked;
+      bool schedule = false; //!< whether StaticResult::deviceFailures is asked for, as scheduleOf() needs it
       double specificWeightNPerM3 = 0.0;
       unsigned threads = 0; //!< 0: as many as the machine has cores; results do not depend on it
   };
@@ -98,6 +99,19 @@ namespace stillhead
       int device = -1; //!< −1: no failure raises it
   };
 
+  //! What one regulator that fails open would do, all others holding.
+  struct DeviceFailure
+  {
+      struct RaisedZone
+      {
+          int zone = -1;
+          double levelM = 0.0; //!< of the high case
+      };
+
+      int device = -1;
+      std::vector<RaisedZone> raised;
+  };
+
   //! Everything the main job found. Indices of lines refer to `drawing.lines` (canonical order) unless said otherwise.
   struct StaticResult
   {
@@ -110,10 +124,11 @@ namespace stillhead
       std::vector<NodeFigures> nodeFigures; //!< one for each node
       std::vector<Stretch> stretches;
       std::vector<Extreme> extremes;
-      std::vector<Finding> findings;       //!< Finding::line indexes Drawing::lines as drawn
-      std::vector<SourceReport> sources;   //!< one for each source given
-      std::vector<StandingDevice> devices; //!< those that found their place, in the order given
-      std::vector<ZoneFailure> failures;   //!< one for each zone if it was asked for, else empty
+      std::vector<Finding> findings;             //!< Finding::line indexes Drawing::lines as drawn
+      std::vector<SourceReport> sources;         //!< one for each source given
+      std::vector<StandingDevice> devices;       //!< those that found their place, in the order given
+      std::vector<ZoneFailure> failures;         //!< one for each zone if it was asked for, else empty
+      std::vector<DeviceFailure> deviceFailures; //!< one for each standing regulator if a schedule was asked for
       Totals totals;
   };
 

@@ -123,45 +123,80 @@ namespace stillhead
 
         void findFailures()
         {
-          if ( mJob.failedOpen == FailedOpen::NotAsked )
+          const bool eachInTurn = mJob.failedOpen == FailedOpen::EachInTurn || mJob.schedule;
+          if ( mJob.failedOpen == FailedOpen::NotAsked && !eachInTurn )
             return;
-          for ( const ZoneLevel &level : mHighLevels )
-            mResult.failures.push_back( { level.levelM, -1 } );
+          if ( mJob.failedOpen != FailedOpen::NotAsked )
+          {
+            for ( const ZoneLevel &level : mHighLevels )
+              mResult.failures.push_back( { level.levelM, -1 } );
+          }
           std::vector<int> regulators;
           for ( const StandingDevice &standing : mResult.devices )
           {
             if ( mJob.devices[static_cast<std::size_t>( standing.device )].regulates() )
               regulators.push_back( standing.device );
           }
-          mHigh.failedOpen.assign( mJob.devices.size(), false );
           // A failure is looked at, not refused: water that would be pushed into an open tank shows as the level it has.
           for ( FedLevel &source : mHigh.sources )
             source.openWater = false;
           if ( mJob.failedOpen == FailedOpen::All )
-          {
-            for ( const int device : regulators )
-              mHigh.failedOpen[static_cast<std::size_t>( device )] = true;
-            take( -1 );
+            noteRaised( raisedBy( regulators ), -1 );
+          if ( !eachInTurn )
             return;
-          }
           for ( const int device : regulators )
           {
-            mHigh.failedOpen[static_cast<std::size_t>( device )] = true;
-            take( device );
-            mHigh.failedOpen[static_cast<std::size_t>( device )] = false;
+            const std::vector<ZoneLevel> failed = raisedBy( { device } );
+            if ( mJob.failedOpen == FailedOpen::EachInTurn )
+              noteRaised( failed, device );
+            if ( mJob.schedule )
+              noteSchedule( failed, device );
           }
         }
 
-        //! Takes over the levels with the regulators failed that are marked; \a device is the cause, −1: the nearest upstream.
-        void take( int device )
+        //! Levels of the high case with \a regulators failed open; those of today where they would raise themselves without end.
+        std::vector<ZoneLevel> raisedBy( const std::vector<int> &regulators )
         {
-          const std::vector<ZoneLevel> failed = zoneLevels( mHigh, Case::High );
+          mHigh.failedOpen.assign( mJob.devices.size(), false );
+          for ( const int device : regulators )
+            mHigh.failedOpen[static_cast<std::size_t>( device )] = true;
+          try
+          {
+            return zoneLevels( mHigh, Case::High );
+          }
+          catch ( const Refusal & )
+          {
+            return mHighLevels;
+          }
+        }
+
+        static bool isAbove( const ZoneLevel &level, double otherM )
+        {
+          constexpr double LARGER_M = 1e-9;
+          return level.fed && level.levelM > otherM + LARGER_M;
+        }
+
+        //! \a device is the cause; −1: the nearest failed one upstream.
+        void noteRaised( const std::vector<ZoneLevel> &failed, int device )
+        {
           for ( std::size_t i = 0; i < failed.size(); ++i )
           {
-            if ( failed[i].fed && failed[i].levelM > mResult.failures[i].levelM + 1e-9 )
+            if ( isAbove( failed[i], mResult.failures[i].levelM ) )
               mResult.failures[i] = { failed[i].levelM,
                 device >= 0 ? device : nearestFailed( failed, static_cast<int>( i ) ) };
           }
+        }
+
+        void noteSchedule( const std::vector<ZoneLevel> &failed, int device )
+        {
+          DeviceFailure failure;
+          failure.device = device;
+          for ( std::size_t i = 0; i < failed.size(); ++i )
+          {
+            if ( isAbove( failed[i], mHighLevels[i].levelM ) )
+              failure.raised.push_back( { static_cast<int>( i ), failed[i].levelM } );
+          }
+          mResult.deviceFailures.push_back( std::move( failure ) );
         }
 
         int nearestFailed( const std::vector<ZoneLevel> &levels, int zone ) const

@@ -37,6 +37,8 @@ namespace stillhead
         { field::PRESSURE_ZONE, QT_TRANSLATE_NOOP( "Stillhead", "Pressure zone" ) },
         { field::DOUBT, QT_TRANSLATE_NOOP( "Stillhead", "Doubt, ± %1" ) },
         { field::CLOSE_CALL, QT_TRANSLATE_NOOP( "Stillhead", "Too close to call" ) },
+        { field::P_FAILED_OPEN, QT_TRANSLATE_NOOP( "Stillhead", "Highest pressure if a regulator fails open, %1" ) },
+        { field::FAILED_OPEN_CAUSE, QT_TRANSLATE_NOOP( "Stillhead", "Regulator that causes it" ) },
       };
       static const Aliases nodes = {
         { field::NODE, QT_TRANSLATE_NOOP( "Stillhead", "Node" ) },
@@ -47,6 +49,10 @@ namespace stillhead
         { field::P_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Pressure at rest, high case, %1" ) },
         { field::STATE, QT_TRANSLATE_NOOP( "Stillhead", "State" ) },
         { field::PRESSURE_ZONE, QT_TRANSLATE_NOOP( "Stillhead", "Pressure zone" ) },
+        { field::NAME, QT_TRANSLATE_NOOP( "Stillhead", "Device" ) },
+        { field::P_IN_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Inlet pressure, low case, %1" ) },
+        { field::P_IN_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Inlet pressure, high case, %1" ) },
+        { field::STATUS, QT_TRANSLATE_NOOP( "Stillhead", "Status of the regulator" ) },
       };
       static const Aliases stretches = {
         { field::STRETCH, QT_TRANSLATE_NOOP( "Stillhead", "Stretch" ) },
@@ -85,6 +91,39 @@ namespace stillhead
         { field::P_TO, QT_TRANSLATE_NOOP( "Stillhead", "Pressure to, %1" ) },
         { field::AREA, QT_TRANSLATE_NOOP( "Stillhead", "Area, square %2" ) },
       };
+      static const Aliases regulators = {
+        { field::NAME, QT_TRANSLATE_NOOP( "Stillhead", "Name" ) },
+        { field::KIND, QT_TRANSLATE_NOOP( "Stillhead", "Kind" ) },
+        { field::SET, QT_TRANSLATE_NOOP( "Stillhead", "Set, water running, %1" ) },
+        { field::RISE, QT_TRANSLATE_NOOP( "Stillhead", "Lock-up rise, %1" ) },
+        { field::DIRECTION, QT_TRANSLATE_NOOP( "Stillhead", "Direction along the drawn line" ) },
+        { field::STATUS, QT_TRANSLATE_NOOP( "Stillhead", "Status" ) },
+        { field::STAGE, QT_TRANSLATE_NOOP( "Stillhead", "Stage (1 nearest the source)" ) },
+        { field::GROUND, QT_TRANSLATE_NOOP( "Stillhead", "Ground elevation, %2" ) },
+        { field::Z, QT_TRANSLATE_NOOP( "Stillhead", "Pipe elevation, %2" ) },
+        { field::INLET_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Inlet, low case, %1" ) },
+        { field::INLET_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Inlet, high case, %1" ) },
+        { field::DIFFERENTIAL, QT_TRANSLATE_NOOP( "Stillhead", "Low inlet less set, %1" ) },
+        { field::RATIO, QT_TRANSLATE_NOOP( "Stillhead", "High inlet to set" ) },
+        { field::SET_LEAST, QT_TRANSLATE_NOOP( "Stillhead", "Lowest set that serves the top, %1" ) },
+        { field::SET_MOST, QT_TRANSLATE_NOOP( "Stillhead", "Highest set that protects the bottom, %1" ) },
+        { field::LOCKUP, QT_TRANSLATE_NOOP( "Stillhead", "Gauge at no flow (lock-up), %1" ) },
+        { field::PRESSURE_ZONE, QT_TRANSLATE_NOOP( "Stillhead", "Pressure zone it feeds" ) },
+        { field::P_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Lowest in its zone, low case, %1" ) },
+        { field::P_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Highest in its zone, high case, %1" ) },
+        { field::Z_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Lowest pipe in its zone, %2" ) },
+        { field::Z_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Highest pipe in its zone, %2" ) },
+        { field::SERVES_UP_TO, QT_TRANSLATE_NOOP( "Stillhead", "Serves pipe up to, %2" ) },
+        { field::HOLDS_DOWN_TO, QT_TRANSLATE_NOOP( "Stillhead", "Holds pipe down to, %2" ) },
+        { field::P_FAILED_OPEN, QT_TRANSLATE_NOOP( "Stillhead", "Highest below it if it fails open, %1" ) },
+        { field::LENGTH, QT_TRANSLATE_NOOP( "Stillhead", "Length of pipe in its zone, %2" ) },
+        { field::DRAWN_LAYER, QT_TRANSLATE_NOOP( "Stillhead", "Drawn layer" ) },
+        { field::DRAWN_FID, QT_TRANSLATE_NOOP( "Stillhead", "Drawn feature" ) },
+        { field::DISTANCE_ALONG, QT_TRANSLATE_NOOP( "Stillhead", "Distance from the start of the drawn feature, %2" ) },
+        { field::PLACE_FROM, QT_TRANSLATE_NOOP( "Stillhead", "May stand from, %2" ) },
+        { field::PLACE_TO, QT_TRANSLATE_NOOP( "Stillhead", "May stand to, %2" ) },
+        { field::WHY, QT_TRANSLATE_NOOP( "Stillhead", "Why" ) },
+      };
       static const Aliases none;
       switch ( what )
       {
@@ -100,6 +139,8 @@ namespace stillhead
         return findings;
       case ResultLayer::BandAreas:
         return bandAreas;
+      case ResultLayer::Regulators:
+        return regulators;
       case ResultLayer::Surface:
         break;
       }

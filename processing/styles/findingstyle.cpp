@@ -74,6 +74,15 @@ namespace stillhead
         { FindingCode::OneReading, letter( QStringLiteral( "1" ) ) },
         { FindingCode::UnusualPressure, letter( QStringLiteral( "!" ) ) },
         { FindingCode::PumpDutyNotGiven, letter( QStringLiteral( "P" ) ) },
+        { FindingCode::LevelsDiffer, letter( QStringLiteral( "≠" ) ) },
+        { FindingCode::DeviceOffTheLine, letter( QStringLiteral( "D" ) ) },
+        { FindingCode::DeviceAtAJoint, letter( QStringLiteral( "J" ) ) },
+        { FindingCode::RegulatorWideOpen, movedOff( letter( QStringLiteral( "O" ) ), 5.0, 0.0 ) },
+        { FindingCode::RegulatorShortOfDifferential, movedOff( letter( QStringLiteral( "d" ) ), 5.0, 0.0 ) },
+        { FindingCode::RegulatorBypassed, movedOff( letter( QStringLiteral( "B" ) ), 5.0, 0.0 ) },
+        { FindingCode::RegulatorHeldShut, movedOff( letter( QStringLiteral( "S" ) ), -5.0, 0.0 ) },
+        { FindingCode::PressureMayBeTrapped, movedOff( letter( QStringLiteral( "T" ) ), 5.0, 0.0 ) },
+        { FindingCode::CannotBeMended, letter( QStringLiteral( "X" ) ) },
       };
     }
 

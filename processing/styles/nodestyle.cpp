@@ -23,10 +23,13 @@ namespace stillhead
       markerSymbol( { shapeLayer( compat::MarkerShape::Circle, 1.1, dark, white, 0.15 ) } );
     std::unique_ptr<QgsMarkerSymbol> end =
       markerSymbol( { shapeLayer( compat::MarkerShape::Circle, 1.2, white, dark, 0.2 ) } );
+    std::unique_ptr<QgsMarkerSymbol> device =
+      markerSymbol( { shapeLayer( compat::MarkerShape::Square, 2.2, white, dark, 0.4 ) } );
 
     QgsCategoryList categories;
     categories << QgsRendererCategory( word::NODE_SOURCE, source.release(), Text::tr( "source" ) )
                << QgsRendererCategory( word::NODE_JOINT, joint.release(), Text::tr( "joint" ) )
+               << QgsRendererCategory( word::NODE_DEVICE, device.release(), Text::tr( "device" ) )
                << QgsRendererCategory( word::NODE_END, end.release(), Text::tr( "end of a pipe" ) );
     layer.setRenderer( new QgsCategorizedSymbolRenderer( field::KIND, categories ) );
   }

@@ -41,7 +41,8 @@ namespace stillhead
     Extremes,
     Findings,
     Surface,
-    BandAreas
+    BandAreas,
+    Regulators
   };
 
   //! A band in plain words with its unit: `under 30 psi`, `65 to 80 psi`, `100 psi and over`.
@@ -56,6 +57,7 @@ namespace stillhead
   void styleExtremes( QgsVectorLayer &layer, const ResultStyle &style );
   void styleFindings( QgsVectorLayer &layer, const ResultStyle &style );
   void styleSurface( QgsRasterLayer &layer, const ResultStyle &style );
+  void styleRegulators( QgsVectorLayer &layer, const ResultStyle &style );
   void styleBandAreas( QgsVectorLayer &layer, const ResultStyle &style );
 
   //! Gives \a layer the style of an output: renderer, labels, field aliases and legend.

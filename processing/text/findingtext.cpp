@@ -117,10 +117,14 @@ namespace stillhead
         return Text::tr( "Below the check valve “%1” pressure may stay trapped above the figures shown." )
           .arg( device );
       case FindingCode::CannotBeMended:
+        if ( std::isnan( finding.figureM ) )
+          return Text::tr( "No plan was found that brings %1 of looped pipe within limits and keeps all served; part "
+                           "the loop with closed valves, or prove the pipe for the pressure shown." )
+            .arg( units.lengthText( finding.lengthM ) );
         return Text::tr(
-          "No regulator can bring this place within limits while ground at %1 behind it is served; prove the "
+          "No regulator can bring %1 of pipe here within limits while pipe at %2 behind it is served; prove the "
           "pipe for the pressure shown, or route round." )
-          .arg( units.lengthText( finding.figureM, 1 ) );
+          .arg( units.lengthText( finding.lengthM ), units.lengthText( finding.figureM, 1 ) );
       }
       return QString();
     }

@@ -36,20 +36,24 @@ namespace stillhead
         "Finds the pressure that water at rest puts on every metre of drawn pipe, where that is too much or too "
         "little, and which pipe water at rest does not reach." ),
       Text::tr(
-        "Inputs: mainlines and laterals drawn as lines, a bare-earth terrain raster, and one source: a gauge reading "
-        "or "
-        "a water level, with its highest value (night, winter, tank full) and its lowest (summer peak, tank low). "
+        "Inputs: mainlines and laterals drawn as lines, a bare-earth terrain raster, and one source or "
+        "several (a gauge reading or a water level each, with its highest value: night, winter, tank full; and its "
+        "lowest: summer peak, tank low), and devices in the pipe: regulators, boosters, check, closed and control "
+        "valves. "
         "Between two drawn vertices the pipe follows the ground at its depth of cover; lowest and highest places are "
         "solved, not sampled. Lines join where ends meet, or where an end meets a line, within the join tolerance." ),
       Text::tr(
         "Outputs: SPANS, the pipe cut exactly where a pressure limit, the static level or the edge of the terrain is "
         "met, with pressures, band and state; NODES, where pipes end or meet; STRETCHES, connected pipe that is over "
         "or short; EXTREMES, the worst place of each stretch and zone; FINDINGS, what to look at in the drawing; "
-        "SURFACE, the same static level as a raster (off by default); SUMMARY, the figures in plain sentences; and "
+        "SCHEDULE, the devices with what they hold and serve; SURFACE, the same static level as a raster (off by "
+        "default); SUMMARY, the figures in plain sentences; and "
         "numbers for use in models." ),
       unitsParagraph(),
       Text::tr(
-        "Limits: one source, no regulators or other devices; the terrain is taken as given (say how far it may be off "
+        "Limits: a regulator holds its lock-up (set plus rise) in the high case and its setting in the low case, as if "
+        "in good order; FAILED_OPEN asks what it would be otherwise. The terrain is taken as given (say how far it may "
+        "be off "
         "and places too close to call are marked); where it has no data there are no figures. Features keep their own "
         "fields; a drawn key `fid` is not copied, `drawn_fid` names the drawn feature." ),
     } );
@@ -73,6 +77,33 @@ namespace stillhead
       Text::tr(
         "Limits: no pipe is looked at, so neither summits on the way nor the way itself; negative values lie above the "
         "static level." ),
+    } );
+  }
+
+  QString proposeRegulatorsHelp()
+  {
+    return withCautions( {
+      Text::tr(
+        "Finds the fewest regulators that bring every drawn pipe within its highest acceptable pressure at rest (at no "
+        "flow: set plus lock-up rise) while nothing that the source serves today drops below the lowest acceptable "
+        "pressure at the setting, and proposes places and settings." ),
+      Text::tr(
+        "Inputs: as for static pressure along pipes. Devices given stay as they are and are not counted. Pipe that the "
+        "source does not serve today is left out of the test. Where water behind a place over limit needs more level "
+        "than "
+        "that place stands, no regulator can mend it; it is reported and the rest is solved." ),
+      Text::tr(
+        "Outputs: REGULATORS, points that can be given back as DEVICES unchanged, each with its setting, lock-up, what "
+        "it "
+        "serves and holds, between which places the same setting works, and why it stands there; SPANS, STRETCHES, "
+        "EXTREMES and FINDINGS of the drawing with the regulators in place; SUMMARY; and numbers: REGULATOR_COUNT, "
+        "REGULATOR_BOUND (no plan can have fewer), PROVEN (1 where both agree and all rules are kept)." ),
+      unitsParagraph(),
+      Text::tr(
+        "Limits: only the number is claimed to be the least, not cost; in looped pipe fed from several sides every "
+        "inlet "
+        "takes its own regulator, and a number that is not proven is said to be so. Flow is not looked at: size each "
+        "regulator for its largest and its smallest flow." ),
     } );
   }
 

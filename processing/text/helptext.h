@@ -9,5 +9,6 @@ namespace stillhead
 
   QString staticPressureHelp();
   QString pressureSurfaceHelp();
+  QString proposeRegulatorsHelp();
 
 } // namespace stillhead

@@ -28,26 +28,22 @@ namespace stillhead
       return fields;
     }
 
-    /**
-     * For every line as drawn the length of the feature's parts before it: where a line begins, counted from the start of
-     * its feature.
-     */
-    std::vector<double> partStartsM( const ResultContext &context )
-    {
-      const std::vector<DrawnLine> &lines = context.drawn.drawing.lines;
-      std::vector<double> lengths( lines.size(), 0.0 );
-      for ( const CanonicalLine &line : context.result.drawing.lines )
-        lengths[static_cast<std::size_t>( line.drawn )] = line.lengthM;
-      std::vector<double> starts( lines.size(), 0.0 );
-      for ( std::size_t i = 1; i < lines.size(); ++i )
-      {
-        if ( lines[i].feature == lines[i - 1].feature )
-          starts[i] = starts[i - 1] + lengths[i - 1];
-      }
-      return starts;
-    }
-
   } // namespace
+
+  std::vector<double> partStartsM( const ResultContext &context )
+  {
+    const std::vector<DrawnLine> &lines = context.drawn.drawing.lines;
+    std::vector<double> lengths( lines.size(), 0.0 );
+    for ( const CanonicalLine &line : context.result.drawing.lines )
+      lengths[static_cast<std::size_t>( line.drawn )] = line.lengthM;
+    std::vector<double> starts( lines.size(), 0.0 );
+    for ( std::size_t i = 1; i < lines.size(); ++i )
+    {
+      if ( lines[i].feature == lines[i - 1].feature )
+        starts[i] = starts[i - 1] + lengths[i - 1];
+    }
+    return starts;
+  }
 
   QString placeLabel( double pressurePa, double elevationM, const DisplayUnits &units, double leastPa, double mostPa )
   {

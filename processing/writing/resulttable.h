@@ -81,6 +81,12 @@ namespace stillhead
   //! A device that passes water is one row, its outlet's; a closed valve two, one a side.
   std::vector<NodeRow> nodeRows( const StaticResult &result );
 
+  /**
+   * For every line as drawn the length of the feature's parts before it: where a line begins, counted from the start of
+   * its feature.
+   */
+  std::vector<double> partStartsM( const ResultContext &context );
+
   ResultTable spanTable( const ResultContext &context );
   ResultTable nodeTable( const ResultContext &context );
 
