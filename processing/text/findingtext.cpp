@@ -29,6 +29,18 @@ namespace stillhead
       return parts.isEmpty() ? Text::tr( "at the same joint" ) : parts.join( Text::tr( ", " ) );
     }
 
+    //! True where the source is a row of SOURCES.
+    bool inLayer( const Finding &finding, const FeedNames &names )
+    {
+      return !names.sources.value( finding.source ).isEmpty();
+    }
+
+    QString sourceName( const Finding &finding, const FeedNames &names )
+    {
+      return inLayer( finding, names ) ? Text::tr( "the source “%1”" ).arg( names.sources.value( finding.source ) )
+                                       : Text::tr( "the source" );
+    }
+
     QString sentenceOf(
       const Finding &finding, const DrawnInput &drawn, const FeedNames &names, const DisplayUnits &units )
     {
@@ -72,16 +84,24 @@ namespace stillhead
       case FindingCode::NoSurveyZ:
         return Text::tr( "%1 has no surveyed Z (missing, or zero throughout); the terrain is used for it." ).arg( own );
       case FindingCode::OneReading:
-        return Text::tr( "Only one value is given for the source, so the low case is the high one. A low value "
-                         "(SOURCE_LOW) shows what is served in the summer peak." );
+        return Text::tr( "Only one value is given for %1, so the low case is the high one. A low value (%2) shows what "
+                         "is served in the summer peak." )
+          .arg( sourceName( finding, names ),
+            inLayer( finding, names ) ? QStringLiteral( "`low`" ) : parameter::SOURCE_LOW );
       case FindingCode::UnusualPressure:
-        return Text::tr( "The source's pressure of %1 lies outside %2 to %3; check its unit." )
-          .arg( units.pressureText( finding.figurePa, 1 ), units.pressureText( 15.0 * PASCALS_PER_PSI ),
-            units.pressureText( 250.0 * PASCALS_PER_PSI ) );
+        return Text::tr( "The pressure of %1, %2, lies outside %3 to %4; check its unit." )
+          .arg( sourceName( finding, names ), units.pressureText( finding.figurePa, 1 ),
+            units.pressureText( 15.0 * PASCALS_PER_PSI ), units.pressureText( 250.0 * PASCALS_PER_PSI ) );
       case FindingCode::PumpDutyNotGiven:
+        if ( finding.device >= 0 )
+          return Text::tr( "The booster “%1” has no `boost_low` (its pressure while running); its no-flow pressure is "
+                           "taken for the low case too, which shows more than it gives." )
+            .arg( device );
         return Text::tr(
-          "The pump's pressure while running (BOOST_LOW) is not given; its no-flow pressure is taken for the "
-          "low case too, which shows more than it gives." );
+          "The pressure while running of the pump at %1 (%2) is not given; its no-flow pressure is taken "
+          "for the low case too, which shows more than it gives." )
+          .arg( sourceName( finding, names ),
+            inLayer( finding, names ) ? QStringLiteral( "`boost_low`" ) : parameter::BOOST_LOW );
       case FindingCode::LevelsDiffer:
         return Text::tr(
           "The levels of the sources “%1” and “%2” differ by %3; the higher counts in the high case, the lower "

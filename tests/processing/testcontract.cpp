@@ -92,7 +92,7 @@ class TestContract : public QObject
     void everyAlgorithmSaysWhatItIs();
 
   private:
-    static QStringList ids() { return { "staticpressure", "pressuresurface" }; }
+    static QStringList ids() { return { "staticpressure", "pressuresurface", "proposeregulators" }; }
     static std::unique_ptr<QgsProcessingAlgorithm> algorithm( const QString &id )
     {
       return std::unique_ptr<QgsProcessingAlgorithm>(
@@ -115,16 +115,19 @@ void TestContract::isAsWritten()
     lines << QString() << QString( "algorithm %1: %2" ).arg( described->id(), described->displayName() );
     lines << parametersOf( *described ) << outputsOf( *described );
     if ( id == "staticpressure" )
-      lines << fieldsOf(
-        runAlgorithm( id, mSlope.parameters() ), { "SPANS", "NODES", "STRETCHES", "EXTREMES", "FINDINGS" } );
+      lines << fieldsOf( runAlgorithm( id, mSlope.parameters( { { "SCHEDULE", Slope::temporary() } } ) ),
+        { "SPANS", "NODES", "STRETCHES", "EXTREMES", "FINDINGS", "SCHEDULE" } );
     if ( id == "pressuresurface" )
       lines << fieldsOf( runAlgorithm( id, mSlope.surfaceParameters() ), { "BAND_AREAS" } );
+    if ( id == "proposeregulators" )
+      lines << fieldsOf( runAlgorithm( id, mSlope.parameters( { { "REGULATORS", Slope::temporary() } } ) ),
+        { "REGULATORS", "SPANS", "STRETCHES", "EXTREMES", "FINDINGS" } );
   }
   lines << QString() << "states";
   for ( int state = 0; state <= static_cast<int>( stillhead::State::WithinLimits ); ++state )
     lines << QString( "  %1" ).arg( stillhead::stateName( static_cast<stillhead::State>( state ) ) );
   lines << QString() << "findings";
-  for ( int code = 0; code <= static_cast<int>( stillhead::FindingCode::PumpDutyNotGiven ); ++code )
+  for ( int code = 0; code <= static_cast<int>( stillhead::FindingCode::CannotBeMended ); ++code )
     lines << QString( "  %1" ).arg( stillhead::findingName( static_cast<stillhead::FindingCode>( code ) ) );
 
   QFile found( QStringLiteral( STILLHEAD_BINARY_DIR ) + "/contract-found.txt" );

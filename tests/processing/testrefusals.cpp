@@ -227,7 +227,8 @@ void TestRefusals::places_data()
     << "The source lies 10.00 ft from the nearest pipe, farther than SOURCE_REACH (5 ft)";
   QTest::newRow( "source off the terrain" )
     << QVariantMap { { "SOURCE", place( -5, 0 ) }, { "SOURCE_KIND", 2 }, { "SOURCE_VALUE", 50 }, { "SOURCE_LOW", 50 } }
-    << "The terrain has no elevation at the source; give SOURCE_ELEVATION, or a terrain that reaches there.";
+    << "The terrain has no elevation at the source; give SOURCE_ELEVATION (in a layer: `elevation`), or a terrain that "
+       "reaches there.";
 }
 
 void TestRefusals::places()
