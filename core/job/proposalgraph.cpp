@@ -169,6 +169,7 @@ namespace stillhead
           edge.toNode = link.toNode;
           edge.oneWay = true;
           const Device &device = mJob.devices[index( link.device )];
+          edge.regulates = device.regulates();
           const auto standing = std::find_if( mResult.devices.begin(), mResult.devices.end(),
             [&]( const StandingDevice &own ) { return own.device == link.device; } );
           if ( device.kind == DeviceKind::Booster && standing != mResult.devices.end() )

@@ -3,6 +3,7 @@
 // lie so close that a device's leg is not plain), the pipe at fault is left as it is and reported.
 #include "core/job/proposaljob.h"
 
+#include "core/feedback/stagemonitor.h"
 #include "core/job/proposalcheck.h"
 #include "core/job/proposalgraph.h"
 #include "core/proposal/graphproposal.h"
@@ -19,26 +20,6 @@ namespace stillhead
     {
       return static_cast<std::size_t>( number );
     }
-
-    //! A stage's share of the whole progress.
-    class StageMonitor : public Monitor
-    {
-      public:
-        StageMonitor( Monitor &whole, double from, double to )
-          : mWhole( whole )
-          , mFrom( from )
-          , mTo( to )
-        {
-        }
-
-        bool cancelled() const override { return mWhole.cancelled(); }
-        void progress( double fraction ) override { mWhole.progress( mFrom + fraction * ( mTo - mFrom ) ); }
-
-      private:
-        Monitor &mWhole;
-        double mFrom;
-        double mTo;
-    };
 
     ProposalRules rulesOf( const ProposalJob &job )
     {

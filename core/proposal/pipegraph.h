@@ -22,6 +22,7 @@ namespace stillhead
       double stubFromM = 0.0;  //!< a regulator is written no nearer than this to the first node
       double stubToM = 0.0;    //!< and to the second
       bool oneWay = false;     //!< a given device
+      bool regulates = false;  //!< a given device that holds a level of its own beyond it
       double boostHighM = 0.0; //!< what a given booster adds
       double boostLowM = 0.0;
       double inletNeedM = NO_LEVEL_M; //!< what it needs at its inlet
