@@ -14,7 +14,7 @@ namespace stillhead
 
   struct LayerExtras
   {
-      QString table; //!< the layer's name in the file
+      QString table;    //!< the layer's name in the file
       QString styleQml; //!< the default style, in the platform's own format
       QgsLayerMetadata metadata;
   };

@@ -145,8 +145,8 @@ namespace stillhead
       return true;
     if ( !mWorkingPath.isEmpty() )
     {
-      mDataset.reset(
-        GDALOpenEx( mWorkingPath.toUtf8().constData(), GDAL_OF_VECTOR | GDAL_OF_UPDATE, nullptr, nullptr, nullptr ) );
+      mDataset.reset( GDALOpenEx( mWorkingPath.toUtf8().constData(),
+        GDAL_OF_VECTOR | GDAL_OF_UPDATE | GDAL_OF_VERBOSE_ERROR, nullptr, nullptr, nullptr ) );
     }
     else
     {

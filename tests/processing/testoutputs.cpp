@@ -47,6 +47,7 @@ class TestOutputs : public QObject
     void cancelLeavesNothing();
     void cancelLeavesEarlierResults();
     void failureLeavesEarlierResults();
+    void lateCancelLeavesAGeoPackage();
     void lateCancelFinishesWhatReplaces();
     void cancelOfTheSurface_data();
     void cancelOfTheSurface();
@@ -118,10 +119,22 @@ void TestOutputs::failureLeavesEarlierResults()
   QCOMPARE( contentOf( file ), before );
 }
 
+void TestOutputs::lateCancelLeavesAGeoPackage()
+{
+  const QString file = mSlope.path( "late.gpkg" );
+  QVERIFY( runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file } } ) ).ok );
+  const QByteArray before = contentOf( file );
+  Impatient impatient( 80.0 );
+  QVERIFY(
+    !runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file }, { "BANDS", "900" } } ), impatient ).ok );
+  QCOMPARE( contentOf( file ), before );
+  QCOMPARE( QgsVectorLayer( file, "earlier", "ogr" ).featureCount(), 3LL );
+}
+
 void TestOutputs::lateCancelFinishesWhatReplaces()
 {
   // Once something earlier is gone the run is finished: a whole new result, never half of one.
-  const QString file = mSlope.path( "replaced.gpkg" );
+  const QString file = mSlope.path( "replaced.geojson" );
   QVERIFY( runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file } } ) ).ok );
   QCOMPARE( QgsVectorLayer( file, "earlier", "ogr" ).featureCount(), 3LL );
   Impatient impatient( 80.0 );

@@ -4,6 +4,7 @@
 #include "processing/parameternames.h"
 #include "processing/styles/resultstyler.h"
 #include "processing/styles/storedstyle.h"
+#include "processing/writing/geopackageextras.h"
 #include "tests/support/processingrun.h"
 #include "tests/support/stylesample.h"
 
@@ -32,7 +33,7 @@ class TestResultStyles : public QObject
     void everyFieldHasAnAliasWithItsUnit();
     void surfaceBandsTakeTheirLowerLimit();
     void styleStaysInAGeoPackage();
-    void otherFormatsKeepNoStyle();
+    void extrasOfNoFileAreAWarning();
     void layersAreStyledOnLoading();
 
   private:
@@ -190,9 +191,13 @@ void TestResultStyles::styleStaysInAGeoPackage()
   QTemporaryDir folder;
   const LayerPointer layer = mSample.spans();
   const QString source = writeGeoPackage( *layer, folder.filePath( QStringLiteral( "result.gpkg" ) ) );
-  // A second run over the same file replaces the style without asking.
+  QgsLayerMetadata metadata;
+  metadata.setAbstract( QStringLiteral( "It's a sample" ) );
+  const QString qml = styleText( ResultLayer::Spans, layer->fields(), layer->wkbType(), mSample.style() );
+  // A second run over the same file replaces style and metadata without asking.
   for ( int run = 0; run < 2; ++run )
-    QCOMPARE( storeDefaultStyle( source, ResultLayer::Spans, mSample.style() ), QString() );
+    QCOMPARE(
+      storeExtras( folder.filePath( QStringLiteral( "result.gpkg" ) ), { { "spans", qml, metadata } } ), QString() );
 
   QgsVectorLayer opened( source, QStringLiteral( "anything" ), QStringLiteral( "ogr" ) );
   QVERIFY( opened.isValid() );
@@ -204,17 +209,16 @@ void TestResultStyles::styleStaysInAGeoPackage()
   QStringList descriptions;
   QString error;
   QCOMPARE( opened.listStylesInDatabase( ids, names, descriptions, error ), 1 );
+  QCOMPARE( opened.metadata().abstract(), QStringLiteral( "It's a sample" ) );
   QCOMPARE( opened.attributeAlias( opened.fields().lookupField( field::P_LOW ) ),
     QStringLiteral( "Lowest pressure at rest, low case, psi" ) );
 }
 
-void TestResultStyles::otherFormatsKeepNoStyle()
+void TestResultStyles::extrasOfNoFileAreAWarning()
 {
   QTemporaryDir folder;
-  QCOMPARE( storeDefaultStyle( folder.filePath( QStringLiteral( "no.fgb" ) ), ResultLayer::Spans, mSample.style() ),
-    QString() );
-  QVERIFY( !storeDefaultStyle( folder.filePath( QStringLiteral( "no.gpkg" ) ), ResultLayer::Spans, mSample.style() )
-              .isEmpty() );
+  const QString error = storeExtras( folder.filePath( QStringLiteral( "no.gpkg" ) ), { { "spans", "", {} } } );
+  QVERIFY2( error.contains( QLatin1String( "the figures are there" ) ), qPrintable( error ) );
 }
 
 void TestResultStyles::layersAreStyledOnLoading()
