@@ -138,6 +138,8 @@ namespace stillhead
     {
       throw QgsProcessingException( refusalText( refusal, mSource.reachM, mUnits ) );
     }
+    // Writing needs the memory more.
+    mTerrain.cache->clear();
     logSource();
     logFindings();
     warnOfElevations();

@@ -269,6 +269,14 @@ namespace stillhead
     return true;
   }
 
+  bool GeoPackageFile::endLayer()
+  {
+    const GdalErrors errors;
+    const bool done = OGR_L_SyncToDisk( mLayer ) == OGRERR_NONE;
+    mReason = QString::fromStdString( errors.text() );
+    return done;
+  }
+
   bool GeoPackageFile::commit()
   {
     const GdalErrors errors;

@@ -22,7 +22,7 @@ namespace stillhead
   {
 
     //! Straight pieces to a quarter circle: round enough for a pen.
-    constexpr int SEGMENTS = 5;
+    constexpr int SEGMENTS = 4;
 
     //! Lines to a cell: tried with ten thousand of them, far apart and crossing each other twenty times.
     constexpr std::size_t CELL_LINES = 96;

@@ -66,7 +66,7 @@ namespace
     auto lines = std::make_unique<QgsMultiLineString>();
     for ( const Strand &strand : strands )
       lines->addGeometry( new QgsLineString( strand.x, strand.y ) );
-    return QgsGeometry( std::move( lines ) ).buffer( DISTANCE_M, 5 );
+    return QgsGeometry( std::move( lines ) ).buffer( DISTANCE_M, 4 );
   }
 
   QgsGeometry box( double left, double low, double right, double high )
