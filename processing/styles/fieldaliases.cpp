@@ -61,7 +61,7 @@ namespace stillhead
         { field::LABEL, QT_TRANSLATE_NOOP( "Stillhead", "Label" ) },
       };
       static const Aliases extremes = {
-        { field::WHAT, QT_TRANSLATE_NOOP( "Stillhead", "Highest or lowest" ) },
+        { field::WHAT, QT_TRANSLATE_NOOP( "Stillhead", "What stands out" ) },
         { field::P, QT_TRANSLATE_NOOP( "Stillhead", "Pressure at rest, %1" ) },
         { field::Z, QT_TRANSLATE_NOOP( "Stillhead", "Pipe elevation, %2" ) },
         { field::PRESSURE_ZONE, QT_TRANSLATE_NOOP( "Stillhead", "Pressure zone" ) },

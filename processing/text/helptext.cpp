@@ -44,9 +44,20 @@ namespace stillhead
       Text::tr(
         "Outputs: SPANS, the pipe cut exactly where a pressure limit, the static level or the edge of the terrain is "
         "met, with pressures, band and state; NODES, where pipes end or meet; STRETCHES, connected pipe that is over "
-        "or short; EXTREMES, the worst place of each stretch and zone; FINDINGS, what to look at in the drawing; "
+        "or short; EXTREMES, the worst place of each stretch and zone, then the summits and sags of the mainlines, "
+        "places "
+        "for air valves, drains and blow-out points; FINDINGS, what to look at in the drawing; "
         "SURFACE, the same static level as a raster (off by default); SUMMARY, the figures in plain sentences; and "
         "numbers for use in models." ),
+      Text::tr(
+        "A summit is a place from which no way along mainlines leads to higher pipe without falling by the depth of "
+        "summits and sags first, and from which the pipe falls by that depth on two sides at least; a sag is the same "
+        "upside down. Mainlines count as joined pipe, wherever drawn features begin and end, and every mainline leg at "
+        "a "
+        "joint counts; laterals do not. A dead end is neither, and pipe without terrain ends the way. Of a level top "
+        "one "
+        "place stands. The pressure of a summit is that of the low case, the pressure of a sag that of the high "
+        "case." ),
       unitsParagraph(),
       Text::tr(
         "Limits: one source, no regulators or other devices; the terrain is taken as given (say how far it may be off "

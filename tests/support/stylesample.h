@@ -91,7 +91,10 @@ namespace stillhead::test
             { QStringLiteral( "POINT(80 90)" ),
               { QStringLiteral( "lowest" ), 2, QStringLiteral( "25 psi, pipe 488 ft" ) } },
             { QStringLiteral( "POINT(90 90)" ), { QStringLiteral( "highest" ), QVariant(), QString() } },
-            { QStringLiteral( "POINT(100 90)" ), { QStringLiteral( "lowest" ), QVariant(), QString() } } },
+            { QStringLiteral( "POINT(100 90)" ), { QStringLiteral( "lowest" ), QVariant(), QString() } },
+            { QStringLiteral( "POINT(110 90)" ),
+              { QStringLiteral( "summit" ), QVariant(), QStringLiteral( "summit" ) } },
+            { QStringLiteral( "POINT(120 90)" ), { QStringLiteral( "sag" ), QVariant(), QStringLiteral( "sag" ) } } },
           QStringLiteral( "extremes" ) );
       }
 

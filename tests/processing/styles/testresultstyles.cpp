@@ -12,6 +12,7 @@
 #include <qgsrasterlayer.h>
 #include <qgsrastershader.h>
 #include <qgsrenderer.h>
+#include <qgsrulebasedlabeling.h>
 #include <qgssinglebandpseudocolorrenderer.h>
 #include <qgsvectorfilewriter.h>
 
@@ -29,6 +30,7 @@ class TestResultStyles : public QObject
     void legendEndsWithTheCaution();
     void limitsOfLateralsAreNamedWhereTheyDiffer();
     void findingsInTheLegendAreThoseThatAreThere();
+    void summitsAndSagsStandBelowTheWorstPlaces();
     void everyFieldHasAnAliasWithItsUnit();
     void surfaceBandsTakeTheirLowerLimit();
     void styleStaysInAGeoPackage();
@@ -140,6 +142,24 @@ void TestResultStyles::findingsInTheLegendAreThoseThatAreThere()
   styleFindings( *layer, mSample.style() );
   QCOMPARE(
     legendOf( *layer ), ( QStringList { QStringLiteral( "near miss" ), QStringLiteral( "crossing not joined" ) } ) );
+}
+
+void TestResultStyles::summitsAndSagsStandBelowTheWorstPlaces()
+{
+  const LayerPointer layer = mSample.extremes();
+  styleExtremes( *layer, mSample.style() );
+  const QStringList legend = legendOf( *layer );
+  QCOMPARE( legend.size(), 6 );
+  QVERIFY( layer->renderer()->usingSymbolLevels() );
+  QVERIFY( legend.at( 4 ).startsWith( QStringLiteral( "summit of a mainline" ) ) );
+  QVERIFY( legend.at( 5 ).startsWith( QStringLiteral( "sag of a mainline" ) ) );
+  const auto *labeling = dynamic_cast<const QgsRuleBasedLabeling *>( layer->labeling() );
+  QVERIFY( labeling );
+  const QgsRuleBasedLabeling::RuleList rules = labeling->rootRule()->children();
+  QCOMPARE( rules.size(), 2 );
+  QVERIFY( rules.at( 0 )->settings()->priority > rules.at( 1 )->settings()->priority );
+  QCOMPARE( rules.at( 0 )->minimumScale(), 0.0 );
+  QVERIFY( rules.at( 1 )->minimumScale() > 0.0 );
 }
 
 void TestResultStyles::everyFieldHasAnAliasWithItsUnit()
