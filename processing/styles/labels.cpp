@@ -21,7 +21,7 @@ namespace stillhead
   namespace
   {
 
-    QgsPalLayerSettings besideThePoint( const QString &expression, double sizePoints, int priority )
+    QgsPalLayerSettings darkOnWhite( const QString &expression, double sizePoints, int priority )
     {
       QFont font( QStringLiteral( "DejaVu Sans" ) );
       font.setBold( true );
@@ -39,9 +39,15 @@ namespace stillhead
       settings.setFormat( format );
       settings.fieldName = expression;
       settings.isExpression = true;
+      settings.priority = priority;
+      return settings;
+    }
+
+    QgsPalLayerSettings besideThePoint( const QString &expression, double sizePoints, int priority )
+    {
+      QgsPalLayerSettings settings = darkOnWhite( expression, sizePoints, priority );
       settings.placement = compat::LabelPlacement::OrderedPositionsAroundPoint;
       settings.dist = 3.5;
-      settings.priority = priority;
       auto *callout = new QgsSimpleLineCallout();
       callout->setEnabled( true );
       callout->setMinimumLength( 5.0 );
@@ -72,6 +78,15 @@ namespace stillhead
     root->appendChild(
       new Rule( new QgsPalLayerSettings( besideThePoint( more.expression, 7.0, 1 ) ), 0, smallestScale, more.filter ) );
     layer.setLabeling( new QgsRuleBasedLabeling( root ) );
+    layer.setLabelsEnabled( true );
+  }
+
+  void labelLines( QgsVectorLayer &layer, const QString &expression )
+  {
+    QgsPalLayerSettings settings = darkOnWhite( expression, 7.0, 3 );
+    settings.placement = compat::LabelPlacement::Line;
+    settings.repeatDistance = 150.0;
+    layer.setLabeling( new QgsVectorLayerSimpleLabeling( settings ) );
     layer.setLabelsEnabled( true );
   }
 

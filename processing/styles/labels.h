@@ -1,5 +1,5 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Labels of result points: short dark text on a white halo, moved beside its point and tied to it by a thin line.
+// Labels of results: short dark text on a white halo, moved beside its point and tied to it by a thin line, or along its line.
 #pragma once
 
 #include <QString>
@@ -24,6 +24,9 @@ namespace stillhead
    * 1 : \a smallestScale or larger.
    */
   void labelPoints( QgsVectorLayer &layer, const PointLabels &first, const PointLabels &more, double smallestScale );
+
+  //! Labels the lines of \a layer with \a expression, along them and where there is room.
+  void labelLines( QgsVectorLayer &layer, const QString &expression );
 
   //! Keeps labels of other layers off the features of \a layer as far as there is room.
   void keepLabelsOff( QgsVectorLayer &layer );

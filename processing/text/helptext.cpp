@@ -77,9 +77,11 @@ namespace stillhead
         "and, if known, its lowest; a depth of cover; optionally an area to stay within." ),
       Text::tr(
         "Outputs: SURFACE, a raster on the terrain's own grid (band 1: high case; band 2: low case, only where a low "
-        "value is given); BAND_AREAS, polygons of the pressure bands of the high case; STATIC_LEVEL_HIGH and "
-        "STATIC_LEVEL_LOW; GROUND_TOO_HIGH, the ground elevation above which the lowest acceptable pressure is not "
-        "met (low case); GROUND_TOO_LOW, the one below which the highest is passed (high case)." ),
+        "value is given); BAND_AREAS, polygons of the pressure bands of the high case; GROUND_LIMITS, lines "
+        "on the ground of the ceiling and the floor, higher ground on their left; STATIC_LEVEL_HIGH and "
+        "STATIC_LEVEL_LOW; GROUND_TOO_HIGH, the ceiling: the ground elevation above which the lowest acceptable "
+        "pressure is not "
+        "met (low case); GROUND_TOO_LOW, the floor: the one below which the highest is passed (high case)." ),
       unitsParagraph(),
       Text::tr(
         "Limits: no pipe is looked at, so neither summits on the way nor the way itself; negative values lie above the "

@@ -98,6 +98,17 @@ namespace stillhead::test
           QStringLiteral( "extremes" ) );
       }
 
+      //! A ceiling and a floor, both with the higher ground in the north.
+      LayerPointer groundLimits() const
+      {
+        return drawLayer( QStringLiteral( "LineString?crs=EPSG:32631&field=what:string&field=label:string" ),
+          { { QStringLiteral( "LINESTRING(0 79, 30 80, 55 79)" ),
+              { QStringLiteral( "ceiling" ), QStringLiteral( "ceiling, 30 psi, ground 477 ft" ) } },
+            { QStringLiteral( "LINESTRING(65 79, 95 80, 120 79)" ),
+              { QStringLiteral( "floor" ), QStringLiteral( "floor, 80 psi, ground 382 ft" ) } } },
+          QStringLiteral( "limits" ) );
+      }
+
       LayerPointer stretches() const
       {
         return drawLayer( QStringLiteral( "Polygon?crs=EPSG:32631&field=what:string" ),

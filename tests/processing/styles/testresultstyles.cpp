@@ -31,6 +31,7 @@ class TestResultStyles : public QObject
     void limitsOfLateralsAreNamedWhereTheyDiffer();
     void findingsInTheLegendAreThoseThatAreThere();
     void summitsAndSagsStandBelowTheWorstPlaces();
+    void ceilingAndFloorNameTheirLimits();
     void everyFieldHasAnAliasWithItsUnit();
     void surfaceBandsTakeTheirLowerLimit();
     void styleStaysInAGeoPackage();
@@ -160,6 +161,16 @@ void TestResultStyles::summitsAndSagsStandBelowTheWorstPlaces()
   QVERIFY( rules.at( 0 )->settings()->priority > rules.at( 1 )->settings()->priority );
   QCOMPARE( rules.at( 0 )->minimumScale(), 0.0 );
   QVERIFY( rules.at( 1 )->minimumScale() > 0.0 );
+}
+
+void TestResultStyles::ceilingAndFloorNameTheirLimits()
+{
+  const LayerPointer layer = mSample.groundLimits();
+  styleResult( *layer, ResultLayer::GroundLimits, mSample.style() );
+  QCOMPARE( legendOf( *layer ),
+    ( QStringList { QStringLiteral( "ceiling: higher ground has less than 30 psi (low case)" ),
+      QStringLiteral( "floor: lower ground has more than 80 psi (high case)" ) } ) );
+  QVERIFY( layer->labelsEnabled() );
 }
 
 void TestResultStyles::everyFieldHasAnAliasWithItsUnit()
