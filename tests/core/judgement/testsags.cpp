@@ -2,8 +2,10 @@
 // Summits and sags of mainlines: by hand on drawn Z, against a search from every place for random networks, and the same
 // whatever way the pipe was drawn or split.
 #include "core/judgement/sags.h"
+#include "tests/support/bilinear.h"
 #include "tests/support/jobsetup.h"
 #include "tests/support/randomlayout.h"
+#include "tests/support/realdata.h"
 #include "tests/support/tolerance.h"
 
 #include <QRegularExpression>
@@ -280,6 +282,7 @@ class TestSags : public QObject
     void drawnOtherwise();
     void splitOtherwise();
     void levelGround();
+    void realGround();
 };
 
 void TestSags::byHand_data()
@@ -489,6 +492,43 @@ void TestSags::levelGround()
       STILLHEAD_NEAR( static_cast<double>( spots.begin()->x ) * 1e-6, 12.0, 1e-6 );
     }
   }
+}
+
+// Streets on a surveyed hillside, a made-up pairing: along its line nothing near a summit is higher, and the ground there is
+// the ground that another bilinear surface has.
+void TestSags::realGround()
+{
+  const Drawing drawing =
+    test::realDrawing( test::realLines( "chicago_streets_local_ft.gpkg" ), 0.3048, 626000.0, 1011600.0 );
+  const MemoryTerrain terrain = test::realTerrain( "bei_5m_utm17n.tif" );
+  JobSetup setup( drawing );
+  setup.terrain = std::make_unique<MemoryTerrain>( terrain );
+  setup.job.source.place = drawing.vertices.front();
+  setup.job.sagDepthM = 0.5;
+  const StaticResult result = setup.solve();
+  const auto groundAt = [&]( const PlanPoint &place ) {
+    const TerrainPoint pixel = terrain.grid().toPixel( { place.x, place.y } );
+    return test::bilinear( terrain, pixel.x, pixel.y );
+  };
+  int found = 0;
+  for ( const Extreme &extreme : result.extremes )
+  {
+    if ( !isSagOrSummit( extreme ) )
+      continue;
+    ++found;
+    STILLHEAD_NEAR( groundAt( placeOf( result, extreme ) ), extreme.elevationM, 1e-7 );
+    const CanonicalLine &line = test::lineOf( result, result.pieces[static_cast<std::size_t>( extreme.piece )] );
+    for ( const double stepM : { -2.0, -0.5, -0.05, 0.05, 0.5, 2.0 } )
+    {
+      const double alongM = extreme.alongM + stepM;
+      if ( alongM < 0.0 || alongM > line.lengthM )
+        continue;
+      const double differenceM = groundAt( result.drawing.placeAt( line, alongM ) ) - extreme.elevationM;
+      const bool isBeyond = extreme.kind == ExtremeKind::Summit ? differenceM > 1e-7 : differenceM < -1e-7;
+      QVERIFY( !isBeyond );
+    }
+  }
+  QVERIFY( found > 30 );
 }
 
 QTEST_APPLESS_MAIN( TestSags )
