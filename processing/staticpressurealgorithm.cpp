@@ -73,6 +73,7 @@ namespace stillhead
     addParameters( sourceParameters( true ) );
     addParameters( pipeParameters() );
     addParameters( limitParameters() );
+    addParameters( sagParameter() );
     addParameters( unitParameters() );
     addParameters( judgementParameters() );
 

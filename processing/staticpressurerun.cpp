@@ -128,6 +128,9 @@ namespace stillhead
     job.limits = mLimits;
     job.terrainRmseM = readDistance( mValues, parameter::TERRAIN_RMSE, mUnits ).value_or( 0.0 );
     job.readingErrorPa = readPressure( mValues, parameter::READING_ERROR, mUnits ).value_or( 0.0 );
+    const double sagDepthM = readSagDepthM( mValues, mUnits );
+    if ( Destination( mValues, output::EXTREMES ).isAsked() )
+      job.sagDepthM = sagDepthM;
     job.specificWeightNPerM3 = mUnits.specificWeightNPerM3();
     job.threads = mTerrain.threads;
     try

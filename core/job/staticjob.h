@@ -37,6 +37,8 @@ namespace stillhead
       Limits limits;
       double terrainRmseM = 0.0;
       double readingErrorPa = 0.0; //!< ± at 95 %
+      std::optional<double>
+        sagDepthM; //!< summits and sags of mainlines are wanted, with so much fall or rise on both sides
       double specificWeightNPerM3 = 0.0;
       unsigned threads = 0; //!< 0: as many as the machine has cores; results do not depend on it
   };

@@ -61,7 +61,7 @@ namespace stillhead
         { field::LABEL, QT_TRANSLATE_NOOP( "Stillhead", "Label" ) },
       };
       static const Aliases extremes = {
-        { field::WHAT, QT_TRANSLATE_NOOP( "Stillhead", "Highest or lowest" ) },
+        { field::WHAT, QT_TRANSLATE_NOOP( "Stillhead", "What stands out" ) },
         { field::P, QT_TRANSLATE_NOOP( "Stillhead", "Pressure at rest, %1" ) },
         { field::Z, QT_TRANSLATE_NOOP( "Stillhead", "Pipe elevation, %2" ) },
         { field::PRESSURE_ZONE, QT_TRANSLATE_NOOP( "Stillhead", "Pressure zone" ) },
@@ -85,6 +85,12 @@ namespace stillhead
         { field::P_TO, QT_TRANSLATE_NOOP( "Stillhead", "Pressure to, %1" ) },
         { field::AREA, QT_TRANSLATE_NOOP( "Stillhead", "Area, square %2" ) },
       };
+      static const Aliases groundLimits = {
+        { field::WHAT, QT_TRANSLATE_NOOP( "Stillhead", "Ceiling or floor" ) },
+        { field::ELEVATION, QT_TRANSLATE_NOOP( "Stillhead", "Ground elevation, %2" ) },
+        { field::P, QT_TRANSLATE_NOOP( "Stillhead", "Pressure limit, %1" ) },
+        { field::LABEL, QT_TRANSLATE_NOOP( "Stillhead", "Label" ) },
+      };
       static const Aliases none;
       switch ( what )
       {
@@ -100,6 +106,8 @@ namespace stillhead
         return findings;
       case ResultLayer::BandAreas:
         return bandAreas;
+      case ResultLayer::GroundLimits:
+        return groundLimits;
       case ResultLayer::Surface:
         break;
       }

@@ -88,6 +88,9 @@ namespace stillhead
     case ResultLayer::BandAreas:
       styleBandAreas( *vector, style );
       break;
+    case ResultLayer::GroundLimits:
+      styleGroundLimits( *vector, style );
+      break;
     case ResultLayer::Surface:
       return;
     }

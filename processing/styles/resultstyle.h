@@ -41,7 +41,8 @@ namespace stillhead
     Extremes,
     Findings,
     Surface,
-    BandAreas
+    BandAreas,
+    GroundLimits
   };
 
   //! A band in plain words with its unit: `under 30 psi`, `65 to 80 psi`, `100 psi and over`.
@@ -57,6 +58,7 @@ namespace stillhead
   void styleFindings( QgsVectorLayer &layer, const ResultStyle &style );
   void styleSurface( QgsRasterLayer &layer, const ResultStyle &style );
   void styleBandAreas( QgsVectorLayer &layer, const ResultStyle &style );
+  void styleGroundLimits( QgsVectorLayer &layer, const ResultStyle &style );
 
   //! Gives \a layer the style of an output: renderer, labels, field aliases and legend.
   void styleResult( QgsMapLayer &layer, ResultLayer what, const ResultStyle &style );

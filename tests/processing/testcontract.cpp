@@ -118,7 +118,7 @@ void TestContract::isAsWritten()
       lines << fieldsOf(
         runAlgorithm( id, mSlope.parameters() ), { "SPANS", "NODES", "STRETCHES", "EXTREMES", "FINDINGS" } );
     if ( id == "pressuresurface" )
-      lines << fieldsOf( runAlgorithm( id, mSlope.surfaceParameters() ), { "BAND_AREAS" } );
+      lines << fieldsOf( runAlgorithm( id, mSlope.surfaceParameters() ), { "BAND_AREAS", "GROUND_LIMITS" } );
   }
   lines << QString() << "states";
   for ( int state = 0; state <= static_cast<int>( stillhead::State::WithinLimits ); ++state )

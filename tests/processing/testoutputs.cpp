@@ -157,7 +157,8 @@ void TestOutputs::cancelOfTheSurface()
   QTemporaryDir folder;
   const QVariantMap parameters { { "TERRAIN", mSlope.path( "slope.tif" ) }, { "SOURCE", place( 0, 0 ) },
     { "SOURCE_KIND", 1 }, { "SOURCE_VALUE", 150 }, { "SURFACE", folder.filePath( "surface.tif" ) },
-    { "BAND_AREAS", folder.filePath( "areas.gpkg" ) } };
+    { "BAND_AREAS", folder.filePath( "areas.gpkg" ) }, { "LEAST", 60 },
+    { "GROUND_LIMITS", folder.filePath( "limits.gpkg" ) } };
   Impatient impatient( percent );
   QVERIFY( !runAlgorithm( "pressuresurface", parameters, impatient ).ok );
   QCOMPARE( QDir( folder.path() ).entryList( QDir::Files ), QStringList() );
@@ -165,10 +166,13 @@ void TestOutputs::cancelOfTheSurface()
   QVERIFY( runAlgorithm( "pressuresurface", parameters ).ok );
   const QByteArray surface = contentOf( folder.filePath( "surface.tif" ) );
   const QByteArray areas = contentOf( folder.filePath( "areas.gpkg" ) );
+  const QByteArray limits = contentOf( folder.filePath( "limits.gpkg" ) );
+  QVERIFY( !limits.isEmpty() );
   Impatient again( percent );
   QVERIFY( !runAlgorithm( "pressuresurface", parameters, again ).ok );
   QCOMPARE( contentOf( folder.filePath( "surface.tif" ) ), surface );
   QCOMPARE( contentOf( folder.filePath( "areas.gpkg" ) ), areas );
+  QCOMPARE( contentOf( folder.filePath( "limits.gpkg" ) ), limits );
 }
 
 void TestOutputs::severalLayersInOneFile()

@@ -13,6 +13,7 @@
 #include <qgsrasterlayer.h>
 #include <qgsrastershader.h>
 #include <qgsrenderer.h>
+#include <qgsrulebasedlabeling.h>
 #include <qgssinglebandpseudocolorrenderer.h>
 #include <qgsvectorfilewriter.h>
 
@@ -30,6 +31,8 @@ class TestResultStyles : public QObject
     void legendEndsWithTheCaution();
     void limitsOfLateralsAreNamedWhereTheyDiffer();
     void findingsInTheLegendAreThoseThatAreThere();
+    void summitsAndSagsStandBelowTheWorstPlaces();
+    void ceilingAndFloorNameTheirLimits();
     void everyFieldHasAnAliasWithItsUnit();
     void surfaceBandsTakeTheirLowerLimit();
     void styleStaysInAGeoPackage();
@@ -141,6 +144,34 @@ void TestResultStyles::findingsInTheLegendAreThoseThatAreThere()
   styleFindings( *layer, mSample.style() );
   QCOMPARE(
     legendOf( *layer ), ( QStringList { QStringLiteral( "near miss" ), QStringLiteral( "crossing not joined" ) } ) );
+}
+
+void TestResultStyles::summitsAndSagsStandBelowTheWorstPlaces()
+{
+  const LayerPointer layer = mSample.extremes();
+  styleExtremes( *layer, mSample.style() );
+  const QStringList legend = legendOf( *layer );
+  QCOMPARE( legend.size(), 6 );
+  QVERIFY( layer->renderer()->usingSymbolLevels() );
+  QVERIFY( legend.at( 4 ).startsWith( QStringLiteral( "summit of a mainline" ) ) );
+  QVERIFY( legend.at( 5 ).startsWith( QStringLiteral( "sag of a mainline" ) ) );
+  const auto *labeling = dynamic_cast<const QgsRuleBasedLabeling *>( layer->labeling() );
+  QVERIFY( labeling );
+  const QgsRuleBasedLabeling::RuleList rules = labeling->rootRule()->children();
+  QCOMPARE( rules.size(), 2 );
+  QVERIFY( rules.at( 0 )->settings()->priority > rules.at( 1 )->settings()->priority );
+  QCOMPARE( rules.at( 0 )->minimumScale(), 0.0 );
+  QVERIFY( rules.at( 1 )->minimumScale() > 0.0 );
+}
+
+void TestResultStyles::ceilingAndFloorNameTheirLimits()
+{
+  const LayerPointer layer = mSample.groundLimits();
+  styleResult( *layer, ResultLayer::GroundLimits, mSample.style() );
+  QCOMPARE( legendOf( *layer ),
+    ( QStringList { QStringLiteral( "ceiling: higher ground has less than 30 psi (low case)" ),
+      QStringLiteral( "floor: lower ground has more than 80 psi (high case)" ) } ) );
+  QVERIFY( layer->labelsEnabled() );
 }
 
 void TestResultStyles::everyFieldHasAnAliasWithItsUnit()
