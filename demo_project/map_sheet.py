@@ -175,7 +175,8 @@ def fill_legend(legend, project):
     caution = next(index for index, text in enumerate(texts) if text.startswith("Pressure at rest. "))
     for begin, end in zip(headings, headings[1:] + [caution]):
         add_to_legend(legend, spans, texts[begin], lambda text, part=texts[begin + 1:end]: text in part)
-    add_to_legend(legend, layers["Worst places"], "Worst places", lambda text: text.endswith("stretch"))
+    add_to_legend(legend, layers["Worst places"], "Worst places", 
+                  lambda text: text.endswith("stretch") or text.startswith(("summit", "sag")))
     add_to_legend(legend, layers["Stretches over or short"], "", lambda text: True,
                   QSizeF(11.0, 1.2))  # its outlines stand off what they surround
     add_to_legend(legend, layers["Findings"], "Findings", lambda text: True)

@@ -182,6 +182,8 @@ namespace stillhead
     {
       throw QgsProcessingException( refusalText( refusal, refusalNames(), mSources.front().reachM, mUnits ) );
     }
+    // Writing needs the memory more.
+    mTerrain.cache->clear();
     logSources();
     logFindings();
     warnOfElevations();

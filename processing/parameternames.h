@@ -44,6 +44,7 @@ namespace stillhead::parameter
   inline const QString JOIN_CROSSINGS = QStringLiteral( "JOIN_CROSSINGS" );
   inline const QString LEAST = QStringLiteral( "LEAST" );
   inline const QString MOST = QStringLiteral( "MOST" );
+  inline const QString SAG_DEPTH = QStringLiteral( "SAG_DEPTH" );
   inline const QString LATERAL_LEAST = QStringLiteral( "LATERAL_LEAST" );
   inline const QString LATERAL_MOST = QStringLiteral( "LATERAL_MOST" );
   inline const QString BANDS = QStringLiteral( "BANDS" );
@@ -71,6 +72,7 @@ namespace stillhead::output
   inline const QString PROVEN = QStringLiteral( "PROVEN" );
   inline const QString LENGTH_NOT_MENDED = QStringLiteral( "LENGTH_NOT_MENDED" );
   inline const QString BAND_AREAS = QStringLiteral( "BAND_AREAS" );
+  inline const QString GROUND_LIMITS = QStringLiteral( "GROUND_LIMITS" );
   inline const QString SUMMARY = QStringLiteral( "SUMMARY" );
   inline const QString SPAN_COUNT = QStringLiteral( "SPAN_COUNT" );
   inline const QString NODE_COUNT = QStringLiteral( "NODE_COUNT" );
@@ -190,4 +192,8 @@ namespace stillhead::word
   inline const QString STRETCH_SHORT = QStringLiteral( "short" );
   inline const QString HIGHEST = QStringLiteral( "highest" );
   inline const QString LOWEST = QStringLiteral( "lowest" );
+  inline const QString SUMMIT = QStringLiteral( "summit" );
+  inline const QString SAG = QStringLiteral( "sag" );
+  inline const QString CEILING = QStringLiteral( "ceiling" );
+  inline const QString FLOOR = QStringLiteral( "floor" );
 } // namespace stillhead::word

@@ -59,6 +59,8 @@ namespace stillhead
       new QgsProcessingParameterRasterDestination( output::SURFACE, Text::tr( "Static pressure surface" ) ) );
     addParameter( new QgsProcessingParameterFeatureSink(
       output::BAND_AREAS, Text::tr( "Areas of the pressure bands" ), compat::Source::Polygon, QVariant(), true ) );
+    addParameter( new QgsProcessingParameterFeatureSink( output::GROUND_LIMITS,
+      Text::tr( "Lines of ground too high and too low" ), compat::Source::Line, QVariant(), true ) );
 
     addNumberOutputs( {
       { output::STATIC_LEVEL_HIGH, Text::tr( "Elevation of the static level, high case" ) },

@@ -5,6 +5,7 @@
 #include "core/terrain/terrainreader.h"
 #include "processing/bandareaoutput.h"
 #include "processing/feedbackmonitor.h"
+#include "processing/groundlimitoutput.h"
 #include "processing/parameternames.h"
 #include "processing/reading/areareader.h"
 #include "processing/reading/limitsreader.h"
@@ -23,15 +24,17 @@ namespace stillhead
   {
 
     // How the progress bar is shared out.
-    constexpr double AREAS_TO = 45.0;
+    constexpr double AREAS_SHARE = 35.0;
+    constexpr double LIMITS_SHARE = 20.0;
     constexpr double SURFACE_TO = 92.0;
+    constexpr double AREAS_WRITTEN = 96.0;
     constexpr double WRITE_TO = 99.0;
 
   } // namespace
 
   QStringList pressureSurfaceLayers()
   {
-    return { output::SURFACE, output::BAND_AREAS };
+    return { output::SURFACE, output::BAND_AREAS, output::GROUND_LIMITS };
   }
 
   PressureSurfaceRun::PressureSurfaceRun(
@@ -98,50 +101,63 @@ namespace stillhead
     results.insert( output::SURFACE, surface.id );
   }
 
-  void PressureSurfaceRun::writeAreas( OutputSet &outputs, RowSpool &areas, QVariantMap &results )
+  void PressureSurfaceRun::writeRows(
+    OutputSet &outputs, const RowLayer &layer, double fromPercent, double toPercent, QVariantMap &results )
   {
-    FeedbackMonitor monitor( &mFeedback, SURFACE_TO, WRITE_TO );
-    WrittenLayer layer;
-    layer.id = outputs.writeSpool(
-      output::BAND_AREAS, bandAreaFields(), compat::WkbType::Polygon, mTerrain.crs, areas, monitor );
-    layer.what = ResultLayer::BandAreas;
-    layer.metadata =
-      resultMetadata( facts(), mValues.definition( output::BAND_AREAS )->description(), layerNameOf( layer.id ) );
-    layer.geoPackage = outputs.geoPackageOf( output::BAND_AREAS );
-    layer.fields = bandAreaFields();
-    layer.type = compat::WkbType::Polygon;
-    finishOnLoading( layer, mStyle, mValues.context() );
-    mWritten.push_back( layer );
-    results.insert( output::BAND_AREAS, layer.id );
+    FeedbackMonitor monitor( &mFeedback, fromPercent, toPercent );
+    WrittenLayer written;
+    written.id = outputs.writeSpool( layer.output, layer.fields, layer.type, mTerrain.crs, layer.rows, monitor );
+    written.what = layer.what;
+    written.metadata =
+      resultMetadata( facts(), mValues.definition( layer.output )->description(), layerNameOf( written.id ) );
+    written.geoPackage = outputs.geoPackageOf( layer.output );
+    written.fields = layer.fields;
+    written.type = layer.type;
+    finishOnLoading( written, mStyle, mValues.context() );
+    mWritten.push_back( written );
+    results.insert( layer.output, written.id );
   }
 
   QVariantMap PressureSurfaceRun::write()
   {
     OutputSet outputs( mValues, pressureSurfaceLayers() );
     const bool wantsAreas = outputs.isAsked( output::BAND_AREAS );
+    const bool wantsLimits = outputs.isAsked( output::GROUND_LIMITS );
     RowSpool areas;
+    RowSpool limits;
+    double done = 0.0;
     if ( wantsAreas )
     {
-      FeedbackMonitor monitor( &mFeedback, 0.0, AREAS_TO );
+      FeedbackMonitor monitor( &mFeedback, done, done + AREAS_SHARE );
       collectBandAreas(
         areas, mInput, mTerrain, mLimits, mStyle, mUnits, mValues.context().transformContext(), monitor );
+      done += AREAS_SHARE;
+    }
+    if ( wantsLimits )
+    {
+      FeedbackMonitor monitor( &mFeedback, done, done + LIMITS_SHARE );
+      collectGroundLimits( limits, mInput, mTerrain, mLimits, mUnits, monitor );
+      done += LIMITS_SHARE;
     }
     // From here on a cancel may come too late: the surface takes an earlier one's place when it is whole.
     QVariantMap results;
-    writeSurface( outputs, wantsAreas ? AREAS_TO : 0.0, results );
+    writeSurface( outputs, done, results );
     if ( wantsAreas )
-      writeAreas( outputs, areas, results );
+      writeRows( outputs,
+        { output::BAND_AREAS, ResultLayer::BandAreas, bandAreaFields(), compat::WkbType::Polygon, areas }, SURFACE_TO,
+        AREAS_WRITTEN, results );
+    if ( wantsLimits )
+      writeRows( outputs,
+        { output::GROUND_LIMITS, ResultLayer::GroundLimits, groundLimitFields(), compat::WkbType::LineString, limits },
+        AREAS_WRITTEN, WRITE_TO, results );
     outputs.commit();
     mFeedback.setProgress( 100.0 );
 
-    const RestingWater high = restingWater( mInput.levels.highM, mInput.coverM, mUnits );
-    const RestingWater low = restingWater( mInput.levels.lowM, mInput.coverM, mUnits );
+    const GroundLimits grounds = groundLimits( mInput, mLimits, mUnits );
     results.insert( output::STATIC_LEVEL_HIGH, mUnits.lengthValue( mInput.levels.highM ) );
     results.insert( output::STATIC_LEVEL_LOW, mUnits.lengthValue( mInput.levels.lowM ) );
-    results.insert(
-      output::GROUND_TOO_HIGH, mUnits.lengthValue( low.groundWhereM( mUnits.pressure( mLimits.leastPa ) ) ) );
-    results.insert(
-      output::GROUND_TOO_LOW, mUnits.lengthValue( high.groundWhereM( mUnits.pressure( mLimits.mostPa ) ) ) );
+    results.insert( output::GROUND_TOO_HIGH, mUnits.lengthValue( grounds.ceilingM ) );
+    results.insert( output::GROUND_TOO_LOW, mUnits.lengthValue( grounds.floorM ) );
     return results;
   }
 

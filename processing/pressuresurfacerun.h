@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// One run of the pressure surface: from parameters to the raster, the band areas and the grounds that are too high or low.
+// One run of the pressure surface: from parameters to the raster, the band areas and the grounds that are too high or low,
+// as numbers and as lines.
 #pragma once
 
 #include "processing/displayunits.h"
@@ -39,9 +40,20 @@ namespace stillhead
       const ResultStyle &style() const { return mStyle; }
 
     private:
+      //! An output whose rows were made beforehand.
+      struct RowLayer
+      {
+          QString output;
+          ResultLayer what;
+          QgsFields fields;
+          compat::WkbType type;
+          RowSpool &rows;
+      };
+
       RunFacts facts() const;
       void writeSurface( OutputSet &outputs, double fromPercent, QVariantMap &results );
-      void writeAreas( OutputSet &outputs, RowSpool &areas, QVariantMap &results );
+      void writeRows(
+        OutputSet &outputs, const RowLayer &layer, double fromPercent, double toPercent, QVariantMap &results );
 
       const ParameterValues &mValues;
       Terrain &mTerrain;

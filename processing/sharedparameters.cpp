@@ -255,6 +255,17 @@ namespace stillhead
     return list;
   }
 
+  ParameterList sagParameter()
+  {
+    ParameterList list;
+    add( list, optionalNumber( parameter::SAG_DEPTH, Text::tr( "Depth of summits and sags" ) ),
+      Text::tr(
+        "Fall or rise of a mainline in the length unit that makes a high or low place worth an air valve, a "
+        "drain or a blow-out point: it must fall (rise) by that much on two sides before it goes higher (lower) "
+        "or ends. Unset: 2 ft or 0.5 m; 0: a millimetre." ) );
+    return list;
+  }
+
   ParameterList areaParameter()
   {
     ParameterList list;

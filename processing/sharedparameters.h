@@ -47,6 +47,9 @@ namespace stillhead
   //! LATERAL_LEAST, LATERAL_MOST, TERRAIN_RMSE and READING_ERROR.
   ParameterList judgementParameters();
 
+  //! SAG_DEPTH.
+  ParameterList sagParameter();
+
   //! AREA to stay within.
   ParameterList areaParameter();
 

@@ -46,6 +46,7 @@ namespace stillhead
   void StaticPressureAlgorithm::initAlgorithm( const QVariantMap & )
   {
     addNetworkParameters();
+    addParameters( sagParameter() );
     addParameters( failedOpenParameter() );
 
     addSink( output::SPANS, Text::tr( "Pipe by static pressure" ), static_cast<int>( compat::Source::Line ), false );

@@ -3,6 +3,7 @@
 #include "processing/staticpressurerun.h"
 
 #include "processing/parameternames.h"
+#include "processing/reading/limitsreader.h"
 #include "processing/text/summarytext.h"
 #include "processing/text/text.h"
 
@@ -26,6 +27,9 @@ namespace stillhead
     StaticJob own = job;
     own.failedOpen = static_cast<FailedOpen>( mValues.choice( parameter::FAILED_OPEN ) );
     own.schedule = isAsked( output::SCHEDULE );
+    const double sagDepthM = readSagDepthM( mValues, mUnits );
+    if ( isAsked( output::EXTREMES ) )
+      own.sagDepthM = sagDepthM;
     mResult = solveStatics( own, monitor );
     if ( own.schedule )
       mSchedule = scheduleRows( own, mResult );

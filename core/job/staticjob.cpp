@@ -7,6 +7,7 @@
 #include "core/job/zonefeeding.h"
 #include "core/judgement/judge.h"
 #include "core/judgement/linejudge.h"
+#include "core/judgement/sags.h"
 #include "core/judgement/stretches.h"
 #include "core/judgement/summits.h"
 #include "core/profile/profilebuilder.h"
@@ -148,7 +149,7 @@ namespace stillhead
           const LineParts parts( mResult.network, mResult.drawing.lines.size() );
           const CutElevations cuts = cutElevationsOf( mResult.zones, mJob.limits, mJob.specificWeightNPerM3 );
           const LineJudgeInput input { mResult.drawing, mResult.network, parts, mResult.zoneMap, mResult.zones,
-            mJob.limits, mJob.specificWeightNPerM3 };
+            mJob.limits, mJob.specificWeightNPerM3, sagDepthM() };
           const std::vector<std::size_t> order = linesByTile();
           std::vector<LineOutcome> outcomes( order.size() );
           std::vector<double> nodeElevationsM( mResult.network.nodes.size(), NO_ELEVATION );
@@ -163,6 +164,11 @@ namespace stillhead
             } );
           gather( outcomes );
           judgeNodes( nodeElevationsM );
+        }
+
+        std::optional<double> sagDepthM() const
+        {
+          return mJob.sagDepthM ? std::optional<double>( countedSagDepthM( *mJob.sagDepthM ) ) : std::nullopt;
         }
 
         void gather( std::vector<LineOutcome> &outcomes )
@@ -189,6 +195,13 @@ namespace stillhead
               mResult.pieces.push_back( piece );
             }
             mResult.vertices.insert( mResult.vertices.end(), outcome.vertices.begin(), outcome.vertices.end() );
+            const std::size_t firstTurn = mTurns.turns.size();
+            for ( TurnRun &run : outcome.turns.runs )
+            {
+              run.first += firstTurn;
+              mTurns.runs.push_back( run );
+            }
+            mTurns.turns.insert( mTurns.turns.end(), outcome.turns.turns.begin(), outcome.turns.turns.end() );
             outcome = {};
           }
         }
@@ -221,6 +234,12 @@ namespace stillhead
           stopIfCancelled( mMonitor );
           mResult.stretches = findStretches( graph, mResult.drawing, *mJob.drawing, mResult.zones, mJob.limits );
           mResult.extremes = findExtremes( graph, mResult.stretches, mResult.zones );
+          if ( mJob.sagDepthM )
+          {
+            const std::vector<Extreme> places = findSummitsAndSags(
+              graph, mResult.drawing, mTurns, *sagDepthM(), mResult.zones, mJob.specificWeightNPerM3 );
+            mResult.extremes.insert( mResult.extremes.end(), places.begin(), places.end() );
+          }
           mResult.totals = totalsOf( mResult.pieces );
           mMonitor.progress( 1.0 );
         }
@@ -241,6 +260,7 @@ namespace stillhead
         Monitor &mMonitor;
         StaticResult mResult;
         std::vector<Piece> mNodePieces;
+        Turns mTurns;
     };
   } // namespace
 

@@ -52,6 +52,8 @@ namespace stillhead
       double leastDropPa = 0.0;    //!< below this difference of low inlet over set a regulator is short of differential
       FailedOpen failedOpen = FailedOpen::NotAsked;
       bool schedule = false; //!< whether StaticResult::deviceFailures is asked for, as scheduleOf() needs it
+      std::optional<double>
+        sagDepthM; //!< summits and sags of mainlines are wanted, with so much fall or rise on both sides
       double specificWeightNPerM3 = 0.0;
       unsigned threads = 0; //!< 0: as many as the machine has cores; results do not depend on it
   };

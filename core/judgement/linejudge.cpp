@@ -66,7 +66,11 @@ namespace stillhead
     mBuilder.build( line, mProfile );
     LineOutcome outcome;
     for ( std::size_t span = mInput.parts.firstSpan[number]; span < mInput.parts.firstSpan[number + 1]; ++span )
+    {
       judgeSpan( line, static_cast<int>( span ), outcome );
+      if ( mInput.sagDepthM && line.role == Role::Mainline )
+        findTurns( line, static_cast<int>( span ), outcome.turns );
+    }
     for ( std::size_t i = mInput.parts.firstNode[number]; i < mInput.parts.firstNode[number + 1]; ++i )
     {
       const std::size_t node = static_cast<std::size_t>( mInput.parts.nodes[i] );
@@ -97,6 +101,15 @@ namespace stillhead
       piece.vertexCount = static_cast<unsigned>( outcome.vertices.size() ) - piece.firstVertex;
       outcome.pieces.push_back( piece );
     }
+  }
+
+  void LineJudge::findTurns( const CanonicalLine &line, int span, Turns &turns ) const
+  {
+    const auto goesBefore = [this, &line]( double alongM, double otherAlongM ) {
+      return mInput.drawing.placeAt( line, alongM ) < mInput.drawing.placeAt( line, otherAlongM );
+    };
+    appendTurns(
+      mProfile, span, mInput.network.spans[static_cast<std::size_t>( span )], *mInput.sagDepthM, goesBefore, turns );
   }
 
 } // namespace stillhead

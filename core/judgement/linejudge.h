@@ -7,8 +7,10 @@
 #include "core/network/network.h"
 #include "core/profile/profilebuilder.h"
 #include "core/profile/simplify.h"
+#include "core/profile/turns.h"
 
 #include <array>
+#include <optional>
 #include <utility>
 #include <vector>
 
@@ -35,6 +37,7 @@ namespace stillhead
       const std::vector<Zone> &zones;
       const Limits &limits;
       double specificWeightNPerM3;
+      std::optional<double> sagDepthM; //!< turns of mainlines are wanted, rises and falls below it left out
   };
 
   //! Results of one line.
@@ -42,6 +45,7 @@ namespace stillhead
   {
       std::vector<Piece> pieces; //!< firstVertex counts from the line's own first vertex
       std::vector<ProfileVertex> vertices;
+      Turns turns;
       bool anyElevation = false;
   };
 
@@ -72,6 +76,7 @@ namespace stillhead
       Cutter mCutter;
 
       void judgeSpan( const CanonicalLine &line, int span, LineOutcome &outcome );
+      void findTurns( const CanonicalLine &line, int span, Turns &turns ) const;
   };
 
 } // namespace stillhead

@@ -1,5 +1,5 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Where to act: stretches (connected pipe that is over, or that is short) and the worst places.
+// Where to act: stretches (connected pipe that is over, or that is short), the worst places, summits and sags.
 #pragma once
 
 #include <vector>
@@ -22,16 +22,25 @@ namespace stillhead
       bool closeCall = false; //!< the worst pressure lies within its doubt of the limit
   };
 
-  //! A worst place: of a stretch, or of a pressure zone.
+  //! What a place stands out by.
+  enum class ExtremeKind
+  {
+    Highest, //!< highest pressure, high case
+    Lowest,  //!< lowest pressure, low case
+    Summit,  //!< high place of a mainline (its pressure: low case)
+    Sag      //!< low place of a mainline (its pressure: high case)
+  };
+
+  //! A worst place, of a stretch or of a pressure zone, or a summit or sag. Pressure is NaN where no water comes.
   struct Extreme
   {
-      bool highest = false; //!< highest pressure (high case), else lowest (low case)
+      ExtremeKind kind = ExtremeKind::Lowest;
       int piece = -1;
       double alongM = 0.0; //!< along the piece's canonical line
       double pressurePa = 0.0;
       double elevationM = 0.0;
       int zone = -1;
-      int stretch = -1; //!< −1: of the zone
+      int stretch = -1; //!< −1: of the zone, or a summit or sag
   };
 
 } // namespace stillhead

@@ -99,7 +99,7 @@ namespace stillhead
     Extreme extremeOf( const Piece &piece, int number, bool highest )
     {
       Extreme extreme;
-      extreme.highest = highest;
+      extreme.kind = highest ? ExtremeKind::Highest : ExtremeKind::Lowest;
       extreme.piece = number;
       extreme.alongM = highest ? piece.lowestAtM : piece.highestAtM;
       extreme.pressurePa = highest ? piece.pressureHighPa : piece.pressureLowPa;

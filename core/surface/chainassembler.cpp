@@ -30,6 +30,7 @@ namespace stillhead
       if ( first == second )
       {
         mRings.push_back( mChains[first].take() );
+        mOpenVertices -= mRings.back().size();
         release( first );
       }
       else
@@ -42,6 +43,7 @@ namespace stillhead
       const std::size_t chain = ending->second;
       mByLast.erase( ending );
       mChains[chain].after.push_back( to.pixel );
+      ++mOpenVertices;
       mChains[chain].lastKey = to.key;
       mByLast.emplace( to.key, chain );
     }
@@ -50,6 +52,7 @@ namespace stillhead
       const std::size_t chain = beginning->second;
       mByFirst.erase( beginning );
       mChains[chain].before.push_back( from.pixel );
+      ++mOpenVertices;
       mChains[chain].firstKey = from.key;
       mByFirst.emplace( from.key, chain );
     }
@@ -59,6 +62,7 @@ namespace stillhead
       mChains[chain].firstKey = from.key;
       mChains[chain].lastKey = to.key;
       mChains[chain].after = { from.pixel, to.pixel };
+      mOpenVertices += 2;
       mByFirst.emplace( from.key, chain );
       mByLast.emplace( to.key, chain );
     }
@@ -120,6 +124,7 @@ namespace stillhead
     mFree.clear();
     mByFirst.clear();
     mByLast.clear();
+    mOpenVertices = 0;
     return lines;
   }
 

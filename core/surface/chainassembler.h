@@ -24,6 +24,9 @@ namespace stillhead
       //! What is left open, from the top; afterwards the assembler is empty.
       std::vector<std::vector<TerrainPoint>> takeLines();
 
+      //! Vertices held in lines and rings that are still open.
+      std::size_t openVertices() const { return mOpenVertices; }
+
     private:
       //! Vertices before the first step that arrived (backwards), and from it on.
       struct Chain
@@ -46,6 +49,7 @@ namespace stillhead
       std::unordered_map<std::uint64_t, std::size_t> mByFirst;
       std::unordered_map<std::uint64_t, std::size_t> mByLast;
       std::vector<std::vector<TerrainPoint>> mRings;
+      std::size_t mOpenVertices = 0;
   };
 
 } // namespace stillhead

@@ -1,13 +1,12 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// The same tracing as for the band areas, so that the lines and the areas' edges fall together.
+// Rows are read on several threads and traced on one; lines go on as they close, so that only open ones are held.
 #include "core/surface/groundlines.h"
 
 #include "core/surface/chainassembler.h"
-#include "core/surface/fieldtracer.h"
+#include "core/surface/groundtracer.h"
 #include "core/surface/rowstream.h"
 
 #include <algorithm>
-#include <limits>
 #include <numeric>
 
 namespace stillhead
@@ -15,88 +14,110 @@ namespace stillhead
 
   namespace
   {
-
-    class Lines : public TraceSink
+    //! Strings the steps of all elevations and hands out lines on the map.
+    class LineBuilder
     {
       public:
-        explicit Lines( std::size_t levels )
-          : mChains( levels )
+        LineBuilder( const RasterGrid &grid, std::vector<std::size_t> order, const TakeGroundLine &take )
+          : mGrid( grid )
+          , mOrder( std::move( order ) )
+          , mTake( take )
+          , mChains( mOrder.size() )
         {
+          // Among pixels, higher ground lies on the positive side, which is the right one on maps whose rows run southwards.
+          const std::array<double, 6> &g = grid.geoTransform();
+          mIsMirrored = g[1] * g[5] - g[2] * g[4] < 0.0;
         }
 
-        void onLevel( int level, const TraceVertex &from, const TraceVertex &to ) override
+        void add( int level, const TraceVertex &from, const TraceVertex &to )
         {
           mChains[static_cast<std::size_t>( level )].add( from, to );
         }
 
-        void onBorder( int, const TraceVertex &, const TraceVertex & ) override {}
+        std::size_t openVertices() const
+        {
+          return std::accumulate( mChains.begin(), mChains.end(), std::size_t( 0 ),
+            []( std::size_t sum, const ChainAssembler &chains ) { return sum + chains.openVertices(); } );
+        }
 
-        std::vector<ChainAssembler> &chains() { return mChains; }
+        void handRings()
+        {
+          for ( std::size_t level = 0; level < mChains.size(); ++level )
+          {
+            for ( std::vector<TerrainPoint> &ring : mChains[level].takeRings() )
+            {
+              ring.push_back( ring.front() );
+              hand( level, ring );
+            }
+          }
+        }
+
+        void handLines()
+        {
+          for ( std::size_t level = 0; level < mChains.size(); ++level )
+          {
+            for ( const std::vector<TerrainPoint> &line : mChains[level].takeLines() )
+              hand( level, line );
+          }
+        }
 
       private:
-        std::vector<ChainAssembler> mChains;
-    };
+        void hand( std::size_t level, const std::vector<TerrainPoint> &vertices ) const
+        {
+          std::vector<TerrainPoint> line;
+          line.reserve( vertices.size() );
+          for ( std::size_t i = 0; i < vertices.size(); ++i )
+          {
+            // Through a cell centre that has the very elevation a line comes by every side that meets there.
+            if ( i == 0 || vertices[i].x != vertices[i - 1].x || vertices[i].y != vertices[i - 1].y )
+              line.push_back( mGrid.toMap( vertices[i] ) );
+          }
+          if ( line.size() < 2 )
+            return;
+          if ( mIsMirrored )
+            std::reverse( line.begin(), line.end() );
+          mTake( mOrder[level], line );
+        }
 
+        const RasterGrid &mGrid;
+        const std::vector<std::size_t> mOrder; //!< the caller's index of every level
+        const TakeGroundLine &mTake;
+        std::vector<ChainAssembler> mChains;
+        bool mIsMirrored = false;
+    };
   } // namespace
 
-  void traceGroundLines( const ElevationSource &terrain, const std::vector<double> &elevationsM, const AreaMask *area,
-    unsigned threads, Monitor &monitor, double from, double to, const TakeGroundLine &take )
+  void traceGroundLines( const ElevationSource &terrain, const GroundLineRequest &request, Monitor &monitor,
+    double from, double to, const TakeGroundLine &take )
   {
     const RasterGrid &grid = terrain.grid();
-    const std::size_t columns = static_cast<std::size_t>( grid.columns() );
-    std::vector<std::size_t> order( elevationsM.size() );
+    std::vector<std::size_t> order( request.elevationsM.size() );
     std::iota( order.begin(), order.end(), std::size_t( 0 ) );
     std::sort( order.begin(), order.end(),
-      [&elevationsM]( std::size_t a, std::size_t b ) { return elevationsM[a] < elevationsM[b]; } );
+      [&]( std::size_t a, std::size_t b ) { return request.elevationsM[a] < request.elevationsM[b]; } );
     std::vector<double> rising;
     for ( const std::size_t i : order )
-      rising.push_back( elevationsM[i] );
+      rising.push_back( request.elevationsM[i] );
 
-    Lines lines( rising.size() );
-    FieldTracer tracer( grid.columns(), rising, lines );
-    // Among pixels, higher ground lies on the positive side, which is the right one on maps whose rows run southwards.
-    const std::array<double, 6> &g = grid.geoTransform();
-    const bool isMirrored = g[1] * g[5] - g[2] * g[4] < 0.0;
-    const auto hand = [&]( std::size_t level, const std::vector<TerrainPoint> &vertices, bool isClosed ) {
-      std::vector<TerrainPoint> line;
-      for ( const TerrainPoint &vertex : vertices )
-        line.push_back( grid.toMap( vertex ) );
-      if ( isClosed )
-        line.push_back( line.front() );
-      if ( isMirrored )
-        std::reverse( line.begin(), line.end() );
-      take( order[level], line );
-    };
-    const auto handRings = [&] {
-      for ( std::size_t level = 0; level < rising.size(); ++level )
-      {
-        for ( const std::vector<TerrainPoint> &ring : lines.chains()[level].takeRings() )
-          hand( level, ring, true );
-      }
-    };
-
+    LineBuilder lines( grid, order, take );
+    GroundTracer tracer( grid.columns(), rising,
+      [&lines]( int level, const TraceVertex &a, const TraceVertex &b ) { lines.add( level, a, b ); } );
+    std::vector<unsigned char> inside( request.area ? static_cast<std::size_t>( grid.columns() ) : 0 );
     RowStream stream;
-    stream.threads = threads;
-    stream.convert = [&]( int row, double *values ) {
-      if ( !area )
-        return;
-      std::vector<unsigned char> inside( columns );
-      area->markRow( row, 0, grid.columns(), inside.data() );
-      for ( std::size_t i = 0; i < columns; ++i )
-        values[i] = inside[i] ? values[i] : std::numeric_limits<double>::quiet_NaN();
-    };
-    stream.take = [&]( int, const double *values ) {
-      tracer.addRow( values );
-      handRings();
+    stream.threads = request.threads;
+    stream.convert = []( int, double * ) {};
+    stream.take = [&]( int row, const double *groundsM ) {
+      if ( request.area )
+        request.area->markRow( row, 0, grid.columns(), inside.data() );
+      tracer.addRow( groundsM, request.area ? inside.data() : nullptr );
+      lines.handRings();
+      if ( lines.openVertices() > request.mostOpenVertices )
+        lines.handLines();
     };
     streamRows( terrain, stream, monitor, from, to );
     tracer.finish();
-    handRings();
-    for ( std::size_t level = 0; level < rising.size(); ++level )
-    {
-      for ( const std::vector<TerrainPoint> &line : lines.chains()[level].takeLines() )
-        hand( level, line, false );
-    }
+    lines.handRings();
+    lines.handLines();
   }
 
 } // namespace stillhead

@@ -107,6 +107,14 @@ namespace stillhead
     return tile;
   }
 
+  void TileCache::clear()
+  {
+    const std::lock_guard<std::mutex> lock( mMutex );
+    mSlots.clear();
+    mLoadedByUse.clear();
+    mHeldBytes = 0;
+  }
+
   TileCache::TilePointer TileCache::load( long long key ) const
   {
     auto tile = std::make_shared<ElevationTile>();

@@ -77,6 +77,9 @@ namespace stillhead
        */
       std::shared_ptr<const ElevationTile> tileAt( int column, int row );
 
+      //! Lets go of all tiles. Not while a reader works.
+      void clear();
+
     private:
       using TilePointer = std::shared_ptr<const ElevationTile>;
 

@@ -44,4 +44,10 @@ namespace stillhead
     return units.metres( *given );
   }
 
+  double readSagDepthM( const ParameterValues &values, const DisplayUnits &units )
+  {
+    const double unset = units.lengthUnit() == LengthUnit::Foot ? 2.0 : 0.5;
+    return readDistance( values, parameter::SAG_DEPTH, units ).value_or( units.metres( unset ) );
+  }
+
 } // namespace stillhead

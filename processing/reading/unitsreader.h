@@ -32,4 +32,10 @@ namespace stillhead
    */
   std::optional<double> readDistance( const ParameterValues &values, const QString &name, const DisplayUnits &units );
 
+  /**
+   * SAG_DEPTH in metres: how far a mainline falls or rises on both sides of a summit or sag.
+   * \throws QgsProcessingException where it is negative
+   */
+  double readSagDepthM( const ParameterValues &values, const DisplayUnits &units );
+
 } // namespace stillhead

@@ -67,7 +67,7 @@ namespace stillhead
         { field::LABEL, QT_TRANSLATE_NOOP( "Stillhead", "Label" ) },
       };
       static const Aliases extremes = {
-        { field::WHAT, QT_TRANSLATE_NOOP( "Stillhead", "Highest or lowest" ) },
+        { field::WHAT, QT_TRANSLATE_NOOP( "Stillhead", "What stands out" ) },
         { field::P, QT_TRANSLATE_NOOP( "Stillhead", "Pressure at rest, %1" ) },
         { field::Z, QT_TRANSLATE_NOOP( "Stillhead", "Pipe elevation, %2" ) },
         { field::PRESSURE_ZONE, QT_TRANSLATE_NOOP( "Stillhead", "Pressure zone" ) },
@@ -124,6 +124,12 @@ namespace stillhead
         { field::PLACE_TO, QT_TRANSLATE_NOOP( "Stillhead", "May stand to, %2" ) },
         { field::WHY, QT_TRANSLATE_NOOP( "Stillhead", "Why" ) },
       };
+      static const Aliases groundLimits = {
+        { field::WHAT, QT_TRANSLATE_NOOP( "Stillhead", "Ceiling or floor" ) },
+        { field::ELEVATION, QT_TRANSLATE_NOOP( "Stillhead", "Ground elevation, %2" ) },
+        { field::P, QT_TRANSLATE_NOOP( "Stillhead", "Pressure limit, %1" ) },
+        { field::LABEL, QT_TRANSLATE_NOOP( "Stillhead", "Label" ) },
+      };
       static const Aliases none;
       switch ( what )
       {
@@ -141,6 +147,8 @@ namespace stillhead
         return bandAreas;
       case ResultLayer::Regulators:
         return regulators;
+      case ResultLayer::GroundLimits:
+        return groundLimits;
       case ResultLayer::Surface:
         break;
       }

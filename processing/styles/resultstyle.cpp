@@ -91,6 +91,9 @@ namespace stillhead
     case ResultLayer::Regulators:
       styleRegulators( *vector, style );
       break;
+    case ResultLayer::GroundLimits:
+      styleGroundLimits( *vector, style );
+      break;
     case ResultLayer::Surface:
       return;
     }

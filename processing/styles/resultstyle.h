@@ -42,6 +42,7 @@ namespace stillhead
     Findings,
     Surface,
     BandAreas,
+    GroundLimits,
     Regulators
   };
 
@@ -59,6 +60,7 @@ namespace stillhead
   void styleSurface( QgsRasterLayer &layer, const ResultStyle &style );
   void styleRegulators( QgsVectorLayer &layer, const ResultStyle &style );
   void styleBandAreas( QgsVectorLayer &layer, const ResultStyle &style );
+  void styleGroundLimits( QgsVectorLayer &layer, const ResultStyle &style );
 
   //! Gives \a layer the style of an output: renderer, labels, field aliases and legend.
   void styleResult( QgsMapLayer &layer, ResultLayer what, const ResultStyle &style );

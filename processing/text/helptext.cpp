@@ -45,10 +45,21 @@ namespace stillhead
       Text::tr(
         "Outputs: SPANS, the pipe cut exactly where a pressure limit, the static level or the edge of the terrain is "
         "met, with pressures, band and state; NODES, where pipes end or meet; STRETCHES, connected pipe that is over "
-        "or short; EXTREMES, the worst place of each stretch and zone; FINDINGS, what to look at in the drawing; "
-        "SCHEDULE, the devices with what they hold and serve; SURFACE, the same static level as a raster (off by "
-        "default); SUMMARY, the figures in plain sentences; and "
+        "or short; EXTREMES, the worst place of each stretch and zone, then the summits and sags of the mainlines, "
+        "places for air valves, drains and blow-out points; FINDINGS, what to look at in the drawing; SCHEDULE, the "
+        "devices with what they hold and serve; SURFACE, the same static level as a raster (off by default); SUMMARY, "
+        "the "
+        "figures in plain sentences; and "
         "numbers for use in models." ),
+      Text::tr(
+        "A summit is a place from which no way along mainlines leads to higher pipe without falling by the depth of "
+        "summits and sags first, and from which the pipe falls by that depth on two sides at least; a sag is the same "
+        "upside down. Mainlines count as joined pipe, wherever drawn features begin and end, and every mainline leg at "
+        "a "
+        "joint counts; laterals do not. A dead end is neither, and pipe without terrain ends the way. Of a level top "
+        "one "
+        "place stands. The pressure of a summit is that of the low case, the pressure of a sag that of the high "
+        "case." ),
       unitsParagraph(),
       Text::tr(
         "Limits: a regulator holds its lock-up (set plus rise) in the high case and its setting in the low case, as if "
@@ -70,9 +81,11 @@ namespace stillhead
         "and, if known, its lowest; a depth of cover; optionally an area to stay within." ),
       Text::tr(
         "Outputs: SURFACE, a raster on the terrain's own grid (band 1: high case; band 2: low case, only where a low "
-        "value is given); BAND_AREAS, polygons of the pressure bands of the high case; STATIC_LEVEL_HIGH and "
-        "STATIC_LEVEL_LOW; GROUND_TOO_HIGH, the ground elevation above which the lowest acceptable pressure is not "
-        "met (low case); GROUND_TOO_LOW, the one below which the highest is passed (high case)." ),
+        "value is given); BAND_AREAS, polygons of the pressure bands of the high case; GROUND_LIMITS, lines "
+        "on the ground of the ceiling and the floor, higher ground on their left; STATIC_LEVEL_HIGH and "
+        "STATIC_LEVEL_LOW; GROUND_TOO_HIGH, the ceiling: the ground elevation above which the lowest acceptable "
+        "pressure is not "
+        "met (low case); GROUND_TOO_LOW, the floor: the one below which the highest is passed (high case)." ),
       unitsParagraph(),
       Text::tr(
         "Limits: no pipe is looked at, so neither summits on the way nor the way itself; negative values lie above the "

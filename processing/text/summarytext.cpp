@@ -68,7 +68,7 @@ namespace stillhead
       const Extreme *worst = nullptr;
       for ( const Extreme &extreme : context.result.extremes )
       {
-        if ( extreme.stretch >= 0 || extreme.highest != highest )
+        if ( extreme.stretch >= 0 || extreme.kind != ( highest ? ExtremeKind::Highest : ExtremeKind::Lowest ) )
           continue;
         if ( !worst || ( highest ? extreme.pressurePa > worst->pressurePa : extreme.pressurePa < worst->pressurePa ) )
           worst = &extreme;

@@ -1,10 +1,11 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// EXTREMES: the worst place of every stretch and of every pressure zone.
+// EXTREMES: the worst place of every stretch and of every pressure zone, then the summits and sags of mainlines.
 #include "processing/parameternames.h"
 #include "processing/text/findingtext.h"
 #include "processing/text/text.h"
 #include "processing/writing/resulttable.h"
 
+#include <algorithm>
 #include <cmath>
 
 namespace stillhead
@@ -26,6 +27,33 @@ namespace stillhead
       fields.append( QgsField( field::DISTANCE_ALONG, compat::Field::Double ) );
       fields.append( QgsField( field::LABEL, compat::Field::String ) );
       return fields;
+    }
+
+    QString kindWord( ExtremeKind kind )
+    {
+      switch ( kind )
+      {
+      case ExtremeKind::Highest:
+        return word::HIGHEST;
+      case ExtremeKind::Lowest:
+        return word::LOWEST;
+      case ExtremeKind::Summit:
+        return word::SUMMIT;
+      case ExtremeKind::Sag:
+        return word::SAG;
+      }
+      return QString();
+    }
+
+    //! "95 psi, pipe 348 ft", "summit, 62 psi, pipe 412 ft", and without water "summit, pipe 412 ft".
+    QString labelOf( const Extreme &extreme, Role role, const ResultContext &context )
+    {
+      const QString pipe = std::isnan( extreme.pressurePa )
+        ? Text::tr( "pipe %1" ).arg( context.units.lengthText( extreme.elevationM ) )
+        : placeLabel( extreme.pressurePa, extreme.elevationM, context.units, context.limits.leastFor( role ),
+          context.limits.mostFor( role ) );
+      const bool isWorst = extreme.kind == ExtremeKind::Highest || extreme.kind == ExtremeKind::Lowest;
+      return isWorst ? pipe : Text::tr( "%1, %2" ).arg( kindWord( extreme.kind ), pipe );
     }
 
   } // namespace
@@ -61,6 +89,8 @@ namespace stillhead
     table.type = compat::WkbType::PointZM;
     table.fields = extremeFields();
     table.rows = context.result.extremes.size();
+    table.hasGaps = std::any_of( context.result.extremes.begin(), context.result.extremes.end(),
+      []( const Extreme &extreme ) { return std::isnan( extreme.pressurePa ); } );
     table.make = [&context, starts = partStartsM( context )](
                    std::size_t first, std::size_t last, QgsFeature *features ) {
       for ( std::size_t i = first; i < last; ++i )
@@ -70,14 +100,12 @@ namespace stillhead
         const DrawnFeature &feature = context.featureOf( line );
         const double alongPartM = line.reversed ? line.lengthM - extreme.alongM : extreme.alongM;
         QgsAttributes attributes;
-        attributes << ( extreme.highest ? word::HIGHEST : word::LOWEST )
-                   << context.units.pressureValue( extreme.pressurePa )
+        attributes << kindWord( extreme.kind ) << context.units.pressureValue( extreme.pressurePa )
                    << context.units.lengthValue( extreme.elevationM ) << oneBased( extreme.zone )
                    << oneBased( extreme.stretch ) << drawnLayerName( feature.role )
                    << static_cast<qlonglong>( feature.fid )
                    << context.units.lengthValue( starts[static_cast<std::size_t>( line.drawn )] + alongPartM )
-                   << placeLabel( extreme.pressurePa, extreme.elevationM, context.units,
-                        context.limits.leastFor( line.role ), context.limits.mostFor( line.role ) );
+                   << labelOf( extreme, line.role, context );
         features[i - first].setAttributes( attributes );
         features[i - first].setGeometry( pointZM( context.result.drawing.placeAt( line, extreme.alongM ),
           context.z( extreme.elevationM ), context.pressure( extreme.pressurePa ) ) );

@@ -145,8 +145,8 @@ namespace stillhead
       return true;
     if ( !mWorkingPath.isEmpty() )
     {
-      mDataset.reset(
-        GDALOpenEx( mWorkingPath.toUtf8().constData(), GDAL_OF_VECTOR | GDAL_OF_UPDATE, nullptr, nullptr, nullptr ) );
+      mDataset.reset( GDALOpenEx( mWorkingPath.toUtf8().constData(),
+        GDAL_OF_VECTOR | GDAL_OF_UPDATE | GDAL_OF_VERBOSE_ERROR, nullptr, nullptr, nullptr ) );
     }
     else
     {
@@ -267,6 +267,14 @@ namespace stillhead
       }
     }
     return true;
+  }
+
+  bool GeoPackageFile::endLayer()
+  {
+    const GdalErrors errors;
+    const bool done = OGR_L_SyncToDisk( mLayer ) == OGRERR_NONE;
+    mReason = QString::fromStdString( errors.text() );
+    return done;
   }
 
   bool GeoPackageFile::commit()

@@ -44,6 +44,9 @@ namespace stillhead
       //! Adds rows to the layer begun last. \returns false where they cannot be written
       bool add( const QgsFeatureList &rows );
 
+      //! Completes the layer begun last, its spatial index included. \returns false where that fails
+      bool endLayer();
+
       //! Makes it all last. \returns false where that fails; then nothing of it is there
       bool commit();
 

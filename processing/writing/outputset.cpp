@@ -119,6 +119,8 @@ namespace stillhead
       //! The id of the layer, once all its rows are there.
       QString finished()
       {
+        if ( mFile && !mFile->endLayer() )
+          refuseWrite( mOutput, mId, mFile->reason() );
         if ( mSink && !mSink->flushBuffer() )
           refuseWrite( mOutput, mId );
         mSink.reset();

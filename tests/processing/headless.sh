@@ -4,6 +4,8 @@
 # and checks that the command-line tool lists the provider, exactly once and as active.
 set -euo pipefail
 export QGIS_PLUGINPATH="$1"
+# What an earlier run of this test enabled would be refused as enabled already.
+rm -rf "${QGIS_CUSTOM_CONFIG_PATH:?}"
 # Some distributions wrap the tool in a script that passes options it does not know.
 tool="$( command -v qgis_process.bin || command -v qgis_process )"
 "$tool" plugins enable stillhead_headless

@@ -118,7 +118,7 @@ void TestContract::isAsWritten()
       lines << fieldsOf( runAlgorithm( id, mSlope.parameters( { { "SCHEDULE", Slope::temporary() } } ) ),
         { "SPANS", "NODES", "STRETCHES", "EXTREMES", "FINDINGS", "SCHEDULE" } );
     if ( id == "pressuresurface" )
-      lines << fieldsOf( runAlgorithm( id, mSlope.surfaceParameters() ), { "BAND_AREAS" } );
+      lines << fieldsOf( runAlgorithm( id, mSlope.surfaceParameters() ), { "BAND_AREAS", "GROUND_LIMITS" } );
     if ( id == "proposeregulators" )
       lines << fieldsOf( runAlgorithm( id, mSlope.parameters( { { "REGULATORS", Slope::temporary() } } ) ),
         { "REGULATORS", "SPANS", "STRETCHES", "EXTREMES", "FINDINGS" } );

@@ -101,14 +101,14 @@ void TestFindings::ofTheSource_data()
   QTest::newRow( "one reading" ) << QVariantMap { { "SOURCE_LOW", QVariant() } } << "one reading"
                                  << "Only one value is given for the source, so the low case is the high one.";
   QTest::newRow( "pump duty" ) << QVariantMap { { "BOOST", 5 } } << "pump duty not given"
-                               << "The pump's pressure while running (BOOST_LOW) is not given";
+                               << "The pressure while running of the pump at the source (BOOST_LOW) is not given";
   QTest::newRow( "unusually low" )
     << QVariantMap { { "SOURCE_KIND", 0 }, { "SOURCE_VALUE", 40 }, { "SOURCE_LOW", 9 } } << "unusual pressure"
-    << "The source's pressure of 9.00 m of water lies outside 10.6 m of water to 175.9 m of water; check its unit.";
+    << "The pressure of the source, 9.00 m of water, lies outside 10.6 m of water to 175.9 m of water; check its unit.";
   QTest::newRow( "unusually high" )
     << QVariantMap { { "SOURCE_KIND", 0 }, { "SOURCE_VALUE", 620 }, { "SOURCE_LOW", 62 }, { "PRESSURE_UNIT", 0 } }
     << "unusual pressure"
-    << "The source's pressure of 620.0 psi lies outside 15 psi to 250 psi; check its unit.";
+    << "The pressure of the source, 620.0 psi, lies outside 15 psi to 250 psi; check its unit.";
 }
 
 void TestFindings::ofTheSource()

@@ -47,6 +47,7 @@ class TestOutputs : public QObject
     void cancelLeavesNothing();
     void cancelLeavesEarlierResults();
     void failureLeavesEarlierResults();
+    void lateCancelLeavesAGeoPackage();
     void lateCancelFinishesWhatReplaces();
     void cancelOfTheSurface_data();
     void cancelOfTheSurface();
@@ -118,10 +119,22 @@ void TestOutputs::failureLeavesEarlierResults()
   QCOMPARE( contentOf( file ), before );
 }
 
+void TestOutputs::lateCancelLeavesAGeoPackage()
+{
+  const QString file = mSlope.path( "late.gpkg" );
+  QVERIFY( runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file } } ) ).ok );
+  const QByteArray before = contentOf( file );
+  Impatient impatient( 80.0 );
+  QVERIFY(
+    !runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file }, { "BANDS", "900" } } ), impatient ).ok );
+  QCOMPARE( contentOf( file ), before );
+  QCOMPARE( QgsVectorLayer( file, "earlier", "ogr" ).featureCount(), 3LL );
+}
+
 void TestOutputs::lateCancelFinishesWhatReplaces()
 {
   // Once something earlier is gone the run is finished: a whole new result, never half of one.
-  const QString file = mSlope.path( "replaced.gpkg" );
+  const QString file = mSlope.path( "replaced.geojson" );
   QVERIFY( runAlgorithm( "staticpressure", mSlope.parameters( { { "SPANS", file } } ) ).ok );
   QCOMPARE( QgsVectorLayer( file, "earlier", "ogr" ).featureCount(), 3LL );
   Impatient impatient( 80.0 );
@@ -144,7 +157,8 @@ void TestOutputs::cancelOfTheSurface()
   QTemporaryDir folder;
   const QVariantMap parameters { { "TERRAIN", mSlope.path( "slope.tif" ) }, { "SOURCE", place( 0, 0 ) },
     { "SOURCE_KIND", 1 }, { "SOURCE_VALUE", 150 }, { "SURFACE", folder.filePath( "surface.tif" ) },
-    { "BAND_AREAS", folder.filePath( "areas.gpkg" ) } };
+    { "BAND_AREAS", folder.filePath( "areas.gpkg" ) }, { "LEAST", 60 },
+    { "GROUND_LIMITS", folder.filePath( "limits.gpkg" ) } };
   Impatient impatient( percent );
   QVERIFY( !runAlgorithm( "pressuresurface", parameters, impatient ).ok );
   QCOMPARE( QDir( folder.path() ).entryList( QDir::Files ), QStringList() );
@@ -152,10 +166,13 @@ void TestOutputs::cancelOfTheSurface()
   QVERIFY( runAlgorithm( "pressuresurface", parameters ).ok );
   const QByteArray surface = contentOf( folder.filePath( "surface.tif" ) );
   const QByteArray areas = contentOf( folder.filePath( "areas.gpkg" ) );
+  const QByteArray limits = contentOf( folder.filePath( "limits.gpkg" ) );
+  QVERIFY( !limits.isEmpty() );
   Impatient again( percent );
   QVERIFY( !runAlgorithm( "pressuresurface", parameters, again ).ok );
   QCOMPARE( contentOf( folder.filePath( "surface.tif" ) ), surface );
   QCOMPARE( contentOf( folder.filePath( "areas.gpkg" ) ), areas );
+  QCOMPARE( contentOf( folder.filePath( "limits.gpkg" ) ), limits );
 }
 
 void TestOutputs::severalLayersInOneFile()

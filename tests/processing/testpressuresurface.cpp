@@ -6,6 +6,7 @@
 
 #include <qgsrasterlayer.h>
 #include <qgsrasterrenderer.h>
+#include <qgsrenderer.h>
 
 #include <QFile>
 
@@ -23,6 +24,9 @@ class TestPressureSurface : public QObject
     void terrainInFeet();
     void agreesWithThePipe();
     void bandAreas();
+    void groundLimits_data();
+    void groundLimits();
+    void groundLimitsWithinTheArea();
     void refusals_data();
     void refusals();
     void keepsWhatItIs();
@@ -121,6 +125,73 @@ void TestPressureSurface::bandAreas()
     }
     QVERIFY( !area["band_text"].toString().isEmpty() );
   }
+}
+
+void TestPressureSurface::groundLimits_data()
+{
+  QTest::addColumn<QVariantMap>( "changes" );
+  QTest::addColumn<double>( "ceilingEast" );
+  QTest::addColumn<double>( "floorEast" );
+  QTest::addColumn<QStringList>( "labels" );
+  // 50 + east / 10 in the high case; the pipe lies its cover deeper, the low case so much lower.
+  QTest::newRow( "one reading" ) << QVariantMap() << 100.0 << 250.0
+                                 << QStringList { "ceiling, 60 m of water, ground 90.0 m",
+                                      "floor, 75 m of water, ground 75.0 m" };
+  QTest::newRow( "low case and cover" ) << QVariantMap { { "SOURCE_LOW", 148 }, { "COVER", 1 } } << 110.0 << 240.0
+                                        << QStringList { "ceiling, 60 m of water, ground 89.0 m",
+                                             "floor, 75 m of water, ground 76.0 m" };
+  QTest::newRow( "no ground so high" ) << QVariantMap { { "LEAST", 49 } } << qQNaN() << 250.0
+                                       << QStringList { "floor, 75 m of water, ground 75.0 m" };
+  QTest::newRow( "in feet" ) << QVariantMap { { "LENGTH_UNIT", 0 }, { "SOURCE_VALUE", 150 / 0.3048 } } << 100.0 << 250.0
+                             << QStringList { "ceiling, 60 m of water, ground 295 ft",
+                                  "floor, 75 m of water, ground 246 ft" };
+}
+
+void TestPressureSurface::groundLimits()
+{
+  QFETCH( QVariantMap, changes );
+  QFETCH( double, ceilingEast );
+  QFETCH( double, floorEast );
+  QFETCH( QStringList, labels );
+  QVariantMap all { { "LEAST", 60 }, { "MOST", 75 }, { "GROUND_LIMITS", QgsProcessing::TEMPORARY_OUTPUT } };
+  for ( auto change = changes.constBegin(); change != changes.constEnd(); ++change )
+    all.insert( change.key(), change.value() );
+  const Outcome outcome = runAlgorithm( "pressuresurface", parameters( all ) );
+  QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
+  QCOMPARE( outcome.layer( "GROUND_LIMITS" )->crs().authid(), QString( "EPSG:32631" ) );
+  QStringList found;
+  for ( const Row &row : outcome.features( "GROUND_LIMITS" ) )
+  {
+    found << row["label"].toString();
+    const bool isCeiling = row["what"].toString() == "ceiling";
+    STILLHEAD_SAME( row["p"].toDouble(), isCeiling ? all["LEAST"].toDouble() : 75.0 );
+    STILLHEAD_SAME( row["elevation"].toDouble(), outcome.number( isCeiling ? "GROUND_TOO_HIGH" : "GROUND_TOO_LOW" ) );
+    const QgsPolylineXY line = row.geometry().asPolyline();
+    // From edge to edge; the higher ground, in the west, is on the left of the way north.
+    STILLHEAD_NEAR( line.first().y(), 110000.0 - 40.5, 1e-6 );
+    STILLHEAD_NEAR( line.last().y(), 110000.0 + 40.5, 1e-6 );
+    for ( const QgsPointXY &place : line )
+      STILLHEAD_NEAR( place.x() - 320000.0, isCeiling ? ceilingEast : floorEast, 1e-6 );
+  }
+  found.sort();
+  QCOMPARE( found, labels );
+}
+
+void TestPressureSurface::groundLimitsWithinTheArea()
+{
+  const LayerPointer area = drawLayer( "Polygon?crs=EPSG:32631",
+    { { QString( "POLYGON((%1, %2, %3, %4, %1))" )
+          .arg( at( 90.5, -10.5 ), at( 120.5, -10.5 ), at( 120.5, 10.5 ), at( 90.5, 10.5 ) ) } },
+    "bed" );
+  const Outcome outcome = runAlgorithm( "pressuresurface",
+    parameters( { { "LEAST", 60 }, { "MOST", 75 }, { "AREA", asParameter( area ) },
+      { "GROUND_LIMITS", mSlope.path( "limits.gpkg" ) } } ) );
+  QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
+  const QgsVectorLayer layer( mSlope.path( "limits.gpkg" ), "limits", "ogr" );
+  QCOMPARE( layer.featureCount(), 1LL );
+  QCOMPARE( layer.renderer()->type(), QString( "categorizedSymbol" ) );
+  STILLHEAD_NEAR( layer.extent().yMinimum(), 110000.0 - 10.5, 1e-6 );
+  STILLHEAD_NEAR( layer.extent().yMaximum(), 110000.0 + 10.5, 1e-6 );
 }
 
 void TestPressureSurface::staysWithinTheArea()

@@ -94,6 +94,7 @@ void TestRefusals::values_data()
   row( "negative terrain error", { { "TERRAIN_RMSE", -0.3 } },
     "TERRAIN_RMSE is −0.3 m, below 0; give a distance of 0 or more." );
   row( "negative reach", { { "SOURCE_REACH", -1 } }, "SOURCE_REACH is −1 m, below 0" );
+  row( "negative depth of sags", { { "SAG_DEPTH", -1 } }, "SAG_DEPTH is −1 m, below 0" );
   row( "negative tolerance", { { "JOIN_TOLERANCE", -1 } }, "JOIN_TOLERANCE is −1 m, below 0" );
   row( "text for a number", { { "SOURCE_VALUE", "65 psi" } },
     "SOURCE_VALUE is “65 psi”, which is not a number. Give the number alone" );

@@ -18,6 +18,8 @@ class TestStaticPressure : public QObject
     void cutsAtEveryLimit();
     void sumsUp();
     void nodesStretchesAndExtremes();
+    void summitsAndSags_data();
+    void summitsAndSags();
     void speaksTheChosenUnits_data();
     void speaksTheChosenUnits();
     void gaugePumpAndCover();
@@ -126,6 +128,66 @@ void TestStaticPressure::nodesStretchesAndExtremes()
   QVERIFY( extremes[1]["stretch"].isNull() );
   QCOMPARE( extremes[2]["what"].toString(), QString( "lowest" ) );
   STILLHEAD_NEAR( extremes[2]["p"].toDouble(), 50.0, 1e-6 );
+}
+
+void TestStaticPressure::summitsAndSags_data()
+{
+  QTest::addColumn<double>( "heightM" );
+  QTest::addColumn<QVariantMap>( "changes" );
+  QTest::addColumn<QStringList>( "labels" );
+  const QVariantMap feet { { "LENGTH_UNIT", 0 }, { "SOURCE_VALUE", 150 / 0.3048 }, { "SOURCE_LOW", 148 / 0.3048 },
+    { "PRESSURE_UNIT", 4 } };
+  const auto depth = []( double value ) { return QVariantMap { { "SAG_DEPTH", value } }; };
+  const QStringList none;
+  const QStringList both { "summit, 46.4 m of water, pipe 101.6 m", "sag, 50.0 m of water, pipe 100.0 m" };
+  QTest::newRow( "unset" ) << 1.6 << QVariantMap() << both;
+  QTest::newRow( "a little less than the fall" ) << 1.6 << depth( 1.59 ) << both;
+  QTest::newRow( "the fall" ) << 1.6 << depth( 1.6 ) << both;
+  QTest::newRow( "a little more" ) << 1.6 << depth( 1.61 ) << none;
+  // Unset is half a metre, or two feet.
+  QTest::newRow( "too little in metres" ) << 0.45 << QVariantMap() << none;
+  QTest::newRow( "enough in metres" ) << 0.55 << QVariantMap()
+                                      << QStringList { "summit, 47.5 m of water, pipe 100.5 m",
+                                           "sag, 50.0 m of water, pipe 100.0 m" };
+  QTest::newRow( "too little in feet" ) << 0.55 << feet << none;
+  QTest::newRow( "enough in feet" ) << 0.62 << feet
+                                    << QStringList { "summit, 155 ft of water, pipe 330 ft",
+                                         "sag, 164 ft of water, pipe 328 ft" };
+}
+
+// From 100 m up at 100 m east, down to 100 m again at 200 m, up to 103 m at 300 m.
+void TestStaticPressure::summitsAndSags()
+{
+  QFETCH( double, heightM );
+  QFETCH( QVariantMap, changes );
+  QFETCH( QStringList, labels );
+  const QString hills = mSlope.makeTerrain( "hills.tif", [heightM]( double east, double ) {
+    return 100.0 + ( east < 200.0 ? heightM * ( 1.0 - std::abs( 0.01 * east - 1.0 ) ) : 0.03 * ( east - 200.0 ) );
+  } );
+  QVariantMap all { { "TERRAIN", hills }, { "SOURCE_LOW", 148 } };
+  for ( auto change = changes.constBegin(); change != changes.constEnd(); ++change )
+    all.insert( change.key(), change.value() );
+  const Outcome outcome = runAlgorithm( "staticpressure", mSlope.parameters( all ) );
+  QVERIFY2( outcome.ok, qPrintable( outcome.errors.join( '\n' ) ) );
+  QStringList found;
+  const double metre = changes.contains( "LENGTH_UNIT" ) ? 1 / 0.3048 : 1.0;
+  for ( const Row &row : outcome.features( "EXTREMES" ) )
+  {
+    const QString what = row["what"].toString();
+    if ( what != "summit" && what != "sag" )
+      continue;
+    found << row["label"].toString();
+    const bool isSummit = what == "summit";
+    const double pipeM = isSummit ? 100.0 + heightM : 100.0;
+    STILLHEAD_NEAR( row["distance_along"].toDouble(), ( isSummit ? 100.0 : 200.0 ) * metre, 0.005 );
+    STILLHEAD_NEAR( row["z"].toDouble(), pipeM * metre, 1e-6 );
+    STILLHEAD_NEAR( row["p"].toDouble(), ( ( isSummit ? 148.0 : 150.0 ) - pipeM ) * metre, 1e-6 );
+    QVERIFY( row["stretch"].isNull() );
+    QCOMPARE( row["pressure_zone"].toInt(), 1 );
+    QCOMPARE( row["drawn_layer"].toString(), QString( "mainlines" ) );
+    QCOMPARE( row["drawn_fid"].toLongLong(), 1LL );
+  }
+  QCOMPARE( found, labels );
 }
 
 void TestStaticPressure::speaksTheChosenUnits_data()

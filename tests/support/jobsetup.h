@@ -216,8 +216,9 @@ namespace stillhead::test
     for ( const Extreme &extreme : result.extremes )
     {
       const CanonicalLine &line = lineOf( result, result.pieces[static_cast<std::size_t>( extreme.piece )] );
+      static const char *const kinds[] { "highest", "lowest", "summit", "sag" };
       rows << QString( "extreme %1 %2 %3 " )
-                .arg( extreme.highest ? "highest" : "lowest" )
+                .arg( kinds[static_cast<int>( extreme.kind )] )
                 .arg( extreme.stretch >= 0 ? "of stretch" : "of zone" )
                 .arg( extreme.zone == 0 ? "fed" : "other" )
           + place( result.drawing.placeAt( line, extreme.alongM ) ) + " " + bits( extreme.pressurePa ) + " "

@@ -211,7 +211,7 @@ namespace stillhead::test
       {
         return { { "TERRAIN", path( "slope.tif" ) }, { "SOURCE", place( 0, 0 ) }, { "SOURCE_KIND", 1 },
           { "SOURCE_VALUE", 150 }, { "PRESSURE_UNIT", 3 }, { "LENGTH_UNIT", 1 }, { "SURFACE", path( "contract.tif" ) },
-          { "BAND_AREAS", QgsProcessing::TEMPORARY_OUTPUT } };
+          { "BAND_AREAS", QgsProcessing::TEMPORARY_OUTPUT }, { "GROUND_LIMITS", QgsProcessing::TEMPORARY_OUTPUT } };
       }
 
       static QString lines() { return QStringLiteral( "LineString?crs=EPSG:32631" ); }

@@ -91,8 +91,22 @@ namespace stillhead::test
             { QStringLiteral( "POINT(80 90)" ),
               { QStringLiteral( "lowest" ), 2, QStringLiteral( "25 psi, pipe 488 ft" ) } },
             { QStringLiteral( "POINT(90 90)" ), { QStringLiteral( "highest" ), QVariant(), QString() } },
-            { QStringLiteral( "POINT(100 90)" ), { QStringLiteral( "lowest" ), QVariant(), QString() } } },
+            { QStringLiteral( "POINT(100 90)" ), { QStringLiteral( "lowest" ), QVariant(), QString() } },
+            { QStringLiteral( "POINT(110 90)" ),
+              { QStringLiteral( "summit" ), QVariant(), QStringLiteral( "summit" ) } },
+            { QStringLiteral( "POINT(120 90)" ), { QStringLiteral( "sag" ), QVariant(), QStringLiteral( "sag" ) } } },
           QStringLiteral( "extremes" ) );
+      }
+
+      //! A ceiling and a floor, both with the higher ground in the north.
+      LayerPointer groundLimits() const
+      {
+        return drawLayer( QStringLiteral( "LineString?crs=EPSG:32631&field=what:string&field=label:string" ),
+          { { QStringLiteral( "LINESTRING(0 79, 30 80, 55 79)" ),
+              { QStringLiteral( "ceiling" ), QStringLiteral( "ceiling, 30 psi, ground 477 ft" ) } },
+            { QStringLiteral( "LINESTRING(65 79, 95 80, 120 79)" ),
+              { QStringLiteral( "floor" ), QStringLiteral( "floor, 80 psi, ground 382 ft" ) } } },
+          QStringLiteral( "limits" ) );
       }
 
       LayerPointer stretches() const

@@ -29,14 +29,6 @@ namespace
     return std::string( STILLHEAD_TEST_DATA "/" ) + name;
   }
 
-  std::vector<double> readAll( const GdalTerrain &terrain )
-  {
-    const RasterGrid &grid = terrain.grid();
-    std::vector<double> values( static_cast<std::size_t>( grid.columns() ) * static_cast<std::size_t>( grid.rows() ) );
-    terrain.read( 0, 0, grid.columns(), grid.rows(), values.data() );
-    return values;
-  }
-
   bool isSameToTheBit( const std::vector<double> &a, const std::vector<double> &b )
   {
     for ( std::size_t i = 0; i < a.size() && i < b.size(); ++i )
@@ -45,6 +37,40 @@ namespace
         return false;
     }
     return a.size() == b.size();
+  }
+
+  //! All values block by block, as 32-bit floats times their factor.
+  std::vector<double> readFloatBlocks( const GdalTerrain &terrain )
+  {
+    const RasterGrid &grid = terrain.grid();
+    const auto columns = static_cast<std::size_t>( grid.columns() );
+    std::vector<double> values( columns * static_cast<std::size_t>( grid.rows() ) );
+    for ( int row = 0; row < grid.rows(); row += terrain.blockRows() )
+    {
+      for ( int column = 0; column < grid.columns(); column += terrain.blockColumns() )
+      {
+        const int width = std::min( terrain.blockColumns(), grid.columns() - column );
+        const int height = std::min( terrain.blockRows(), grid.rows() - row );
+        std::vector<float> block( static_cast<std::size_t>( width ) * static_cast<std::size_t>( height ) );
+        terrain.readFloats( column, row, width, height, block.data() );
+        for ( std::size_t i = 0; i < block.size(); ++i )
+          values[( static_cast<std::size_t>( row ) + i / static_cast<std::size_t>( width ) ) * columns
+            + static_cast<std::size_t>( column ) + i % static_cast<std::size_t>( width )] =
+            static_cast<double>( block[i] ) * terrain.metresPerFloat();
+      }
+    }
+    return values;
+  }
+
+  //! All values; nothing if the two ways of reading them differ in a bit.
+  std::vector<double> readAll( const GdalTerrain &terrain )
+  {
+    const RasterGrid &grid = terrain.grid();
+    std::vector<double> values( static_cast<std::size_t>( grid.columns() ) * static_cast<std::size_t>( grid.rows() ) );
+    terrain.read( 0, 0, grid.columns(), grid.rows(), values.data() );
+    if ( terrain.metresPerFloat() != 0.0 && !isSameToTheBit( readFloatBlocks( terrain ), values ) )
+      return {};
+    return values;
   }
 
   //! The values of a raster in memory once \a change has been made to it.

@@ -1,10 +1,9 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Band areas and ground lines: hand-worked ramps, every cell in the area of its band and no other, valid polygons on the
+// Band areas: hand-worked ramps, every cell in the area of its band and no other, valid polygons on the
 // worst patterns of missing cells, and GDAL's own contours as a second opinion.
 #include "core/surface/bandareas.h"
-#include "core/surface/groundlines.h"
+#include "tests/support/gdalcontours.h"
 #include "tests/support/memoryterrain.h"
-#include "tests/support/smallraster.h"
 
 #include <QTest>
 
@@ -13,9 +12,6 @@
 #include <memory>
 #include <random>
 #include <set>
-
-#include <gdal_alg.h>
-#include <ogrsf_frmts.h>
 
 using namespace stillhead;
 using stillhead::test::MemoryTerrain;
@@ -169,45 +165,6 @@ namespace
       ? QString()
       : QStringLiteral( "%1 of area for %2 cells" ).arg( total ).arg( valid );
   }
-
-  double lengthOf( const std::vector<TerrainPoint> &line )
-  {
-    double length = 0.0;
-    for ( std::size_t i = 0; i + 1 < line.size(); ++i )
-      length += std::hypot( line[i + 1].x - line[i].x, line[i + 1].y - line[i].y );
-    return length;
-  }
-
-  //! GDAL's contours of a raster at \a levels, in a layer in memory: fields least, most (areas) or elevation (lines).
-  test::DatasetPointer gdalContours( GDALRasterBand *band, const std::vector<double> &levels, bool areas )
-  {
-    test::DatasetPointer result(
-      GetGDALDriverManager()->GetDriverByName( "Memory" )->Create( "", 0, 0, 0, GDT_Unknown, nullptr ) );
-    OGRLayer *layer = result->CreateLayer( "contours" );
-    OGRFieldDefn least( "least", OFTReal );
-    OGRFieldDefn most( "most", OFTReal );
-    layer->CreateField( &least );
-    layer->CreateField( &most );
-    CPLString fixed = "FIXED_LEVELS=";
-    for ( std::size_t i = 0; i < levels.size(); ++i )
-      fixed += CPLSPrintf( i == 0 ? "%.17g" : ",%.17g", levels[i] );
-    CPLStringList options;
-    options.AddString( fixed );
-    if ( areas )
-    {
-      options.AddString( "POLYGONIZE=YES" );
-      options.AddString( "ELEV_FIELD_MIN=0" );
-      options.AddString( "ELEV_FIELD_MAX=1" );
-    }
-    else
-    {
-      options.AddString( "ELEV_FIELD=0" );
-    }
-    if ( GDALContourGenerateEx( band, layer, options.List(), nullptr, nullptr ) != CE_None )
-      return nullptr;
-    return result;
-  }
-
 } // namespace
 
 class TestBandAreas : public QObject
@@ -232,10 +189,6 @@ class TestBandAreas : public QObject
     void aMapThatIsNotMirrored();
     void threadsGiveTheSameBits();
     void cancelled();
-    void groundLinesByHand();
-    void groundLinesAgreeWithGdal();
-    void groundLinesKeepHigherGroundLeft();
-    void groundLinesEndAtMissingCells();
 };
 
 void TestBandAreas::rampByHand()
@@ -407,7 +360,7 @@ void TestBandAreas::agreesWithGdal()
   }
   const test::DatasetPointer dataset = test::create( "", raster );
   const std::vector<double> limits { 37.5, 45.1, 52.3, 60.7 };
-  const test::DatasetPointer contours = gdalContours( dataset->GetRasterBand( 1 ), limits, true );
+  const test::DatasetPointer contours = test::gdalContours( dataset->GetRasterBand( 1 ), limits, true );
   QVERIFY( contours );
   std::map<int, double> expected;
   for ( const OGRFeatureUniquePtr &feature : *contours->GetLayer( 0 ) )
@@ -491,100 +444,6 @@ void TestBandAreas::cancelled()
   QVERIFY_EXCEPTION_THROWN(
     traceBandAreas( terrain, request, monitor, 0.0, 1.0, []( int, const std::vector<std::vector<TerrainPoint>> & ) {} ),
     Cancelled );
-}
-
-void TestBandAreas::groundLinesByHand()
-{
-  // Ground rising 2 m a cell to the east: 5 m is met half-way between columns 2 and 3.
-  const MemoryTerrain terrain =
-    MemoryTerrain::sampled( 6, 4, test::centresAt( 0.0, 0.0, 1.0 ), []( double x, double ) { return 2.0 * x; } );
-  Monitor monitor;
-  std::vector<std::pair<std::size_t, std::vector<TerrainPoint>>> lines;
-  traceGroundLines( terrain, { 50.0, 5.0 }, nullptr, 2, monitor, 0.0, 1.0,
-    [&lines](
-      std::size_t elevation, const std::vector<TerrainPoint> &line ) { lines.emplace_back( elevation, line ); } );
-  QCOMPARE( lines.size(), std::size_t( 1 ) );
-  QCOMPARE( lines[0].first, std::size_t( 1 ) );
-  // From edge to edge of the raster, southwards: the higher ground, in the east, is on its left.
-  QCOMPARE( lines[0].second.front().y, 0.5 );
-  QCOMPARE( lines[0].second.back().y, -3.5 );
-  for ( const TerrainPoint &place : lines[0].second )
-    QVERIFY( std::abs( place.x - 2.5 ) < 1e-6 );
-}
-
-void TestBandAreas::groundLinesAgreeWithGdal()
-{
-  // A surveyed hillside, every 2 m.
-  const std::string path = STILLHEAD_TEST_DATA "/bei_5m_utm17n.tif";
-  const test::DatasetPointer dataset( GDALDataset::Open( path.c_str() ) );
-  std::vector<double> elevations;
-  for ( double elevation = 120.0; elevation < 160.0; elevation += 2.0 )
-    elevations.push_back( elevation + 0.001 ); // off the cells' own values, where the two differ in taste
-  const test::DatasetPointer contours = gdalContours( dataset->GetRasterBand( 1 ), elevations, false );
-  QVERIFY( contours );
-  std::map<long, double> expected;
-  for ( const OGRFeatureUniquePtr &feature : *contours->GetLayer( 0 ) )
-    expected[std::lround( feature->GetFieldAsDouble( 0 ) )] += feature->GetGeometryRef()->toLineString()->get_Length();
-
-  std::vector<double> cells( 201 * 101 );
-  QCOMPARE( dataset->GetRasterBand( 1 )->RasterIO(
-              GF_Read, 0, 0, 201, 101, cells.data(), 201, 101, GDT_Float64, 0, 0, nullptr ),
-    CE_None );
-  std::array<double, 6> placement {};
-  dataset->GetGeoTransform( placement.data() );
-  const MemoryTerrain terrain( 201, 101, cells, placement );
-  Monitor monitor;
-  std::map<long, double> found;
-  traceGroundLines(
-    terrain, elevations, nullptr, 2, monitor, 0.0, 1.0, [&]( std::size_t i, const std::vector<TerrainPoint> &line ) {
-      found[std::lround( elevations[i] )] += lengthOf( line );
-    } );
-  QCOMPARE( found.size(), expected.size() );
-  // Where two highs and two lows meet crosswise the two decide differently (ours by the saddle of the bilinear surface):
-  // a few cells' width on a few levels; else the lengths are the same to a micrometre.
-  int same = 0;
-  for ( const auto &[elevation, length] : expected )
-  {
-    const double differenceM = std::abs( found.at( elevation ) - length );
-    QVERIFY2( differenceM < 15.0, qPrintable( QStringLiteral( "%1 m: %2" ).arg( elevation ).arg( differenceM ) ) );
-    same += differenceM < 1e-6 ? 1 : 0;
-  }
-  QVERIFY( same >= 16 );
-}
-
-void TestBandAreas::groundLinesKeepHigherGroundLeft()
-{
-  // A round hill and a round hollow.
-  const MemoryTerrain terrain =
-    MemoryTerrain::sampled( 60, 30, test::centresAt( 0.0, 0.0, 1.0 ), []( double x, double y ) {
-      return 10.0 * std::exp( -0.03 * ( std::pow( x - 15.0, 2 ) + std::pow( y + 15.0, 2 ) ) )
-        - 10.0 * std::exp( -0.03 * ( std::pow( x - 45.0, 2 ) + std::pow( y + 15.0, 2 ) ) );
-    } );
-  Monitor monitor;
-  std::vector<double> areas( 2, 0.0 );
-  traceGroundLines( terrain, { 3.0, -3.0 }, nullptr, 1, monitor, 0.0, 1.0,
-    [&areas]( std::size_t i, const std::vector<TerrainPoint> &line ) {
-      areas[i] += line.front().x == line.back().x && line.front().y == line.back().y ? signedArea( line ) : 1e9;
-    } );
-  QVERIFY( areas[0] > 50.0 && areas[0] < 1000.0 );
-  QVERIFY( areas[1] < -50.0 && areas[1] > -1000.0 );
-}
-
-void TestBandAreas::groundLinesEndAtMissingCells()
-{
-  std::vector<double> grounds;
-  for ( int row = 0; row < 9; ++row )
-  {
-    for ( int column = 0; column < 9; ++column )
-      grounds.push_back( row == 4 ? NONE : column );
-  }
-  Monitor monitor;
-  std::vector<std::vector<TerrainPoint>> lines;
-  traceGroundLines( MemoryTerrain( 9, 9, grounds ), { 3.5 }, nullptr, 1, monitor, 0.0, 1.0,
-    [&lines]( std::size_t, const std::vector<TerrainPoint> &line ) { lines.push_back( line ); } );
-  QCOMPARE( lines.size(), std::size_t( 2 ) );
-  QCOMPARE( lines[0].back().y, -3.5 );
-  QCOMPARE( lines[1].front().y, -4.5 );
 }
 
 QTEST_APPLESS_MAIN( TestBandAreas )

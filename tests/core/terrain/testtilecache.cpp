@@ -6,8 +6,10 @@
 
 #include <atomic>
 #include <chrono>
+#include <cmath>
 #include <condition_variable>
 #include <functional>
+#include <limits>
 #include <stdexcept>
 #include <thread>
 
@@ -55,6 +57,26 @@ namespace
 
 } // namespace
 
+//! Four by two feet that fit into 32-bit floats: row × 10 + column + 0.1, none at the first pixel.
+class FloatSource : public ElevationSource
+{
+  public:
+    const RasterGrid &grid() const override { return mGrid; }
+    double metresPerFloat() const override { return 0.3048; }
+    void readFloats( int column, int row, int columns, int rows, float *values ) const override
+    {
+      for ( int r = row; r < row + rows; ++r )
+      {
+        for ( int c = column; c < column + columns; ++c )
+          *values++ = r + c == 0 ? std::numeric_limits<float>::quiet_NaN() : static_cast<float>( 10 * r + c ) + 0.1f;
+      }
+    }
+    void read( int, int, int, int, double * ) const override { throw std::logic_error( "floats are asked for" ); }
+
+  private:
+    RasterGrid mGrid { 4, 2, { 0.0, 1.0, 0.0, 0.0, 0.0, -1.0 } };
+};
+
 class TestTileCache : public QObject
 {
     Q_OBJECT
@@ -69,6 +91,8 @@ class TestTileCache : public QObject
     void theLeastRecentlyUsedIsDropped();
     void aTileInUseOutlivesItsPlace();
     void oneTileLargerThanTheBudget();
+    void clearedTilesAreReadAgain();
+    void floatsTakeTheirFactor();
 };
 
 void TestTileCache::shape_data()
@@ -231,6 +255,26 @@ void TestTileCache::oneTileLargerThanTheBudget()
   cache.tileAt( 256, 0 );
   cache.tileAt( 0, 0 );
   QCOMPARE( source.reads.load(), 3 );
+}
+
+void TestTileCache::clearedTilesAreReadAgain()
+{
+  const CountingSource source( 200, 200, 256, 256 );
+  TileCache cache( source );
+  const std::shared_ptr<const ElevationTile> held = cache.tileAt( 1, 1 );
+  cache.clear();
+  QCOMPARE( cache.tileAt( 1, 1 )->at( 1, 1 ), held->at( 1, 1 ) );
+  QCOMPARE( source.reads.load(), 2 );
+}
+
+void TestTileCache::floatsTakeTheirFactor()
+{
+  const FloatSource source;
+  TileCache cache( source );
+  const std::shared_ptr<const ElevationTile> tile = cache.tileAt( 0, 0 );
+  QCOMPARE( tile->at( 2, 1 ), 0.3048 * static_cast<double>( 12.1f ) );
+  QVERIFY( std::isnan( tile->at( 0, 0 ) ) );
+  QCOMPARE( tile->bytes(), 4u * 2u * sizeof( float ) );
 }
 
 QTEST_APPLESS_MAIN( TestTileCache )

@@ -26,6 +26,7 @@ class TestDemoPark : public QObject
     void figures_data();
     void figures();
     void namesTheWorstPlaces();
+    void findsSummitsAndSags();
     void findsWhatWasDrawnWrong();
     void everyMetreIsAccountedFor();
     void surfaceAgreesWithThePipe();
@@ -235,7 +236,7 @@ QMap<QString, double> TestDemoPark::found() const
       found.insert( QStringLiteral( "Mill Meadow, worst pipe" ), extreme["z"].toDouble() );
       found.insert( QStringLiteral( "Mill Meadow, worst, high" ), extreme["p"].toDouble() );
     }
-    if ( !ofStretch && !highest )
+    if ( !ofStretch && extreme["what"].toString() == QLatin1String( "lowest" ) )
     {
       found.insert( QStringLiteral( "Heron Bank, highest pipe" ), extreme["z"].toDouble() );
       found.insert( QStringLiteral( "Heron Bank, highest pipe, low" ), extreme["p"].toDouble() );
@@ -319,6 +320,21 @@ void TestDemoPark::namesTheWorstPlaces()
     ( QStringList { QStringLiteral( "over: 100 psi, pipe 336 ft" ), QStringLiteral( "over: 106 psi, pipe 323 ft" ),
       QStringLiteral( "over: 92 psi, pipe 354 ft" ), QStringLiteral( "over: 95 psi, pipe 348 ft" ),
       QStringLiteral( "short: −4 psi, pipe 555 ft" ) } ) );
+}
+
+// By hand: the meter (both mains fall from it, ground 400.0), the gully (ground 350.0), the shoulder of the hill (ground 400 + 0.04 × 242 + 146.8 × 0.3580² = 428.5 ft at 692 m) and the lowest of the meadow.
+void TestDemoPark::findsSummitsAndSags()
+{
+  QStringList labels;
+  for ( const Row &extreme : mOutcome.features( QStringLiteral( "EXTREMES" ) ) )
+  {
+    const QString what = extreme["what"].toString();
+    if ( what == QLatin1String( "summit" ) || what == QLatin1String( "sag" ) )
+      labels << extreme["label"].toString();
+  }
+  QCOMPARE( labels,
+    ( QStringList { QStringLiteral( "summit, 64 psi, pipe 398 ft" ), QStringLiteral( "sag, 95 psi, pipe 348 ft" ),
+      QStringLiteral( "summit, 52 psi, pipe 426 ft" ), QStringLiteral( "sag, 106 psi, pipe 323 ft" ) } ) );
 }
 
 void TestDemoPark::findsWhatWasDrawnWrong()

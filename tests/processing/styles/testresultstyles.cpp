@@ -4,6 +4,7 @@
 #include "processing/parameternames.h"
 #include "processing/styles/resultstyler.h"
 #include "processing/styles/storedstyle.h"
+#include "processing/writing/geopackageextras.h"
 #include "tests/support/processingrun.h"
 #include "tests/support/stylesample.h"
 
@@ -12,6 +13,7 @@
 #include <qgsrasterlayer.h>
 #include <qgsrastershader.h>
 #include <qgsrenderer.h>
+#include <qgsrulebasedlabeling.h>
 #include <qgssinglebandpseudocolorrenderer.h>
 #include <qgsvectorfilewriter.h>
 
@@ -29,10 +31,12 @@ class TestResultStyles : public QObject
     void legendEndsWithTheCaution();
     void limitsOfLateralsAreNamedWhereTheyDiffer();
     void findingsInTheLegendAreThoseThatAreThere();
+    void summitsAndSagsStandBelowTheWorstPlaces();
+    void ceilingAndFloorNameTheirLimits();
     void everyFieldHasAnAliasWithItsUnit();
     void surfaceBandsTakeTheirLowerLimit();
     void styleStaysInAGeoPackage();
-    void otherFormatsKeepNoStyle();
+    void extrasOfNoFileAreAWarning();
     void layersAreStyledOnLoading();
 
   private:
@@ -142,6 +146,34 @@ void TestResultStyles::findingsInTheLegendAreThoseThatAreThere()
     legendOf( *layer ), ( QStringList { QStringLiteral( "near miss" ), QStringLiteral( "crossing not joined" ) } ) );
 }
 
+void TestResultStyles::summitsAndSagsStandBelowTheWorstPlaces()
+{
+  const LayerPointer layer = mSample.extremes();
+  styleExtremes( *layer, mSample.style() );
+  const QStringList legend = legendOf( *layer );
+  QCOMPARE( legend.size(), 6 );
+  QVERIFY( layer->renderer()->usingSymbolLevels() );
+  QVERIFY( legend.at( 4 ).startsWith( QStringLiteral( "summit of a mainline" ) ) );
+  QVERIFY( legend.at( 5 ).startsWith( QStringLiteral( "sag of a mainline" ) ) );
+  const auto *labeling = dynamic_cast<const QgsRuleBasedLabeling *>( layer->labeling() );
+  QVERIFY( labeling );
+  const QgsRuleBasedLabeling::RuleList rules = labeling->rootRule()->children();
+  QCOMPARE( rules.size(), 2 );
+  QVERIFY( rules.at( 0 )->settings()->priority > rules.at( 1 )->settings()->priority );
+  QCOMPARE( rules.at( 0 )->minimumScale(), 0.0 );
+  QVERIFY( rules.at( 1 )->minimumScale() > 0.0 );
+}
+
+void TestResultStyles::ceilingAndFloorNameTheirLimits()
+{
+  const LayerPointer layer = mSample.groundLimits();
+  styleResult( *layer, ResultLayer::GroundLimits, mSample.style() );
+  QCOMPARE( legendOf( *layer ),
+    ( QStringList { QStringLiteral( "ceiling: higher ground has less than 30 psi (low case)" ),
+      QStringLiteral( "floor: lower ground has more than 80 psi (high case)" ) } ) );
+  QVERIFY( layer->labelsEnabled() );
+}
+
 void TestResultStyles::everyFieldHasAnAliasWithItsUnit()
 {
   const LayerPointer layer = mSample.spans();
@@ -190,9 +222,13 @@ void TestResultStyles::styleStaysInAGeoPackage()
   QTemporaryDir folder;
   const LayerPointer layer = mSample.spans();
   const QString source = writeGeoPackage( *layer, folder.filePath( QStringLiteral( "result.gpkg" ) ) );
-  // A second run over the same file replaces the style without asking.
+  QgsLayerMetadata metadata;
+  metadata.setAbstract( QStringLiteral( "It's a sample" ) );
+  const QString qml = styleText( ResultLayer::Spans, layer->fields(), layer->wkbType(), mSample.style() );
+  // A second run over the same file replaces style and metadata without asking.
   for ( int run = 0; run < 2; ++run )
-    QCOMPARE( storeDefaultStyle( source, ResultLayer::Spans, mSample.style() ), QString() );
+    QCOMPARE(
+      storeExtras( folder.filePath( QStringLiteral( "result.gpkg" ) ), { { "spans", qml, metadata } } ), QString() );
 
   QgsVectorLayer opened( source, QStringLiteral( "anything" ), QStringLiteral( "ogr" ) );
   QVERIFY( opened.isValid() );
@@ -204,17 +240,16 @@ void TestResultStyles::styleStaysInAGeoPackage()
   QStringList descriptions;
   QString error;
   QCOMPARE( opened.listStylesInDatabase( ids, names, descriptions, error ), 1 );
+  QCOMPARE( opened.metadata().abstract(), QStringLiteral( "It's a sample" ) );
   QCOMPARE( opened.attributeAlias( opened.fields().lookupField( field::P_LOW ) ),
     QStringLiteral( "Lowest pressure at rest, low case, psi" ) );
 }
 
-void TestResultStyles::otherFormatsKeepNoStyle()
+void TestResultStyles::extrasOfNoFileAreAWarning()
 {
   QTemporaryDir folder;
-  QCOMPARE( storeDefaultStyle( folder.filePath( QStringLiteral( "no.fgb" ) ), ResultLayer::Spans, mSample.style() ),
-    QString() );
-  QVERIFY( !storeDefaultStyle( folder.filePath( QStringLiteral( "no.gpkg" ) ), ResultLayer::Spans, mSample.style() )
-              .isEmpty() );
+  const QString error = storeExtras( folder.filePath( QStringLiteral( "no.gpkg" ) ), { { "spans", "", {} } } );
+  QVERIFY2( error.contains( QLatin1String( "the figures are there" ) ), qPrintable( error ) );
 }
 
 void TestResultStyles::layersAreStyledOnLoading()

@@ -83,12 +83,15 @@ void TestStyledMap::looksLikeTheControlImage()
   const LayerPointer findings = mSample.findings();
   const LayerPointer extremes = mSample.extremes();
   const LayerPointer stretches = mSample.stretches();
+  const LayerPointer limits = mSample.groundLimits();
   styleResult( *spans, ResultLayer::Spans, mSample.style() );
   styleResult( *nodes, ResultLayer::Nodes, mSample.style() );
   styleResult( *findings, ResultLayer::Findings, mSample.style() );
   styleResult( *extremes, ResultLayer::Extremes, mSample.style() );
   styleResult( *stretches, ResultLayer::Stretches, mSample.style() );
-  const QImage image = render( { extremes.get(), findings.get(), nodes.get(), spans.get(), stretches.get() } );
+  styleResult( *limits, ResultLayer::GroundLimits, mSample.style() );
+  const QImage image =
+    render( { extremes.get(), findings.get(), nodes.get(), spans.get(), limits.get(), stretches.get() } );
 
   const QString left =
     QDir( QStringLiteral( STILLHEAD_BINARY_DIR ) ).filePath( QStringLiteral( "tests/styledmap.png" ) );
