@@ -45,6 +45,11 @@ namespace stillhead
     addParameters( lockupParameter() );
   }
 
+  QString NetworkAlgorithm::sourcesParameter() const
+  {
+    return parameter::SOURCES;
+  }
+
   bool NetworkAlgorithm::prepareAlgorithm(
     const QVariantMap &parameters, QgsProcessingContext &context, QgsProcessingFeedback *feedback )
   {
@@ -60,7 +65,7 @@ namespace stillhead
       const QgsRasterLayer *terrain = parameterAsRasterLayer( parameters, parameter::TERRAIN, context );
       OutputSet( values, layers() )
         .check( { { parameter::MAINS, mains }, { parameter::LATERALS, laterals }, { parameter::TERRAIN, terrain },
-          { parameter::SOURCES, parameterAsVectorLayer( parameters, parameter::SOURCES, context ) },
+          { sourcesParameter(), parameterAsVectorLayer( parameters, sourcesParameter(), context ) },
           { parameter::DEVICES, parameterAsVectorLayer( parameters, parameter::DEVICES, context ) } } );
       return QVariantMap();
     } );
@@ -111,7 +116,7 @@ namespace stillhead
       layers.push_back( drawnLayer( parameter::MAINS, mMainKeys, parameters, context ) );
       if ( values.isSet( parameter::LATERALS ) )
         layers.push_back( drawnLayer( parameter::LATERALS, mLateralKeys, parameters, context ) );
-      const auto sources = pointSource( values, parameter::SOURCES, parameters, context );
+      const auto sources = pointSource( values, sourcesParameter(), parameters, context );
       const auto devices = pointSource( values, parameter::DEVICES, parameters, context );
       run->read( layers, sources.get(), devices.get() );
       run->solve();

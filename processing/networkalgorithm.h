@@ -25,6 +25,9 @@ namespace stillhead
       virtual std::unique_ptr<NetworkRun> makeRun(
         const ParameterValues &values, Terrain &terrain, QgsProcessingFeedback &feedback ) const = 0;
 
+      //! The parameter that holds a layer of sources.
+      virtual QString sourcesParameter() const;
+
       //! All shared parameters.
       void addNetworkParameters();
       void addSink( const QString &name, const QString &description, int sourceType, bool optional );

@@ -163,9 +163,9 @@ namespace stillhead
     return job;
   }
 
-  RefusalNames NetworkRun::refusalNames() const
+  RefusalNames NetworkRun::refusalNames( const QStringList &sources ) const
   {
-    return { mNames.sources, mNames.devices, [this]( int line ) { return featureText( line, mDrawn ); } };
+    return { sources, mNames.devices, [this]( int line ) { return featureText( line, mDrawn ); } };
   }
 
   void NetworkRun::solve()
@@ -180,7 +180,8 @@ namespace stillhead
     }
     catch ( const Refusal &refusal )
     {
-      throw QgsProcessingException( refusalText( refusal, refusalNames(), mSources.front().reachM, mUnits ) );
+      throw QgsProcessingException(
+        refusalText( refusal, refusalNames( mNames.sources ), mSources.front().reachM, mUnits ) );
     }
     // Writing needs the memory more.
     mTerrain.cache->clear();

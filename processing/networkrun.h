@@ -85,13 +85,15 @@ namespace stillhead
       std::unique_ptr<PlanMeasure> mMeasure;
       StaticResult mResult;
 
+      //! Names for a sentence of refusal, of \a sources.
+      RefusalNames refusalNames( const QStringList &sources ) const;
+
     private:
       void writeSurface( OutputSet &outputs, const RunFacts &facts, QVariantMap &results );
       void writeTable( OutputSet &outputs, const ResultTable &table, const RunFacts &facts,
         const ProgressShares::Share &share, QVariantMap &results );
       void readFeeds( const QgsProcessingFeatureSource *sources, const QgsProcessingFeatureSource *devices );
       StaticJob job( const PlanToTerrain &planToTerrain ) const;
-      RefusalNames refusalNames() const;
       void logSources() const;
       void logSource( std::size_t number ) const;
       void logFindings() const;

@@ -11,6 +11,8 @@ namespace stillhead::algorithm
   inline const QString STATIC_PRESSURE = QStringLiteral( "staticpressure" );
   inline const QString PRESSURE_SURFACE = QStringLiteral( "pressuresurface" );
   inline const QString PROPOSE_REGULATORS = QStringLiteral( "proposeregulators" );
+  inline const QString PROPOSE_BOOST = QStringLiteral( "proposeboost" );
+  inline const QString COMPARE_SOURCES = QStringLiteral( "comparesources" );
 } // namespace stillhead::algorithm
 
 namespace stillhead::parameter
@@ -36,6 +38,9 @@ namespace stillhead::parameter
   inline const QString LEAST_DROP = QStringLiteral( "LEAST_DROP" );
   inline const QString MOST_RATIO = QStringLiteral( "MOST_RATIO" );
   inline const QString SETTING_STEP = QStringLiteral( "SETTING_STEP" );
+  inline const QString BOOST_RISE = QStringLiteral( "BOOST_RISE" );
+  inline const QString OPTIONS = QStringLiteral( "OPTIONS" );
+  inline const QString SORT_BY = QStringLiteral( "SORT_BY" );
   inline const QString SOURCE_NOTE = QStringLiteral( "SOURCE_NOTE" );
   inline const QString COVER = QStringLiteral( "COVER" );
   inline const QString USE_LINE_Z = QStringLiteral( "USE_LINE_Z" );
@@ -67,6 +72,13 @@ namespace stillhead::output
   inline const QString SURFACE = QStringLiteral( "SURFACE" );
   inline const QString SCHEDULE = QStringLiteral( "SCHEDULE" );
   inline const QString REGULATORS = QStringLiteral( "REGULATORS" );
+  inline const QString BOOSTERS = QStringLiteral( "BOOSTERS" );
+  inline const QString BOOSTER_COUNT = QStringLiteral( "BOOSTER_COUNT" );
+  inline const QString BOOST_MOST = QStringLiteral( "BOOST_MOST" );
+  inline const QString LENGTH_NEWLY_OVER = QStringLiteral( "LENGTH_NEWLY_OVER" );
+  inline const QString COMPARISON = QStringLiteral( "COMPARISON" );
+  inline const QString OPTION_COUNT = QStringLiteral( "OPTION_COUNT" );
+  inline const QString BEST = QStringLiteral( "BEST" );
   inline const QString REGULATOR_COUNT = QStringLiteral( "REGULATOR_COUNT" );
   inline const QString REGULATOR_BOUND = QStringLiteral( "REGULATOR_BOUND" );
   inline const QString PROVEN = QStringLiteral( "PROVEN" );
@@ -143,6 +155,21 @@ namespace stillhead::field
   inline const QString PLACE_FROM = QStringLiteral( "place_from" );
   inline const QString PLACE_TO = QStringLiteral( "place_to" );
   inline const QString WHY = QStringLiteral( "why" );
+  inline const QString OUTLET_LOW = QStringLiteral( "outlet_low" );
+  inline const QString OUTLET_HIGH = QStringLiteral( "outlet_high" );
+  inline const QString LENGTH_SHORT = QStringLiteral( "length_short" );
+  inline const QString SERVED_WITHOUT = QStringLiteral( "served_without" );
+  inline const QString REGULATOR_FOLLOWS = QStringLiteral( "regulator_follows" );
+  inline const QString RANK = QStringLiteral( "rank" );
+  inline const QString SOURCE = QStringLiteral( "source" );
+  inline const QString LEVEL_HIGH = QStringLiteral( "level_high" );
+  inline const QString LEVEL_LOW = QStringLiteral( "level_low" );
+  inline const QString LENGTH_WITHIN = QStringLiteral( "length_within" );
+  inline const QString LENGTH_OVER = QStringLiteral( "length_over" );
+  inline const QString LENGTH_NOT_MENDED = QStringLiteral( "length_not_mended" );
+  inline const QString REGULATORS = QStringLiteral( "regulators" );
+  inline const QString PROVEN = QStringLiteral( "proven" );
+  inline const QString BOOSTERS = QStringLiteral( "boosters" );
   inline const QString NODE = QStringLiteral( "node" );
   inline const QString KIND = QStringLiteral( "kind" );
   inline const QString DEGREE = QStringLiteral( "degree" );

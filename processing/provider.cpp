@@ -3,7 +3,9 @@
 #include "processing/provider.h"
 
 #include "core/version.h"
+#include "processing/comparesourcesalgorithm.h"
 #include "processing/pressuresurfacealgorithm.h"
+#include "processing/proposeboostalgorithm.h"
 #include "processing/proposeregulatorsalgorithm.h"
 #include "processing/staticpressurealgorithm.h"
 
@@ -20,7 +22,8 @@ namespace stillhead
     //! Every algorithm of the provider, in the order in which the toolbox shows them.
     QList<QgsProcessingAlgorithm *> algorithmList()
     {
-      return { new StaticPressureAlgorithm(), new PressureSurfaceAlgorithm(), new ProposeRegulatorsAlgorithm() };
+      return { new StaticPressureAlgorithm(), new PressureSurfaceAlgorithm(), new ProposeRegulatorsAlgorithm(),
+        new ProposeBoostAlgorithm(), new CompareSourcesAlgorithm() };
     }
 
   } // namespace

@@ -170,6 +170,39 @@ namespace stillhead
     return list;
   }
 
+  ParameterList boostRiseParameter()
+  {
+    ParameterList list;
+    add( list, optionalNumber( parameter::BOOST_RISE, Text::tr( "Booster's rise at no flow" ) ),
+      Text::tr( "How far a booster's pressure at no flow stands above the pressure it adds while water runs: see its "
+                "maker's curve. In the pressure unit. Unset: 10 psi, 70 kPa, 0.7 bar, 7 m or 25 ft of water." ) );
+    return list;
+  }
+
+  ParameterList optionParameters()
+  {
+    ParameterList list;
+    add( list,
+      new QgsProcessingParameterFeatureSource( parameter::OPTIONS, Text::tr( "Options for the connection" ),
+        compat::sourceTypes( { compat::Source::Point } ) ),
+      Text::tr(
+        "Points, one for each option; each is looked at as the only source. Fields `kind` (pressure reading, water "
+        "level, level above ground) and `value`, and as needed `name`, `system`, `low`, `elevation`, `gauge_height`, "
+        "`boost`, `boost_low`, `note`, in the chosen units." ) );
+    add( list, optionalNumber( parameter::SOURCE_REACH, Text::tr( "Options join pipe within" ) ),
+      Text::tr( "Ground distance from an option's point to the pipe it joins, in the length unit. Unset: 10 m." ) );
+    add( list,
+      choice( parameter::SORT_BY, Text::tr( "Sort by" ),
+        { Text::tr( "Longest within limits" ), Text::tr( "Least over" ), Text::tr( "Least short" ),
+          Text::tr( "Fewest regulators" ), Text::tr( "Least boost" ) } ),
+      Text::tr( "What makes an option the better one. Default: the longest length of pipe within limits." ) );
+    add( list,
+      new QgsProcessingParameterFeatureSource(
+        parameter::DEVICES, Text::tr( "Devices" ), compat::sourceTypes( { compat::Source::Point } ), QVariant(), true ),
+      Text::tr( "Points on the pipe that stand whatever the option, as for static pressure along pipes. Optional." ) );
+    return list;
+  }
+
   ParameterList failedOpenParameter()
   {
     ParameterList list;

@@ -32,6 +32,12 @@ namespace stillhead
   //! LEAST_DROP, MOST_RATIO and SETTING_STEP.
   ParameterList proposalParameters();
 
+  //! How far a booster's pressure at no flow stands above that while water runs.
+  ParameterList boostRiseParameter();
+
+  //! Options for the connection, in place of a source.
+  ParameterList optionParameters();
+
   //! FAILED_OPEN.
   ParameterList failedOpenParameter();
 

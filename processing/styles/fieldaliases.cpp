@@ -124,6 +124,45 @@ namespace stillhead
         { field::PLACE_TO, QT_TRANSLATE_NOOP( "Stillhead", "May stand to, %2" ) },
         { field::WHY, QT_TRANSLATE_NOOP( "Stillhead", "Why" ) },
       };
+      static const Aliases boosters = {
+        { field::NAME, QT_TRANSLATE_NOOP( "Stillhead", "Name" ) },
+        { field::KIND, QT_TRANSLATE_NOOP( "Stillhead", "Kind" ) },
+        { field::BOOST, QT_TRANSLATE_NOOP( "Stillhead", "Adds at no flow, %1" ) },
+        { field::BOOST_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Adds while water runs, %1" ) },
+        { field::DIRECTION, QT_TRANSLATE_NOOP( "Stillhead", "Direction along the drawn line" ) },
+        { field::Z, QT_TRANSLATE_NOOP( "Stillhead", "Pipe elevation, %2" ) },
+        { field::INLET_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Inlet, low case, %1" ) },
+        { field::INLET_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Inlet, high case, %1" ) },
+        { field::OUTLET_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Outlet, low case, %1" ) },
+        { field::OUTLET_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Outlet, high case, %1" ) },
+        { field::LENGTH_SHORT, QT_TRANSLATE_NOOP( "Stillhead", "Length of short pipe that it serves, %2" ) },
+        { field::Z_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Pipe beyond it that needs most, %2" ) },
+        { field::Z_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Pipe beyond it that stands least, %2" ) },
+        { field::SERVED_WITHOUT, QT_TRANSLATE_NOOP( "Stillhead", "Highest pipe served without it, %2" ) },
+        { field::REGULATOR_FOLLOWS, QT_TRANSLATE_NOOP( "Stillhead", "A regulator must follow" ) },
+        { field::DRAWN_LAYER, QT_TRANSLATE_NOOP( "Stillhead", "Drawn layer" ) },
+        { field::DRAWN_FID, QT_TRANSLATE_NOOP( "Stillhead", "Drawn feature" ) },
+        { field::DISTANCE_ALONG, QT_TRANSLATE_NOOP( "Stillhead", "Distance from the start of the drawn feature, %2" ) },
+        { field::WHY, QT_TRANSLATE_NOOP( "Stillhead", "Why" ) },
+      };
+      static const Aliases comparison = {
+        { field::RANK, QT_TRANSLATE_NOOP( "Stillhead", "Rank" ) },
+        { field::NAME, QT_TRANSLATE_NOOP( "Stillhead", "Option" ) },
+        { field::SOURCE, QT_TRANSLATE_NOOP( "Stillhead", "What it gives" ) },
+        { field::LEVEL_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Static level, high case, elevation %2" ) },
+        { field::LEVEL_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Static level, low case, elevation %2" ) },
+        { field::LENGTH_WITHIN, QT_TRANSLATE_NOOP( "Stillhead", "Within limits, %2 of pipe" ) },
+        { field::LENGTH_OVER, QT_TRANSLATE_NOOP( "Stillhead", "Over, %2 of pipe" ) },
+        { field::LENGTH_SHORT, QT_TRANSLATE_NOOP( "Stillhead", "Short, %2 of pipe" ) },
+        { field::P_LOW, QT_TRANSLATE_NOOP( "Stillhead", "Lowest pressure, low case, %1" ) },
+        { field::P_HIGH, QT_TRANSLATE_NOOP( "Stillhead", "Highest pressure, high case, %1" ) },
+        { field::REGULATORS, QT_TRANSLATE_NOOP( "Stillhead", "Regulators needed" ) },
+        { field::PROVEN, QT_TRANSLATE_NOOP( "Stillhead", "That number is proven to be the least" ) },
+        { field::LENGTH_NOT_MENDED, QT_TRANSLATE_NOOP( "Stillhead", "Over and beyond mending, %2 of pipe" ) },
+        { field::BOOSTERS, QT_TRANSLATE_NOOP( "Stillhead", "Boosters needed" ) },
+        { field::BOOST, QT_TRANSLATE_NOOP( "Stillhead", "Largest boost while water runs, %1" ) },
+        { field::NOTE, QT_TRANSLATE_NOOP( "Stillhead", "Note" ) },
+      };
       static const Aliases groundLimits = {
         { field::WHAT, QT_TRANSLATE_NOOP( "Stillhead", "Ceiling or floor" ) },
         { field::ELEVATION, QT_TRANSLATE_NOOP( "Stillhead", "Ground elevation, %2" ) },
@@ -147,6 +186,10 @@ namespace stillhead
         return bandAreas;
       case ResultLayer::Regulators:
         return regulators;
+      case ResultLayer::Boosters:
+        return boosters;
+      case ResultLayer::Comparison:
+        return comparison;
       case ResultLayer::GroundLimits:
         return groundLimits;
       case ResultLayer::Surface:

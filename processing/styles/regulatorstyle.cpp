@@ -10,6 +10,7 @@
 
 #include <qgscategorizedsymbolrenderer.h>
 #include <qgsmarkersymbollayer.h>
+#include <qgssinglesymbolrenderer.h>
 #include <qgsvectorlayer.h>
 
 namespace stillhead
@@ -71,6 +72,22 @@ namespace stillhead
     }
 
   } // namespace
+
+  void styleBoosters( QgsVectorLayer &layer, const ResultStyle &style )
+  {
+    layer.setRenderer( new QgsSingleSymbolRenderer( markerSymbol( layersOf( DeviceKind::Booster ) ).release() ) );
+    labelPoints( layer,
+      QStringLiteral( "\"name\" || ': +' || format_number( \"boost_low\", 0 ) || ' %2 ' || %1 || '+' || "
+                      "format_number( \"boost\", 0 ) || ' %2'" )
+        .arg( QStringLiteral( "'%1 '" ).arg( Text::tr( "running, at no flow" ) ), style.pressureUnit ) );
+  }
+
+  void styleComparison( QgsVectorLayer &layer )
+  {
+    // A ring with the option's rank beside it.
+    layer.setRenderer( new QgsSingleSymbolRenderer( markerSymbol( { ring( 6.0 ) } ).release() ) );
+    labelPoints( layer, QStringLiteral( "\"rank\" || '. ' || \"name\"" ) );
+  }
 
   void styleRegulators( QgsVectorLayer &layer, const ResultStyle &style )
   {

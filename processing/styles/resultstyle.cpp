@@ -4,6 +4,7 @@
 
 #include "core/judgement/limits.h"
 #include "processing/displayunits.h"
+#include "processing/parameternames.h"
 #include "processing/styles/fieldaliases.h"
 #include "processing/text/cautions.h"
 #include "processing/text/text.h"
@@ -90,6 +91,12 @@ namespace stillhead
       break;
     case ResultLayer::Regulators:
       styleRegulators( *vector, style );
+      break;
+    case ResultLayer::Boosters:
+      styleBoosters( *vector, style );
+      break;
+    case ResultLayer::Comparison:
+      styleComparison( *vector );
       break;
     case ResultLayer::GroundLimits:
       styleGroundLimits( *vector, style );

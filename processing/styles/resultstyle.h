@@ -43,7 +43,9 @@ namespace stillhead
     Surface,
     BandAreas,
     GroundLimits,
-    Regulators
+    Regulators,
+    Boosters,
+    Comparison
   };
 
   //! A band in plain words with its unit: `under 30 psi`, `65 to 80 psi`, `100 psi and over`.
@@ -59,6 +61,8 @@ namespace stillhead
   void styleFindings( QgsVectorLayer &layer, const ResultStyle &style );
   void styleSurface( QgsRasterLayer &layer, const ResultStyle &style );
   void styleRegulators( QgsVectorLayer &layer, const ResultStyle &style );
+  void styleBoosters( QgsVectorLayer &layer, const ResultStyle &style );
+  void styleComparison( QgsVectorLayer &layer );
   void styleBandAreas( QgsVectorLayer &layer, const ResultStyle &style );
   void styleGroundLimits( QgsVectorLayer &layer, const ResultStyle &style );
 

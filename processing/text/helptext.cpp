@@ -120,4 +120,46 @@ namespace stillhead
     } );
   }
 
+  QString proposeBoostHelp()
+  {
+    return withCautions( {
+      Text::tr(
+        "For drawn pipe that is short of pressure: the least pressure to add while water runs, and the place nearest "
+        "the source at which a booster brings all pipe beyond it to the lowest acceptable pressure without lifting any "
+        "of it above the highest at no flow." ),
+      Text::tr(
+        "Inputs: as for static pressure along pipes, and how far a booster's pressure at no flow stands above the one "
+        "it adds while water runs. Devices given stay as they are. Where no place keeps all pipe beyond it within "
+        "limits, the booster stands just before the pipe that is short and `regulator_follows` says that a regulator "
+        "must follow it (Propose regulators, with the boosters as devices, finds where)." ),
+      Text::tr(
+        "Outputs: BOOSTERS, points that can be given back as DEVICES unchanged, each with what it adds at no flow "
+        "(`boost`) and while water runs (`boost_low`), its inlet and outlet, the length of short pipe it serves, the "
+        "highest pipe that is served without it, and why it stands there; SPANS, STRETCHES, EXTREMES and FINDINGS of "
+        "the drawing with the boosters in place; SUMMARY; and numbers." ),
+      unitsParagraph(),
+      Text::tr(
+        "Limits: a booster stands on a leg that alone feeds what is beyond it; where short pipe is looped from the "
+        "source on, a pump at the source is named instead. Flow is not looked at: size a booster for its flow, guard "
+        "it against running dry, and ask the water supplier before drawing on the main." ),
+    } );
+  }
+
+  QString compareSourcesHelp()
+  {
+    return withCautions( {
+      Text::tr(
+        "Sets options for the connection side by side: for each the lengths of pipe within limits, over and short at "
+        "rest, the fewest regulators it would need, and the boost it would need, sorted by what you choose." ),
+      Text::tr( "Inputs: mainlines and laterals, a bare-earth terrain raster, and a layer of points, each of which is "
+                "looked at "
+                "as the only source; limits and rules as in the other algorithms." ),
+      Text::tr(
+        "Outputs: COMPARISON, the options as points, the best first (`rank`), with their figures, or with the reason "
+        "why an option has none (`note`); SPANS and the other layers for the best option as it is, unregulated; "
+        "SUMMARY; and the numbers OPTION_COUNT and BEST (the number of the best option in the order of the layer)." ),
+      unitsParagraph(),
+    } );
+  }
+
 } // namespace stillhead

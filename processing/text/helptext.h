@@ -10,5 +10,7 @@ namespace stillhead
   QString staticPressureHelp();
   QString pressureSurfaceHelp();
   QString proposeRegulatorsHelp();
+  QString proposeBoostHelp();
+  QString compareSourcesHelp();
 
 } // namespace stillhead
