@@ -3,7 +3,9 @@
 # Writes the planning layers of the invented Sallowmere Park: what a planner has drawn (mainlines, laterals) and
 # noted (the reading at the meter). Coordinates are metres east and north of the park's own origin. Three faults are
 # drawn on purpose: an end that stops short of its main, a line that only crosses, and a leg under a pond.
-# Usage: make_layers.py planning.gpkg
+# With --reclaimed a second system is drawn and noted too: a cistern on the knoll with a line of its own, which crosses the
+# terrace main and must not join it.
+# Usage: make_layers.py [--reclaimed] planning.gpkg
 import os
 import sys
 
@@ -64,6 +66,11 @@ SOURCES = [
         "note": "Gauge on the test cock behind the meter: 71 psi on 13 January 2026, 5 am, 62 psi on 14 July 2026, 7 pm"}),
 ]
 
+RECLAIMED_MAIN = ("Dipping line", [(150, 590), (138, 470), (135, 300)])
+RECLAIMED_SOURCE = ((150, 590), {
+    "name": "Orchard cistern", "system": "reclaimed", "kind": "water level", "value": 440.0, "low": 436.0,
+    "note": "Overflow and lowest operating level by the drawing of the cistern"})
+
 PIPE_FIELDS = {
     "name": ogr.OFTString, "system": ogr.OFTString, "cover": ogr.OFTReal, "rating": ogr.OFTReal,
     "inside_diameter": ogr.OFTReal}
@@ -96,11 +103,16 @@ def write_layer(store, crs, name, kind, fields, rows):
         layer.CreateFeature(feature)
 
 
-def pipes(lines, cover):
-    return [(points, {"name": name, "cover": cover}) for name, points in lines]
+def pipes(lines, cover, **more):
+    return [(points, {"name": name, "cover": cover, **more}) for name, points in lines]
 
 
-def main(path):
+def main(path, reclaimed):
+    mains = pipes(MAINS, MAIN_COVER_FT)
+    sources = list(SOURCES)
+    if reclaimed:
+        mains += pipes([RECLAIMED_MAIN], MAIN_COVER_FT, system="reclaimed")
+        sources.append(RECLAIMED_SOURCE)
     gdal.UseExceptions()
     gdal.SetConfigOption("OGR_CURRENT_DATE", "2026-07-14T05:10:00.000Z")  # the same file from every run
     if os.path.exists(path):
@@ -108,14 +120,15 @@ def main(path):
     crs = osr.SpatialReference()
     crs.ImportFromEPSG(EPSG)
     store = ogr.GetDriverByName("GPKG").CreateDataSource(path)
-    write_layer(store, crs, "mainlines", ogr.wkbLineString, PIPE_FIELDS, pipes(MAINS, MAIN_COVER_FT))
+    write_layer(store, crs, "mainlines", ogr.wkbLineString, PIPE_FIELDS, mains)
     write_layer(store, crs, "laterals", ogr.wkbLineString, PIPE_FIELDS, pipes(LATERALS, LATERAL_COVER_FT))
-    write_layer(store, crs, "sources", ogr.wkbPoint, SOURCE_FIELDS, [([place], row) for place, row in SOURCES])
+    write_layer(store, crs, "sources", ogr.wkbPoint, SOURCE_FIELDS, [([place], row) for place, row in sources])
     write_layer(store, crs, "devices", ogr.wkbPoint, DEVICE_FIELDS, [])
     store = None
 
 
 if __name__ == "__main__":
-    if len(sys.argv) != 2:
-        sys.exit("Usage: make_layers.py planning.gpkg")
-    main(sys.argv[1])
+    arguments = [argument for argument in sys.argv[1:] if argument != "--reclaimed"]
+    if len(arguments) != 1:
+        sys.exit("Usage: make_layers.py [--reclaimed] planning.gpkg")
+    main(arguments[0], "--reclaimed" in sys.argv)

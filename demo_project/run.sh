@@ -1,8 +1,9 @@
 #!/bin/bash
 # SPDX-License-Identifier: GPL-2.0-or-later
 # The demo park in one command: installs what is missing, builds, makes the park, runs the main job headless, and writes
-# demo_project/out/: result.gpkg (spans nodes stretches extremes findings), surface.tif, map.png. `run.sh --desktop` then
-# opens the same project in QGIS with the native plugin loaded. Works as root or with sudo; quick when run again.
+# demo_project/out/: result.gpkg (spans nodes stretches extremes findings), surface.tif, map.png; and proposal.gpkg, the
+# regulators proposed with the pipe as it would be with them. `run.sh --desktop` then opens the same project in QGIS with the
+# native plugin loaded. Works as root or with sudo; quick when run again.
 # STILLHEAD_BUILD names another build folder than build/.
 set -euo pipefail
 here="$( cd "$( dirname "${BASH_SOURCE[0]}" )" && pwd )"
@@ -77,23 +78,39 @@ enable_package()
   "$( qgis_process_program )" plugins enable stillhead_headless || true
 }
 
+# sink TABLE [FILE]
 sink()
 {
-  echo "ogr:dbname='out/result.gpkg' table=\"$1\" (geom)"
+  echo "ogr:dbname='out/${2:-result.gpkg}' table=\"$1\" (geom)"
 }
 
 # Paths are relative, so that what the results say of their making holds on any machine.
-main_job()
+run_on_park()
 {
+  local algorithm="$1"
+  shift
   cd "$here"
-  "$( qgis_process_program )" --json run stillhead:staticpressure \
+  "$( qgis_process_program )" --json run "stillhead:$algorithm" \
     --MAINS="park/planning.gpkg|layername=mainlines" --LATERALS="park/planning.gpkg|layername=laterals" \
     --TERRAIN=park/terrain.tif \
     --SOURCE="320040,110380 [EPSG:32631]" --SOURCE_KIND=0 --SOURCE_VALUE=71 --SOURCE_LOW=62 --GAUGE_HEIGHT=2.5 \
     --SOURCE_NOTE="Lamp Row meter, gauge on the test cock behind it: 71 psi on 13 January 2026, 5 am, 62 psi on 14 July 2026, 7 pm" \
-    --LEAST=30 --MOST=80 --BANDS=30,45,60,80,100 --TERRAIN_RMSE=0.3 --READING_ERROR=1 \
+    --LEAST=30 --MOST=80 --BANDS=30,45,60,80,100 --TERRAIN_RMSE=0.3 --READING_ERROR=1 "$@"
+}
+
+main_job()
+{
+  run_on_park staticpressure \
     --SPANS="$( sink spans )" --NODES="$( sink nodes )" --STRETCHES="$( sink stretches )" \
-    --EXTREMES="$( sink extremes )" --FINDINGS="$( sink findings )" --SURFACE=out/surface.tif > out/run.json
+    --EXTREMES="$( sink extremes )" --FINDINGS="$( sink findings )" --SURFACE=out/surface.tif > "$out/run.json"
+}
+
+proposal_job()
+{
+  run_on_park proposeregulators --SETTING_STEP=1 \
+    --REGULATORS="$( sink regulators proposal.gpkg )" --SPANS="$( sink spans proposal.gpkg )" \
+    --STRETCHES="$( sink stretches proposal.gpkg )" --EXTREMES="$( sink extremes proposal.gpkg )" \
+    --FINDINGS="$( sink findings proposal.gpkg )" > "$out/proposal.json"
 }
 
 # A profile of its own: nothing of the user's is read or changed.
@@ -127,13 +144,14 @@ export XDG_RUNTIME_DIR="$session/run" QGIS_PLUGINPATH="$build/headless" LC_ALL=C
 step "Building Stillhead (some minutes the first time) ..." configure_and_build
 step "Making the park ..." make_park
 headless=( env QT_QPA_PLATFORM=offscreen QGIS_CUSTOM_CONFIG_PATH="$session/config" )
-export -f qgis_process_program enable_package main_job sink
-export here
+export -f qgis_process_program enable_package run_on_park main_job proposal_job sink
+export here out
 if [ ! -f "$session/enabled" ]; then
   step "Setting up a private QGIS profile ..." "${headless[@]}" bash -c enable_package
   touch "$session/enabled"
 fi
 step "Computing static pressure ..." "${headless[@]}" bash -c main_job
+step "Proposing regulators ..." "${headless[@]}" bash -c proposal_job
 step "Drawing the map ..." "${headless[@]}" PYTHONDONTWRITEBYTECODE=1 "$here/render_map.py" "$out/map.png"
 echo
 "$here/show_summary.py" "$out/run.json"

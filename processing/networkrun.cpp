@@ -351,6 +351,7 @@ namespace stillhead
       resultMetadata( facts, mValues.definition( table.output )->description(), layerNameOf( written.id ) );
     written.geoPackage = outputs.geoPackageOf( table.output );
     written.fields = table.fields;
+    written.legend = table.legend;
     written.type = table.type;
     finishOnLoading( written, mStyle, mValues.context() );
     results.insert( table.output, written.id );

@@ -164,7 +164,7 @@ namespace stillhead
         "maker's sheet. In the pressure unit. Unset: 10 psi, 70 kPa, 0.7 bar, 7 m or 25 ft of water." ) );
     add( list, number( parameter::MOST_RATIO, Text::tr( "Largest ratio of inlet to setting" ), 3.0 ),
       Text::tr( "Of gauge pressures, high case: a larger reduction wears a valve out and is split between two. "
-                "0: no limit. Default: 3." ) );
+                "0: no limit. Default: 3 (common practice, no source)." ) );
     add( list, number( parameter::SETTING_STEP, Text::tr( "Settings are multiples of" ), 0.0 ),
       Text::tr( "In the pressure unit; 5 gives settings such as 35 and 40. Default: 0, any setting." ) );
     return list;

@@ -3,7 +3,7 @@
 #include "processing/staticpressurerun.h"
 
 #include "processing/parameternames.h"
-#include "processing/reading/limitsreader.h"
+#include "processing/reading/unitsreader.h"
 #include "processing/text/summarytext.h"
 #include "processing/text/text.h"
 

@@ -3,7 +3,9 @@
 #include "processing/styles/storedstyle.h"
 
 #include <qgscoordinatereferencesystem.h>
+#include <qgsfeature.h>
 #include <qgsmemoryproviderutils.h>
+#include <qgsvectordataprovider.h>
 #include <qgsvectorlayer.h>
 
 #include <QDomDocument>
@@ -13,10 +15,19 @@
 namespace stillhead
 {
 
-  QString styleText( ResultLayer what, const QgsFields &fields, compat::WkbType type, const ResultStyle &style )
+  QString styleText( ResultLayer what, const QgsFields &fields, compat::WkbType type, const LegendValues &legend,
+    const ResultStyle &style )
   {
     const std::unique_ptr<QgsVectorLayer> layer( QgsMemoryProviderUtils::createMemoryLayer(
       QStringLiteral( "result" ), fields, type, QgsCoordinateReferenceSystem() ) );
+    // Styles look into the layer for what to show in the legend.
+    const int index = fields.lookupField( legend.field );
+    for ( const QString &value : legend.values )
+    {
+      QgsFeature row( layer->fields() );
+      row.setAttribute( index, value );
+      layer->dataProvider()->addFeature( row );
+    }
     styleResult( *layer, what, style );
     QString error;
     QDomDocument qml;

@@ -9,14 +9,23 @@
 #include <qgsfields.h>
 
 #include <QString>
+#include <QStringList>
 
 namespace stillhead
 {
+
+  //! Values that stand in a field and that the legend therefore shows (states, findings, kinds of device).
+  struct LegendValues
+  {
+      QString field; //!< blank: the legend depends on no field
+      QStringList values;
+  };
 
   /**
    * The style of the output \a what with \a fields and geometries of \a type, in the platform's own format. Call it in the main
    * thread: it makes symbols.
    */
-  QString styleText( ResultLayer what, const QgsFields &fields, compat::WkbType type, const ResultStyle &style );
+  QString styleText( ResultLayer what, const QgsFields &fields, compat::WkbType type, const LegendValues &legend,
+    const ResultStyle &style );
 
 } // namespace stillhead

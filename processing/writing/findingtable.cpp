@@ -35,6 +35,10 @@ namespace stillhead
     table.type = compat::WkbType::Point;
     table.fields = findingFields();
     table.rows = context.result.findings.size();
+    table.legend.field = field::FINDING;
+    for ( const Finding &finding : context.result.findings )
+      table.legend.values << QString::fromLatin1( findingName( finding.code ) );
+    table.legend.values.removeDuplicates();
     table.make = [&context]( std::size_t first, std::size_t last, QgsFeature *features ) {
       for ( std::size_t i = first; i < last; ++i )
       {

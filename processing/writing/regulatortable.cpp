@@ -128,6 +128,10 @@ namespace stillhead
     table.type = compat::WkbType::PointZ;
     table.fields = regulatorFields();
     table.rows = rows.size();
+    table.legend.field = field::KIND;
+    for ( const RegulatorRow &row : rows )
+      table.legend.values << QString::fromLatin1( deviceKindName( row.device.kind ) );
+    table.legend.values.removeDuplicates();
     table.hasGaps = std::any_of(
       rows.begin(), rows.end(), []( const RegulatorRow &row ) { return std::isnan( row.standing.elevationM ); } );
     table.make = [&context, &rows, starts = partStartsM( context )](

@@ -81,7 +81,7 @@ namespace stillhead
     {
       if ( !written.geoPackage.isEmpty() )
         extras[written.geoPackage].push_back( { layerNameOf( written.id ),
-          styleText( written.what, written.fields, written.type, style ), written.metadata } );
+          styleText( written.what, written.fields, written.type, written.legend, style ), written.metadata } );
     }
     for ( const auto &[path, ofLayers] : extras )
     {

@@ -5,6 +5,7 @@
 
 #include "processing/qgiscompat.h"
 #include "processing/styles/resultstyle.h"
+#include "processing/styles/storedstyle.h"
 
 #include <qgsfields.h>
 #include <qgslayermetadata.h>
@@ -24,6 +25,7 @@ namespace stillhead
       QgsLayerMetadata metadata;
       QString geoPackage; //!< the file, which keeps style and metadata; blank where the layer is elsewhere
       QgsFields fields;
+      LegendValues legend;
       compat::WkbType type = compat::WkbType::NoGeometry;
   };
 

@@ -8,6 +8,7 @@
 #include "processing/qgiscompat.h"
 #include "processing/reading/drawingreader.h"
 #include "processing/styles/resultstyle.h"
+#include "processing/styles/storedstyle.h"
 #include "processing/text/findingtext.h"
 
 #include <qgsfeature.h>
@@ -27,6 +28,7 @@ namespace stillhead
       std::size_t rows = 0;
       //! Fills features[0, last − first) with the rows [first, last).
       std::function<void( std::size_t first, std::size_t last, QgsFeature *features )> make;
+      LegendValues legend;
       //! Some Z or M is not a number, which not every format can hold.
       bool hasGaps = false;
   };

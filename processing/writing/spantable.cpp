@@ -119,6 +119,18 @@ namespace stillhead
       return QgsGeometry( std::make_unique<QgsLineString>( x, y, z, m ) );
     }
 
+    QStringList statesIn( const std::vector<Piece> &pieces )
+    {
+      QStringList states;
+      for ( int state = 0; state <= static_cast<int>( State::WithinLimits ); ++state )
+      {
+        const auto own = static_cast<State>( state );
+        if ( std::any_of( pieces.begin(), pieces.end(), [own]( const Piece &piece ) { return piece.state == own; } ) )
+          states << QString::fromLatin1( stateName( own ) );
+      }
+      return states;
+    }
+
   } // namespace
 
   QStringList spanFieldNames()
@@ -136,6 +148,7 @@ namespace stillhead
     for ( const QgsField &field : ownFields() )
       table.fields.append( field );
     table.rows = context.result.pieces.size();
+    table.legend = { field::STATE, statesIn( context.result.pieces ) };
     table.hasGaps = std::any_of( context.result.pieces.begin(), context.result.pieces.end(),
       []( const Piece &piece ) { return std::isnan( piece.pressureHighPa ); } );
     const SpanWords words( context );

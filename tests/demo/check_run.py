@@ -30,6 +30,15 @@ def check_layers():
     check(sorted(styles) == sorted((name, 1) for name in LAYERS), f"every layer has one style, its default: {styles}")
 
 
+def check_proposal():
+    store = ogr.Open(os.path.join(OUT, "proposal.gpkg"))
+    rows = [(row["drawn_layer"], row["drawn_fid"], row["set"], row["why"]) for row in store.GetLayer("regulators")]
+    check(sorted(row[:2] for row in rows) == [("mainlines", 2), ("mainlines", 4)], f"two regulators on their mains: {rows}")
+    check(all(row[2] == round(row[2]) and row[3] for row in rows), "settings in whole psi, each with its reason")
+    over = sum(row["length"] for row in store.GetLayer("spans") if row["over"])
+    check(abs(over - 322.0) < 1.0, f"322 ft stay over ({over})")
+
+
 def check_surface():
     surface = gdal.Open(os.path.join(OUT, "surface.tif"))
     check((surface.RasterXSize, surface.RasterYSize, surface.RasterCount) == (1001, 701, 2), "surface on the terrain's grid")
@@ -66,11 +75,12 @@ def main(build):
     check(result.returncode == 0, "run.sh ends well")
     said = " ".join(result.stdout.split())
     for words in ("Of 14,675 ft of pipe, 8,041 ft stands within 30 to 80 psi", "4,800 ft is over", "Pressure at rest.",
-                  "106 psi, pipe 323 ft", "95 psi, pipe 348 ft", "out/map.png"):
+                  "106 psi, pipe 323 ft", "95 psi, pipe 348 ft", "No plan can have fewer.", "out/map.png"):
         check(words in said, f"the summary says “{words}”")
     with open(os.path.join(OUT, "run.json"), encoding="utf-8") as file:
         check(json.load(file)["results"]["STRETCH_COUNT"] == 5, "run.json has the results")
     check_layers()
+    check_proposal()
     check_surface()
     check_map()
     check_project()

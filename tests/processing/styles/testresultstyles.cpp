@@ -224,7 +224,8 @@ void TestResultStyles::styleStaysInAGeoPackage()
   const QString source = writeGeoPackage( *layer, folder.filePath( QStringLiteral( "result.gpkg" ) ) );
   QgsLayerMetadata metadata;
   metadata.setAbstract( QStringLiteral( "It's a sample" ) );
-  const QString qml = styleText( ResultLayer::Spans, layer->fields(), layer->wkbType(), mSample.style() );
+  const QString qml = styleText(
+    ResultLayer::Spans, layer->fields(), layer->wkbType(), { field::STATE, { "over limit" } }, mSample.style() );
   // A second run over the same file replaces style and metadata without asking.
   for ( int run = 0; run < 2; ++run )
     QCOMPARE(
@@ -235,6 +236,9 @@ void TestResultStyles::styleStaysInAGeoPackage()
   QCOMPARE( opened.renderer()->type(), QStringLiteral( "RuleRenderer" ) );
   QVERIFY( opened.renderer()->usingSymbolLevels() );
   QVERIFY( legendOf( opened ).contains( QStringLiteral( "60 to 80 psi" ) ) );
+  // What the layer holds stands in the stored legend too.
+  QVERIFY( legendOf( opened ).contains( QStringLiteral( "over limit: more than 80 psi (high case)" ) ) );
+  QVERIFY( !legendOf( opened ).contains( QStringLiteral( "no source: joined to none" ) ) );
   QStringList ids;
   QStringList names;
   QStringList descriptions;
