@@ -205,8 +205,8 @@ void TestFewest::neverFewerNeverMore_data()
 {
   QTest::addColumn<bool>( "unequalRoles" );
   QTest::addColumn<int>( "trees" );
-  QTest::newRow( "one limit" ) << false << 4000;
-  QTest::newRow( "laterals have their own" ) << true << 4000;
+  QTest::newRow( "one limit" ) << false << 2000;
+  QTest::newRow( "laterals have their own" ) << true << 2000;
 }
 
 void TestFewest::neverFewerNeverMore()
@@ -242,7 +242,7 @@ void TestFewest::rulesKeptWherePossible()
   Random random( 7 );
   int stricter = 0;
   int impossible = 0;
-  for ( int i = 0; i < 1200; ++i )
+  for ( int i = 0; i < 600; ++i )
   {
     Tree tree = randomTree( random, i % 2 == 1 );
     tree.rules.leastDropPa = pick( random, 0, 25 );
