@@ -234,7 +234,7 @@ void TestFewest::neverFewerNeverMore()
   }
   // The trees must put the question: none, one, two, three and more regulators all occur.
   for ( const int count : counts )
-    QVERIFY2( count > trees / 200, qPrintable( QString::number( count ) ) );
+    QVERIFY2( count > trees / 400, qPrintable( QString::number( count ) ) );
 }
 
 void TestFewest::rulesKeptWherePossible()
