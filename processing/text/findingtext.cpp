@@ -138,8 +138,10 @@ namespace stillhead
           .arg( device );
       case FindingCode::CannotBeMended:
         if ( std::isnan( finding.figureM ) )
-          return Text::tr( "No plan was found that brings %1 of looped pipe within limits and keeps all served; part "
-                           "the loop with closed valves, or prove the pipe for the pressure shown." )
+          return Text::tr(
+            "No plan was found that brings %1 of pipe here within limits and keeps all that is served "
+            "(looped pipe, or legs that lie on each other); part the loop with closed valves, or prove the "
+            "pipe for the pressure shown." )
             .arg( units.lengthText( finding.lengthM ) );
         return Text::tr(
           "No regulator can bring %1 of pipe here within limits while pipe at %2 behind it is served; prove the "

@@ -238,7 +238,8 @@ namespace stillhead::test
     for ( const double value : { totals.lengthM, totals.withinM, totals.overM, totals.shortM, totals.noSourceM,
             totals.noTerrainM, totals.closeCallM, totals.lowestPa, totals.highestPa } )
       sums += " " + bits( value );
-    rows << sums << "levels " + bits( result.sources.front().levels.highM ) + " " + bits( result.sources.front().levels.lowM );
+    rows << sums
+         << "levels " + bits( result.sources.front().levels.highM ) + " " + bits( result.sources.front().levels.lowM );
     rows.sort();
     return rows;
   }
