@@ -61,6 +61,11 @@ namespace stillhead
       extremeTable( context ), findingTable( context ) };
   }
 
+  QString CompareSourcesRun::sourcesParameter() const
+  {
+    return parameter::OPTIONS;
+  }
+
   QString CompareSourcesRun::title() const
   {
     return Text::tr( "comparison of sources" );

@@ -22,6 +22,7 @@ namespace stillhead
       void compute( const StaticJob &job, Monitor &monitor ) override;
       std::vector<ResultTable> tables(
         const ResultContext &context, const std::vector<QgsGeometry> &outlines ) const override;
+      QString sourcesParameter() const override;
       QString title() const override;
       QString summary( const ResultContext &context ) const override;
       void addNumbers( QVariantMap &results ) const override;

@@ -92,6 +92,11 @@ namespace stillhead
 
   NetworkRun::~NetworkRun() = default;
 
+  QString NetworkRun::sourcesParameter() const
+  {
+    return parameter::SOURCES;
+  }
+
   bool NetworkRun::isAsked( const QString &output ) const
   {
     return mLayers.contains( output ) && Destination( mValues, output ).isAsked();
@@ -126,7 +131,7 @@ namespace stillhead
     if ( sources )
     {
       const double reachM = readDistance( mValues, parameter::SOURCE_REACH, mUnits ).value_or( SourceInput().reachM );
-      mSources = readSources( *sources, reachM, mUnits, mDrawn.crs, transforms, mDrawn.drawing );
+      mSources = readSources( *sources, sourcesParameter(), reachM, mUnits, mDrawn.crs, transforms, mDrawn.drawing );
     }
     else
     {

@@ -59,6 +59,9 @@ namespace stillhead
       virtual std::vector<ResultTable> tables(
         const ResultContext &context, const std::vector<QgsGeometry> &outlines ) const = 0;
 
+      //! The parameter that holds a layer of sources.
+      virtual QString sourcesParameter() const;
+
       //! What was done, as metadata says it: "static pressure along pipes".
       virtual QString title() const = 0;
 

@@ -60,12 +60,12 @@ namespace stillhead
 
   } // namespace
 
-  std::vector<SourceInput> readSources( const QgsProcessingFeatureSource &layer, double reachM,
-    const DisplayUnits &units, const QgsCoordinateReferenceSystem &crs, const QgsCoordinateTransformContext &transforms,
-    Drawing &drawing )
+  std::vector<SourceInput> readSources( const QgsProcessingFeatureSource &layer, const QString &parameterName,
+    double reachM, const DisplayUnits &units, const QgsCoordinateReferenceSystem &crs,
+    const QgsCoordinateTransformContext &transforms, Drawing &drawing )
   {
     std::vector<SourceInput> sources;
-    readPoints( layer, parameter::SOURCES, units, crs, transforms, drawing,
+    readPoints( layer, parameterName, units, crs, transforms, drawing,
       [&]( const PointRow &row, const PlanPoint &place, int system ) {
         SourceInput input;
         input.source = sourceOf( row );
@@ -77,7 +77,7 @@ namespace stillhead
         sources.push_back( input );
       } );
     if ( sources.empty() )
-      throw QgsProcessingException( Text::tr( "SOURCES has no rows; add the sources, or give SOURCE instead." ) );
+      throw QgsProcessingException( Text::tr( "%1 has no rows; add the points and run again." ).arg( parameterName ) );
     return sources;
   }
 

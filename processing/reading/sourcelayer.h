@@ -11,11 +11,11 @@ namespace stillhead
 {
 
   /**
-   * Reads the layer; \a reachM holds for every source.
+   * Reads the layer that the parameter \a parameterName gives; \a reachM holds for every source.
    * \throws QgsProcessingException for an unknown kind, a missing value, a low case above the high one, or no row at all
    */
-  std::vector<SourceInput> readSources( const QgsProcessingFeatureSource &layer, double reachM,
-    const DisplayUnits &units, const QgsCoordinateReferenceSystem &crs, const QgsCoordinateTransformContext &transforms,
-    Drawing &drawing );
+  std::vector<SourceInput> readSources( const QgsProcessingFeatureSource &layer, const QString &parameterName,
+    double reachM, const DisplayUnits &units, const QgsCoordinateReferenceSystem &crs,
+    const QgsCoordinateTransformContext &transforms, Drawing &drawing );
 
 } // namespace stillhead

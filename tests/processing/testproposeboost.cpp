@@ -28,7 +28,7 @@ class TestProposeBoost : public QObject
     Outcome propose( const QVariantMap &changes = {} ) const
     {
       QVariantMap all = mSlope.parameters( { { "BOOSTERS", Slope::temporary() }, { "SOURCE", place( 300, 0 ) },
-        { "SOURCE_VALUE", 30 }, { "SOURCE_LOW", 30 }, { "BOOST_RISE", 5 } } );
+        { "SOURCE_VALUE", 100 }, { "SOURCE_LOW", 100 }, { "BOOST_RISE", 5 } } );
       all.remove( "NODES" );
       for ( auto change = changes.constBegin(); change != changes.constEnd(); ++change )
         all.insert( change.key(), change.value() );
@@ -77,7 +77,7 @@ void TestProposeBoost::givenBackAsDevices()
   QVERIFY( propose( { { "BOOSTERS", file } } ).ok );
   const Outcome run = runAlgorithm( "staticpressure",
     mSlope.parameters(
-      { { "DEVICES", file }, { "SOURCE", place( 300, 0 ) }, { "SOURCE_VALUE", 30 }, { "SOURCE_LOW", 30 } } ) );
+      { { "DEVICES", file }, { "SOURCE", place( 300, 0 ) }, { "SOURCE_VALUE", 100 }, { "SOURCE_LOW", 100 } } ) );
   QVERIFY2( run.ok, qPrintable( run.errors.join( '\n' ) ) );
   QCOMPARE( run.number( "LENGTH_SHORT" ), 0.0 );
   QCOMPARE( run.number( "LENGTH_OVER" ), 0.0 );
