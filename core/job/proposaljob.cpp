@@ -55,6 +55,18 @@ namespace stillhead
       }
     }
 
+    //! Settings come from levels; what is a multiple of the step but for rounding becomes one to the bit.
+    void toSteps( Proposal &proposal, double stepPa )
+    {
+      constexpr double ROUNDING = 1e-6; // of a step
+      for ( ProposedRegulator &own : proposal.regulators )
+      {
+        const double steps = stepPa > 0.0 ? own.setPa / stepPa : 0.0;
+        if ( stepPa > 0.0 && std::abs( steps - std::round( steps ) ) < ROUNDING )
+          own.setPa = std::round( steps ) * stepPa;
+      }
+    }
+
     Device deviceOf( const ProposedRegulator &regulator, const CanonicalDrawing &drawing, double risePa )
     {
       const CanonicalLine &line = drawing.lines[index( regulator.at.line )];
@@ -98,6 +110,7 @@ namespace stillhead
       stopIfCancelled( monitor );
       result.proposal = proposeOnGraph( graph, rulesOf( job ) );
       makeExact( result.proposal, places );
+      toSteps( result.proposal, job.settingStepPa );
       StaticJob with = job.statics;
       with.schedule = true;
       for ( const ProposedRegulator &regulator : result.proposal.regulators )

@@ -24,7 +24,7 @@ class TestDrawnFields : public QObject
     static QStringList ownFields()
     {
       return { "span", "role", "drawn_fid", "length", "z_low", "z_high", "p_low", "p_high", "band", "band_text",
-        "state", "over", "short", "pressure_zone", "doubt", "close_call" };
+        "state", "over", "short", "pressure_zone", "doubt", "close_call", "p_failed_open", "failed_open_cause" };
     }
 };
 

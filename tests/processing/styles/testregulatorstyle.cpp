@@ -71,7 +71,8 @@ void TestRegulatorStyle::everyKindHasItsOwnShape()
     QCOMPARE( renderer->categories().size(), 1 );
     const QImage picture = renderer->categories().first().symbol()->asImage( QSize( 48, 48 ) );
     QVERIFY( !picture.isNull() );
-    pictures.insert( QByteArray( reinterpret_cast<const char *>( picture.constBits() ), picture.sizeInBytes() ) );
+    pictures.insert(
+      QByteArray( reinterpret_cast<const char *>( picture.constBits() ), static_cast<int>( picture.sizeInBytes() ) ) );
   }
   QCOMPARE( pictures.size(), kinds.size() );
 }
