@@ -159,6 +159,11 @@ namespace stillhead
         "why an option has none (`note`); SPANS and the other layers for the best option as it is, unregulated; "
         "SUMMARY; and the numbers OPTION_COUNT and BEST (the number of the best option in the order of the layer)." ),
       unitsParagraph(),
+      Text::tr(
+        "Limits: options are compared by pressure at rest alone; what a connection can deliver, and what it costs, is "
+        "not looked at. The numbers of regulators and boosters are each counted on the drawing as it is, not one on "
+        "top "
+        "of the other." ),
     } );
   }
 

@@ -92,7 +92,19 @@ class TestContract : public QObject
     void everyAlgorithmSaysWhatItIs();
 
   private:
-    static QStringList ids() { return { "staticpressure", "pressuresurface", "proposeregulators" }; }
+    static QStringList ids()
+    {
+      return { "staticpressure", "pressuresurface", "proposeregulators", "proposeboost", "comparesources" };
+    }
+
+    //! A layer of options with one point, at the start of the slope.
+    static LayerPointer options()
+    {
+      return drawLayer( QStringLiteral( "Point?crs=EPSG:32631&field=kind:string&field=value:double" ),
+        { { QStringLiteral( "POINT(%1)" ).arg( at( 0, 0 ) ), { QStringLiteral( "water level" ), 150.0 } } },
+        QStringLiteral( "options" ) );
+    }
+
     static std::unique_ptr<QgsProcessingAlgorithm> algorithm( const QString &id )
     {
       return std::unique_ptr<QgsProcessingAlgorithm>(
@@ -122,6 +134,18 @@ void TestContract::isAsWritten()
     if ( id == "proposeregulators" )
       lines << fieldsOf( runAlgorithm( id, mSlope.parameters( { { "REGULATORS", Slope::temporary() } } ) ),
         { "REGULATORS", "SPANS", "STRETCHES", "EXTREMES", "FINDINGS" } );
+    if ( id == "proposeboost" )
+      lines << fieldsOf(
+        runAlgorithm( id, mSlope.parameters( { { "BOOSTERS", Slope::temporary() } } ) ), { "BOOSTERS" } );
+    if ( id == "comparesources" )
+    {
+      const LayerPointer layer = options();
+      QVariantMap parameters =
+        mSlope.parameters( { { "COMPARISON", Slope::temporary() }, { "OPTIONS", asParameter( layer ) } } );
+      for ( const char *name : { "SOURCE", "SOURCE_KIND", "SOURCE_VALUE", "SOURCE_LOW" } )
+        parameters.remove( QString::fromLatin1( name ) );
+      lines << fieldsOf( runAlgorithm( id, parameters ), { "COMPARISON" } );
+    }
   }
   lines << QString() << "states";
   for ( int state = 0; state <= static_cast<int>( stillhead::State::WithinLimits ); ++state )
