@@ -22,8 +22,7 @@ class TestCompareSources : public QObject
     LayerPointer options( const std::vector<std::pair<double, double>> &eastAndLevel ) const
     {
       auto layer = std::make_unique<QgsVectorLayer>(
-        "Point?crs=EPSG:32631&field=name:string&field=kind:string&field=value:double", "options",
-        "memory" );
+        "Point?crs=EPSG:32631&field=name:string&field=kind:string&field=value:double", "options", "memory" );
       QgsFeatureList rows;
       for ( const auto &[east, level] : eastAndLevel )
       {
