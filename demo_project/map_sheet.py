@@ -19,6 +19,7 @@ SCALE = 3100
 MAP = QRectF(10, 30, 300, 217)
 CENTRE = (320482.5, 110345.0)
 LEGEND_WIDTH = 50  # characters
+REGULATORS = "Regulators proposed"
 HIDDEN = ("Mainlines", "Laterals", "Devices", "Pressure surface")  # the results draw the pipe
 
 COLOUR_NOTE = "Colour shows pressure band, not utility. A pressure equal to a band limit belongs to the band above."
@@ -49,13 +50,19 @@ def add_map(layout, project):
     layout.addLayoutItem(item)
     item.attemptMove(QgsLayoutPoint(MAP.x(), MAP.y(), MM))
     item.attemptResize(QgsLayoutSize(MAP.width(), MAP.height(), MM))
-    item.setLayers([layer for layer in project.layerTreeRoot().layerOrder() if layer.name() not in HIDDEN])
-    item.setKeepLayerSet(True)
+    show_layers(layout, project)
     half_width, half_height = (size / 2000.0 * SCALE for size in (MAP.width(), MAP.height()))
     item.setExtent(QgsRectangle(CENTRE[0] - half_width, CENTRE[1] - half_height,
                                 CENTRE[0] + half_width, CENTRE[1] + half_height))
     item.setFrameEnabled(True)
     return item
+
+
+def show_layers(layout, project):
+    """Lets the map show all layers of the project but those that the results stand for."""
+    item = layout.itemById("map")
+    item.setLayers([layer for layer in project.layerTreeRoot().layerOrder() if layer.name() not in HIDDEN])
+    item.setKeepLayerSet(True)
 
 
 def add_scale(layout, linked_map):
@@ -111,24 +118,36 @@ def add(project):
     fill(layout, project)
 
 
-def fill(layout, project):
-    """Brings legend and texts up to the last run."""
+def fill(layout, project, run="run.json"):
+    """Brings legend and texts up to the last run, whose own account is the file `run`."""
     fill_legend(layout.itemById("legend"), project)
-    path = os.path.join(os.path.dirname(os.path.abspath(__file__)), "out", "run.json")
+    path = os.path.join(os.path.dirname(os.path.abspath(__file__)), "out", run)
     with open(path, encoding="utf-8") as file:
         fill_texts(layout, json.load(file))
+
+
+def static_level(found):
+    if "STATIC_LEVEL_HIGH" not in found:
+        return []
+    return [f"Static level: elevation {found['STATIC_LEVEL_HIGH']:.1f} ft high case, {found['STATIC_LEVEL_LOW']:.1f} ft "
+            "low case."]
 
 
 def fill_texts(layout, run):
     given, found = run["inputs"], run["results"]
     answer, *cautions = found["SUMMARY"].split("\n\n")
+    if "REGULATOR_COUNT" in found:
+        # The plan has a paragraph of its own.
+        answer, cautions = f"{answer}\n{cautions[0]}", cautions[1:]
+        layout.itemById("title").setText(
+            f"Sallowmere Park: static pressure with {found['REGULATOR_COUNT']} proposed regulators in place")
     layout.itemById("subtitle").setText(
         f"Water at rest: {given['SOURCE_VALUE']} psi in the high case (night, winter), {given['SOURCE_LOW']} psi in the low "
         f"case (summer peak). Limits {given['LEAST']} to {given['MOST']} psi.")
     layout.itemById("reading").setText("\n".join((
         f"Source, the circle with a cross: {given['SOURCE_NOTE']}.",
         f"Gauge {given['GAUGE_HEIGHT']} ft above ground.",
-        f"Static level: elevation {found['STATIC_LEVEL_HIGH']:.1f} ft high case, {found['STATIC_LEVEL_LOW']:.1f} ft low case.",
+        *static_level(found),
         "Ground: terrain.tif, bare earth as supplied, 1 m cells, heights in feet. Cover 2 ft over mainlines, 1 ft over "
         "laterals.",
         f"Terrain error {given['TERRAIN_RMSE']} ft, reading ± {given['READING_ERROR']} psi.",
@@ -175,6 +194,8 @@ def fill_legend(legend, project):
     caution = next(index for index, text in enumerate(texts) if text.startswith("Pressure at rest. "))
     for begin, end in zip(headings, headings[1:] + [caution]):
         add_to_legend(legend, spans, texts[begin], lambda text, part=texts[begin + 1:end]: text in part)
+    if REGULATORS in layers:
+        add_to_legend(legend, layers[REGULATORS], "Proposed", lambda text: True)
     add_to_legend(legend, layers["Worst places"], "Worst places", 
                   lambda text: text.endswith("stretch") or text.startswith(("summit", "sag")))
     add_to_legend(legend, layers["Stretches over or short"], "", lambda text: True,

@@ -153,6 +153,7 @@ fi
 step "Computing static pressure ..." "${headless[@]}" bash -c main_job
 step "Proposing regulators ..." "${headless[@]}" bash -c proposal_job
 step "Drawing the map ..." "${headless[@]}" PYTHONDONTWRITEBYTECODE=1 "$here/render_map.py" "$out/map.png"
+step "Drawing the proposal ..." "${headless[@]}" PYTHONDONTWRITEBYTECODE=1 "$here/render_map.py" "$out/proposal.png" --proposal
 echo
 "$here/show_summary.py" "$out/run.json"
 

@@ -45,15 +45,29 @@ def check_surface():
     check(surface.GetRasterBand(1).GetUnitType() == "psi", "the surface says its unit")
 
 
-def check_map():
-    picture = gdal.Open(os.path.join(OUT, "map.png"))
-    check((picture.RasterXSize, picture.RasterYSize) == (3307, 2338), "map.png is an A3 sheet at 200 dots an inch")
+def colours_on_map(name):
+    """Points of each band's colour on a sheet's map, its legend left out."""
+    picture = gdal.Open(os.path.join(OUT, name))
+    check((picture.RasterXSize, picture.RasterYSize) == (3307, 2338), f"{name} is an A3 sheet at 200 dots an inch")
     red, green, blue = picture.ReadAsArray()[:3].astype(int)
-    frame = (slice(236, 1944), slice(79, 2440))  # the map on the sheet, without the legend
-    for name in BANDS[1:]:
-        wanted = [int(name[i:i + 2], 16) for i in (0, 2, 4)]
-        found = ((red == wanted[0]) & (green == wanted[1]) & (blue == wanted[2]))[frame].sum()
-        check(found > 200, f"the map shows band colour {name} ({found} points)")
+    frame = (slice(236, 1944), slice(79, 2440))
+    found = []
+    for band in BANDS:
+        wanted = [int(band[i:i + 2], 16) for i in (0, 2, 4)]
+        found.append(((red == wanted[0]) & (green == wanted[1]) & (blue == wanted[2]))[frame].sum())
+    return found
+
+
+def check_map():
+    for band, found in list(zip(BANDS, colours_on_map("map.png")))[1:]:
+        check(found > 200, f"the map shows band colour {band} ({found} points)")
+
+
+def check_proposal_map():
+    """With the regulators nothing is in the highest band, and hardly anything in the one below."""
+    before, after = colours_on_map("map.png"), colours_on_map("proposal.png")
+    check(after[-1] == 0, f"no pipe of 100 psi and over is left on the map ({after[-1]} points)")
+    check(0 < after[-2] < 0.3 * before[-2], f"pipe of 80 to 100 psi is left in the gully ({after[-2]} of {before[-2]})")
 
 
 def check_project():
@@ -83,6 +97,7 @@ def main(build):
     check_proposal()
     check_surface()
     check_map()
+    check_proposal_map()
     check_project()
 
 
