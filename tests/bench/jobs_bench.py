@@ -184,6 +184,7 @@ def main():
     print("| lines | km | cells | ours s | theirs s | ratio | peak MiB over base | bytes per vertex beside tiles | read lines s | read terrain s |")
     print("| --- | --- | --- | --- | --- | --- | --- | --- | --- | --- |")
     for scale in (float(text) for text in options.scales.split(",")):
+        start = min(start, *(tool.call("help", "native:explodelines")[0] for _ in range(2)))
         count, cells = int(options.lines * scale), int(options.cells * scale ** 0.5)
         terrain, lines = os.path.join(folder, f"terrain{cells}.tif"), os.path.join(folder, f"lines{count}.gpkg")
         if not os.path.exists(terrain):
