@@ -10,6 +10,7 @@ namespace stillhead::algorithm
 {
   inline const QString STATIC_PRESSURE = QStringLiteral( "staticpressure" );
   inline const QString PRESSURE_SURFACE = QStringLiteral( "pressuresurface" );
+  inline const QString NEW_PLAN = QStringLiteral( "newplan" );
 } // namespace stillhead::algorithm
 
 namespace stillhead::parameter
@@ -46,6 +47,9 @@ namespace stillhead::parameter
   inline const QString LENGTH_UNIT = QStringLiteral( "LENGTH_UNIT" );
   inline const QString WATER_TEMPERATURE = QStringLiteral( "WATER_TEMPERATURE" );
   inline const QString AREA = QStringLiteral( "AREA" );
+  inline const QString PLAN = QStringLiteral( "PLAN" );
+  inline const QString CRS = QStringLiteral( "CRS" );
+  inline const QString ADD_TO_PROJECT = QStringLiteral( "ADD_TO_PROJECT" );
 } // namespace stillhead::parameter
 
 //! Sinks, rasters, numbers and texts that the algorithms give.

@@ -3,6 +3,7 @@
 #include "processing/provider.h"
 
 #include "core/version.h"
+#include "processing/newplan/newplanalgorithm.h"
 #include "processing/pressuresurfacealgorithm.h"
 #include "processing/staticpressurealgorithm.h"
 
@@ -19,7 +20,7 @@ namespace stillhead
     //! Every algorithm of the provider, in the order in which the toolbox shows them.
     QList<QgsProcessingAlgorithm *> algorithmList()
     {
-      return { new StaticPressureAlgorithm(), new PressureSurfaceAlgorithm() };
+      return { new StaticPressureAlgorithm(), new PressureSurfaceAlgorithm(), new NewPlanAlgorithm() };
     }
 
   } // namespace

@@ -6,8 +6,10 @@
 #pragma once
 
 #include <qgis.h>
+#include <qgsattributeeditorcontainer.h>
 #include <qgscolorrampshader.h>
 #include <qgscoordinatereferencesystem.h>
+#include <qgseditformconfig.h>
 #include <qgsfeaturerequest.h>
 #include <qgsfield.h>
 #include <qgslinesymbollayer.h>
@@ -19,6 +21,8 @@
 #include <qgsprocessingprovider.h>
 #include <qgsraster.h>
 #include <qgsrasterbandstats.h>
+#include <qgssnappingconfig.h>
+#include <qgstaskmanager.h>
 #include <qgsunittypes.h>
 #include <qgswkbtypes.h>
 
@@ -346,6 +350,53 @@ namespace stillhead::compat
     settings.placementSettings().setOverlapHandling( Qgis::LabelOverlapHandling::AllowOverlapIfRequired );
 #else
     settings.displayAll = true;
+#endif
+  }
+
+  //! Edit forms made of the layer's own groups.
+#if _QGIS_VERSION_INT >= 33200
+  constexpr Qgis::AttributeFormLayout FORM_BY_GROUPS = Qgis::AttributeFormLayout::DragAndDrop;
+#else
+  constexpr QgsEditFormConfig::EditorLayout FORM_BY_GROUPS = QgsEditFormConfig::TabLayout;
+#endif
+
+  //! The group stands in the form under its heading, not on a tab.
+  inline void showAsGroupBox( QgsAttributeEditorContainer &group )
+  {
+#if _QGIS_VERSION_INT >= 33200
+    group.setType( Qgis::AttributeEditorContainerType::GroupBox );
+#else
+    group.setIsGroupBox( true );
+#endif
+  }
+
+  //! Ends and lines of all layers catch the pencil within \a pixels.
+  inline void snapToAllLayers( QgsSnappingConfig &config, double pixels )
+  {
+    config.setEnabled( true );
+    config.setTolerance( pixels );
+#if _QGIS_VERSION_INT >= 32600
+    config.setMode( Qgis::SnappingMode::AllLayers );
+    config.setTypeFlag( Qgis::SnappingType::Vertex | Qgis::SnappingType::Segment );
+#else
+    config.setMode( QgsSnappingConfig::AllLayers );
+    config.setTypeFlag( static_cast<QgsSnappingConfig::SnappingTypeFlag>(
+      QgsSnappingConfig::VertexFlag | QgsSnappingConfig::SegmentFlag ) );
+#endif
+#if _QGIS_VERSION_INT >= 33200
+    config.setUnits( Qgis::MapToolUnit::Pixels );
+#else
+    config.setUnits( QgsTolerance::Pixels );
+#endif
+  }
+
+  //! Flags of a task that comes and goes with every edit, and should not be announced where QGIS knows how.
+  inline QgsTask::Flags quietTaskFlags()
+  {
+#if _QGIS_VERSION_INT >= 32600
+    return QgsTask::CanCancel | QgsTask::CancelWithoutPrompt | QgsTask::Hidden | QgsTask::Silent;
+#else
+    return QgsTask::CanCancel | QgsTask::CancelWithoutPrompt;
 #endif
   }
 

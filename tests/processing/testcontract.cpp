@@ -92,7 +92,7 @@ class TestContract : public QObject
     void everyAlgorithmSaysWhatItIs();
 
   private:
-    static QStringList ids() { return { "staticpressure", "pressuresurface" }; }
+    static QStringList ids() { return { "staticpressure", "pressuresurface", "newplan" }; }
     static std::unique_ptr<QgsProcessingAlgorithm> algorithm( const QString &id )
     {
       return std::unique_ptr<QgsProcessingAlgorithm>(
@@ -119,6 +119,9 @@ void TestContract::isAsWritten()
         runAlgorithm( id, mSlope.parameters() ), { "SPANS", "NODES", "STRETCHES", "EXTREMES", "FINDINGS" } );
     if ( id == "pressuresurface" )
       lines << fieldsOf( runAlgorithm( id, mSlope.surfaceParameters() ), { "BAND_AREAS", "GROUND_LIMITS" } );
+    if ( id == "newplan" )
+      lines << fieldsOf( runAlgorithm( id, { { "PLAN", mSlope.path( "plan.gpkg" ) }, { "CRS", "EPSG:32631" } } ),
+        { "MAINLINES", "LATERALS", "SOURCES", "DEVICES" } );
   }
   lines << QString() << "states";
   for ( int state = 0; state <= static_cast<int>( stillhead::State::WithinLimits ); ++state )
