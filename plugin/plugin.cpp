@@ -1,15 +1,18 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// Menu and provider of the desktop plugin. The dialog of an algorithm belongs to the Processing plugin, which
+// Menu, panel and provider of the desktop plugin. The dialog of an algorithm belongs to the Processing plugin, which
 // is written in Python: it is asked through QGIS's Python runner, and where it is not running the user is told.
 #include "plugin/plugin.h"
 
+#include "plugin/panel/dock.h"
 #include "plugin/plugininfo.h"
 #include "processing/entrypoint.h"
 
 #include <qgisinterface.h>
 #include <qgsapplication.h>
+#include <qgsmapcanvas.h>
 #include <qgsmessagebar.h>
 #include <qgsprocessingregistry.h>
+#include <qgsproject.h>
 #include <qgspythonrunner.h>
 
 #include <QAction>
@@ -45,12 +48,27 @@ namespace stillhead
     mAddedProvider = stillhead_register_provider();
     mMenu = mIface->pluginMenu()->addMenu( QIcon( pluginIcon() ), pluginName() );
     mMenu->setObjectName( QStringLiteral( "StillheadMenu" ) );
+    addDock();
+    addAlgorithmAction( tr( "New plan…" ), QStringLiteral( "stillhead:newplan" ) );
     addAlgorithmAction( tr( "Static pressure along pipes…" ), QStringLiteral( "stillhead:staticpressure" ) );
     addAlgorithmAction( tr( "Static pressure surface…" ), QStringLiteral( "stillhead:pressuresurface" ) );
   }
 
+  void Plugin::addDock()
+  {
+    mDock = new Dock( mIface->mapCanvas(), QgsProject::instance() );
+    mIface->addDockWidget( Qt::RightDockWidgetArea, mDock );
+    QAction *panel = mMenu->addAction( QIcon( pluginIcon() ), tr( "&Panel" ) );
+    panel->setObjectName( QStringLiteral( "StillheadPanel" ) );
+    mDock->setToggleVisibilityAction( panel );
+    mMenu->addSeparator();
+  }
+
   void Plugin::unload()
   {
+    if ( mDock )
+      mIface->removeDockWidget( mDock );
+    delete mDock;
     delete mMenu;
     if ( mAddedProvider )
       QgsApplication::processingRegistry()->removeProvider( QStringLiteral( "stillhead" ) );

@@ -1,5 +1,5 @@
 // SPDX-License-Identifier: GPL-2.0-or-later
-// The desktop plugin: registers the Processing provider and puts the Stillhead menu into QGIS. Whatever it
+// The desktop plugin: registers the Processing provider, puts the Stillhead menu and the panel into QGIS. Whatever it
 // adds in initGui() it takes away in unload(), and nothing that another added.
 #pragma once
 
@@ -14,6 +14,8 @@ class QMenu;
 namespace stillhead
 {
 
+  class Dock;
+
   class Plugin : public QObject, public QgisPlugin
   {
       Q_OBJECT
@@ -25,11 +27,13 @@ namespace stillhead
       void unload() override;
 
     private:
+      void addDock();
       void addAlgorithmAction( const QString &text, const QString &algorithmId );
       void openAlgorithmDialog( const QString &algorithmId );
 
       QgisInterface *mIface = nullptr;
       QPointer<QMenu> mMenu; //!< owns its actions; QGIS may delete it first when it closes
+      QPointer<Dock> mDock;  //!< so may the panel
       bool mAddedProvider = false;
   };
 

@@ -141,8 +141,6 @@ namespace stillhead
     {
       throw QgsProcessingException( refusalText( refusal, mSource.reachM, mUnits ) );
     }
-    // Writing needs the memory more.
-    mTerrain.cache->clear();
     logSource();
     logFindings();
     warnOfElevations();
@@ -215,8 +213,18 @@ namespace stillhead
     return facts;
   }
 
+  SolvedPlan StaticPressureRun::takeSolved()
+  {
+    std::unique_ptr<PlanToTerrain> planToTerrain =
+      wayToTerrain( mDrawn.crs, mTerrain.crs, mValues.context().transformContext() );
+    return { mUnits, mLimits, mStyle, std::move( mDrawn ), std::move( mSource ), std::move( mMeasure ),
+      std::move( mResult ), mTerrain.unit.metresPerUnit, std::move( planToTerrain ) };
+  }
+
   QVariantMap StaticPressureRun::write()
   {
+    // Writing needs the memory more.
+    mTerrain.cache->clear();
     const ResultContext context { mResult, mDrawn, *mMeasure, mUnits, mLimits, mStyle, mTerrain.unit.metresPerUnit };
     OutputSet outputs( mValues, staticPressureLayers() );
     std::vector<QgsGeometry> outlines;

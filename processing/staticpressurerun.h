@@ -8,6 +8,7 @@
 #include "processing/reading/drawingreader.h"
 #include "processing/reading/sourcereader.h"
 #include "processing/reading/terrainreader.h"
+#include "processing/solvedplan.h"
 #include "processing/writing/outputset.h"
 #include "processing/writing/resultfinish.h"
 #include "processing/writing/resultmetadata.h"
@@ -35,6 +36,9 @@ namespace stillhead
 
       //! Writes what was asked for and returns the results. \throws QgsProcessingException, Cancelled
       QVariantMap write();
+
+      //! Hands out what solve() found, in place of writing it; nothing is left in the run.
+      SolvedPlan takeSolved();
 
       const std::vector<WrittenLayer> &written() const { return mWritten; }
       const ResultStyle &style() const { return mStyle; }

@@ -24,6 +24,11 @@ namespace stillhead
     return isHere ? static_cast<int>( after - result.pieces.begin() ) - 1 : -1;
   }
 
+  PlaceMargins marginsOf( const PlaceFigures &figures, const Limits &limits, Role role )
+  {
+    return { figures.highPa - limits.mostFor( role ), limits.leastFor( role ) - figures.lowPa };
+  }
+
   PlaceProbe::PlaceProbe( const StaticResult &result, const PlanToTerrain &planToTerrain, TileCache &terrain,
     bool useLineZ, double specificWeightNPerM3 )
     : mResult( result )

@@ -51,6 +51,15 @@ namespace stillhead
       Profile mProfile;
   };
 
+  //! How far a place is past its limits; negative: how much room there is. NaN without figures.
+  struct PlaceMargins
+  {
+      double overPa = 0.0;  //!< of the high case above the most acceptable pressure
+      double underPa = 0.0; //!< of the low case under the least
+  };
+
+  PlaceMargins marginsOf( const PlaceFigures &figures, const Limits &limits, Role role );
+
   //! The piece of \a result that \a on lies on; of two that meet there the later, at the line's end the last. −1: none.
   int pieceOn( const StaticResult &result, const PlaceOnLine &on );
 

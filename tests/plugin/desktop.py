@@ -8,7 +8,7 @@ import traceback
 import qgis.utils
 from qgis.core import QgsApplication
 from qgis.PyQt.QtCore import Qt, QTimer
-from qgis.PyQt.QtWidgets import QAbstractItemView, QApplication
+from qgis.PyQt.QtWidgets import QAbstractItemView, QApplication, QDockWidget
 from qgis.utils import iface
 
 OUT = os.environ["STILLHEAD_TEST_OUT"]
@@ -26,6 +26,14 @@ def provider_count():
 
 def stillhead_menus():
     return [a.menu() for a in iface.pluginMenu().actions() if a.menu() and a.text().replace("&", "") == "Stillhead"]
+
+
+def algorithm_actions():
+    return [a for a in stillhead_menus()[0].actions() if a.objectName().startswith("stillhead:")]
+
+
+def docks():
+    return iface.mainWindow().findChildren(QDockWidget, "StillheadDock")
 
 
 def screenshot(name):
@@ -89,10 +97,11 @@ def check_both_enabled():
 def check_menu():
     menus = stillhead_menus()
     check(len(menus) == 1, "one Stillhead menu")
-    actions = menus[0].actions()
+    actions = algorithm_actions()
     check(
-        [a.objectName() for a in actions] == ["stillhead:staticpressure", "stillhead:pressuresurface"],
-        "the two algorithms in the menu",
+        [a.objectName() for a in actions]
+        == ["stillhead:newplan", "stillhead:staticpressure", "stillhead:pressuresurface"],
+        "the algorithms in the menu",
     )
     check(all(not a.icon().pixmap(24, 24).isNull() for a in actions), "icons in the menu")
     iface.mainWindow().menuBar().setActiveAction(iface.pluginMenu().menuAction())
@@ -104,7 +113,7 @@ def check_menu():
 
 
 def check_menu_opens_algorithms():
-    for action in stillhead_menus()[0].actions():
+    for action in algorithm_actions():
         title = action.text().rstrip("…").lower()
         name = action.objectName().split(":")[1]
         in_dialog(
@@ -115,7 +124,7 @@ def check_menu_opens_algorithms():
 def check_without_processing():
     """Where the Processing plugin is off, the menu says so instead of failing."""
     qgis.utils.active_plugins.remove("processing")
-    stillhead_menus()[0].actions()[0].trigger()
+    algorithm_actions()[0].trigger()
     qgis.utils.active_plugins.append("processing")
     message = iface.messageBar().currentItem()
     check(message and "Processing plugin is not running" in message.text(), "a message says that Processing is off")
@@ -127,6 +136,7 @@ def check_headless_first():
     check(qgis.utils.plugins[HEADLESS].added, "the headless package came first")
     set_native_plugin(Qt.Unchecked)
     check(not stillhead_menus(), "unloading removes the menu")
+    check(not docks(), "unloading removes the panel")
     check(provider_count() == 1, "the native plugin leaves a provider that it did not add")
     check(qgis.utils.unloadPlugin(HEADLESS), "the headless package unloads")
     check(provider_count() == 0, "the headless package removes what it added")

@@ -80,6 +80,12 @@ void TestPlaceProbe::answersOffThePipe()
   QCOMPARE( figures->highPa, 102000.0 );
   QCOMPARE( figures->lowPa, 82000.0 );
   QCOMPARE( figures->piece, -1 );
+  // Limits of 20 and 60 kPa, laterals 10 and 30.
+  setup.job.limits.lateralLeastPa = 10000.0;
+  setup.job.limits.lateralMostPa = 30000.0;
+  QCOMPARE( marginsOf( *figures, setup.job.limits, Role::Mainline ).overPa, 42000.0 );
+  QCOMPARE( marginsOf( *figures, setup.job.limits, Role::Mainline ).underPa, -62000.0 );
+  QCOMPARE( marginsOf( *figures, setup.job.limits, Role::Lateral ).overPa, 72000.0 );
   QVERIFY( std::isnan( probe.offPipe( { 1e9, 0.0 }, 0.0 )->highPa ) );
 }
 
