@@ -5,6 +5,8 @@
 
 #include "plugin/panel/dock.h"
 #include "plugin/plugininfo.h"
+#include "plugin/profile/profiletab.h"
+#include "plugin/results/resultsdock.h"
 #include "processing/entrypoint.h"
 
 #include <qgisinterface.h>
@@ -48,24 +50,42 @@ namespace stillhead
     mAddedProvider = stillhead_register_provider();
     mMenu = mIface->pluginMenu()->addMenu( QIcon( pluginIcon() ), pluginName() );
     mMenu->setObjectName( QStringLiteral( "StillheadMenu" ) );
-    addDock();
+    addDocks();
     addAlgorithmAction( tr( "New plan…" ), QStringLiteral( "stillhead:newplan" ) );
     addAlgorithmAction( tr( "Static pressure along pipes…" ), QStringLiteral( "stillhead:staticpressure" ) );
     addAlgorithmAction( tr( "Static pressure surface…" ), QStringLiteral( "stillhead:pressuresurface" ) );
   }
 
-  void Plugin::addDock()
+  void Plugin::addDocks()
   {
     mDock = new Dock( mIface->mapCanvas(), QgsProject::instance() );
     mIface->addDockWidget( Qt::RightDockWidgetArea, mDock );
-    QAction *panel = mMenu->addAction( QIcon( pluginIcon() ), tr( "&Panel" ) );
-    panel->setObjectName( QStringLiteral( "StillheadPanel" ) );
-    mDock->setToggleVisibilityAction( panel );
+    mResults = new ResultsDock( mDock->preview(), mIface->mapCanvas(), mIface->messageBar() );
+    auto *profile = new ProfileTab( mDock->preview(), mDock->inquiry(), mIface->mapCanvas(), mResults );
+    mResults->addTab( profile, tr( "P&rofile" ) );
+    connect( mDock, &Dock::said, mResults, &ResultsDock::say );
+    connect( profile, &ProfileTab::said, mResults, &ResultsDock::say );
+    mIface->addDockWidget( Qt::BottomDockWidgetArea, mResults );
+    // Until the user asks for it, QGIS looks as it did before.
+    mDock->setUserVisible( false );
+    mResults->setUserVisible( false );
+    const auto addToggle = [this]( QgsDockWidget *dock, const QString &text, const QString &name ) {
+      QAction *toggle = mMenu->addAction( QIcon( pluginIcon() ), text );
+      toggle->setObjectName( name );
+      toggle->setCheckable( true );
+      dock->setToggleVisibilityAction( toggle );
+    };
+    addToggle( mDock, tr( "&Panel" ), QStringLiteral( "StillheadPanel" ) );
+    addToggle( mResults, tr( "&Results" ), QStringLiteral( "StillheadResults" ) );
     mMenu->addSeparator();
   }
 
   void Plugin::unload()
   {
+    // The results look at the panel's preview, so they go first.
+    if ( mResults )
+      mIface->removeDockWidget( mResults );
+    delete mResults;
     if ( mDock )
       mIface->removeDockWidget( mDock );
     delete mDock;

@@ -15,6 +15,7 @@ namespace stillhead
 {
 
   class Dock;
+  class ResultsDock;
 
   class Plugin : public QObject, public QgisPlugin
   {
@@ -27,13 +28,14 @@ namespace stillhead
       void unload() override;
 
     private:
-      void addDock();
+      void addDocks();
       void addAlgorithmAction( const QString &text, const QString &algorithmId );
       void openAlgorithmDialog( const QString &algorithmId );
 
       QgisInterface *mIface = nullptr;
       QPointer<QMenu> mMenu; //!< owns its actions; QGIS may delete it first when it closes
       QPointer<Dock> mDock;  //!< so may the panel
+      QPointer<ResultsDock> mResults;
       bool mAddedProvider = false;
   };
 

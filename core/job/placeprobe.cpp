@@ -52,17 +52,22 @@ namespace stillhead
     figures.highPa = mSpecificWeightNPerM3 * ( figures.levels.highM - figures.pipeM );
   }
 
+  const Profile &PlaceProbe::profileOf( int line )
+  {
+    if ( line != mLine )
+    {
+      mBuilder.build( mResult.drawing.lines[static_cast<std::size_t>( line )], mProfile );
+      mLine = line;
+    }
+    return mProfile;
+  }
+
   PlaceFigures PlaceProbe::onPipe( const PlaceOnLine &on )
   {
     const CanonicalLine &line = mResult.drawing.lines[static_cast<std::size_t>( on.line )];
-    if ( on.line != mLine )
-    {
-      mBuilder.build( line, mProfile );
-      mLine = on.line;
-    }
     PlaceFigures figures;
     figures.piece = pieceOn( mResult, on );
-    figures.pipeM = elevationAtM( mProfile, on.alongM );
+    figures.pipeM = elevationAtM( profileOf( on.line ), on.alongM );
     figures.groundM = groundAtM( mResult.drawing.placeAt( line, on.alongM ) );
     figures.lowPa = figures.highPa = NOT_A_FIGURE;
     figures.levels = { NOT_A_FIGURE, NOT_A_FIGURE };

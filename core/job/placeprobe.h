@@ -38,6 +38,15 @@ namespace stillhead
       //! What pipe at \a place, \a coverM deep, would hold if it were joined to the source. Nothing where no pipe is fed.
       std::optional<PlaceFigures> offPipe( const PlanPoint &place, double coverM );
 
+      //! The exact profile of a line, until the next is asked for.
+      const Profile &profileOf( int line );
+
+      //! The elevation at which pipe under \a levelM holds \a pressurePa.
+      double elevationWhereM( double levelM, double pressurePa ) const
+      {
+        return levelM - pressurePa / mSpecificWeightNPerM3;
+      }
+
     private:
       double groundAtM( const PlanPoint &place );
       void setPressures( PlaceFigures &figures ) const;

@@ -22,6 +22,7 @@ namespace stillhead
     , mAnswer( new QLabel( this ) )
     , mState( new QLabel( this ) )
     , mCopy( new QToolButton( this ) )
+    , mSave( new QToolButton( this ) )
   {
     mAnswer->setObjectName( QStringLiteral( "StillheadAnswer" ) );
     mAnswer->setWordWrap( true );
@@ -37,11 +38,19 @@ namespace stillhead
     mCopy->setAutoRaise( true );
     connect( mCopy, &QToolButton::clicked, this, &AnswerBar::copy );
 
+    mSave->setObjectName( QStringLiteral( "StillheadSave" ) );
+    mSave->setIcon( QgsApplication::getThemeIcon( QStringLiteral( "/mActionFileSave.svg" ) ) );
+    mSave->setToolTip( tr( "Save the results as layers of the project" ) );
+    mSave->setAccessibleName( tr( "Save the results" ) );
+    mSave->setAutoRaise( true );
+    connect( mSave, &QToolButton::clicked, this, &AnswerBar::saveWanted );
+
     auto *grid = new QGridLayout( this );
     grid->setColumnStretch( 0, 1 );
     grid->addWidget( mAnswer, 0, 0 );
     grid->addWidget( mCopy, 0, 1, Qt::AlignTop );
-    grid->addWidget( mState, 1, 0, 1, 2 );
+    grid->addWidget( mSave, 0, 2, Qt::AlignTop );
+    grid->addWidget( mState, 1, 0, 1, 3 );
     connect( &mPreview, &Preview::changed, this, &AnswerBar::follow );
     follow();
   }
@@ -59,6 +68,7 @@ namespace stillhead
       result ? QStringLiteral( "<p>%1</p>" ).arg( runningWaterCaution().toHtmlEscaped() ) : QString() );
     mAnswer->setEnabled( !mPreview.isStale() );
     mCopy->setEnabled( result && !mPreview.isStale() );
+    mSave->setEnabled( mCopy->isEnabled() );
     QString state;
     if ( mPreview.isStale() )
       state = tr( "Computing…" );

@@ -22,6 +22,10 @@ namespace stillhead
       //! The sentence that is shown.
       QString text() const;
 
+    signals:
+      //! The user wants the results as layers.
+      void saveWanted();
+
     private:
       void follow();
       void copy() const;
@@ -30,6 +34,7 @@ namespace stillhead
       QLabel *mAnswer;
       QLabel *mState;
       QToolButton *mCopy;
+      QToolButton *mSave;
   };
 
 } // namespace stillhead

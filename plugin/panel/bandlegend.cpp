@@ -57,7 +57,7 @@ namespace stillhead
     mRows->setColumnStretch( 1, 1 );
   }
 
-  void BandLegend::show( const SolvedPlan *plan )
+  void BandLegend::showPlan( const SolvedPlan *plan )
   {
     while ( QLayoutItem *item = mRows->takeAt( 0 ) )
     {

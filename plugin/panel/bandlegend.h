@@ -23,7 +23,7 @@ namespace stillhead
       explicit BandLegend( QWidget *parent );
 
       //! Shows the bands of \a plan; null: none.
-      void show( const SolvedPlan *plan );
+      void showPlan( const SolvedPlan *plan );
 
     private:
       void addBand( const SolvedPlan &plan, int band, double lengthM );

@@ -15,12 +15,15 @@
 #include "plugin/panel/unitsbar.h"
 #include "plugin/panel/watersection.h"
 #include "plugin/preview/sourcelook.h"
+#include "plugin/results/saveresults.h"
 
 #include <qgscoordinatetransform.h>
 #include <qgsexception.h>
+#include <qgsfileutils.h>
 #include <qgsmapcanvas.h>
 #include <qgsproject.h>
 
+#include <QFileDialog>
 #include <QScrollArea>
 #include <QVBoxLayout>
 
@@ -49,6 +52,31 @@ namespace stillhead
   QString Dock::answer() const
   {
     return mAnswer->text();
+  }
+
+  void Dock::askWhereToSave()
+  {
+    // The first save of a project asks; later ones go to the same place.
+    const QString key = QStringLiteral( "/saved" );
+    QString path = mProject->readEntry( QStringLiteral( "Stillhead" ), key );
+    if ( path.isEmpty() )
+    {
+      path = QFileDialog::getSaveFileName(
+        this, tr( "Save the results" ), mProject->homePath(), tr( "GeoPackage (*.gpkg)" ) );
+      if ( path.isEmpty() )
+        return;
+      path = QgsFileUtils::ensureFileNameHasExtension( path, { QStringLiteral( "gpkg" ) } );
+      mProject->writeEntry( QStringLiteral( "Stillhead" ), key, path );
+    }
+    save( path );
+  }
+
+  void Dock::save( const QString &path )
+  {
+    auto *work = new SaveResults( input(), path, mProject, this );
+    connect( work, &SaveResults::done, this, [this]( const QString &file, const QString &problem ) {
+      emit said( problem.isEmpty() ? tr( "Results saved in “%1”." ).arg( file ) : problem, !problem.isEmpty() );
+    } );
   }
 
   void Dock::buildWidgets()
@@ -90,6 +118,7 @@ namespace stillhead
       connect( section, &Section::edited, this, &Dock::apply );
     connect( mUnits, &UnitsBar::edited, this, &Dock::changeUnits );
     connect( mPreview, &Preview::changed, this, &Dock::follow );
+    connect( mAnswer, &AnswerBar::saveWanted, this, &Dock::askWhereToSave );
     connect( mWater, &WaterSection::pickWanted, this, &Dock::pick );
     connect( mPickTool.get(), &SourcePickTool::picked, this, &Dock::accept );
     connect( mPickTool.get(), &SourcePickTool::givenUp, this, [this] { pick( false ); } );
@@ -111,9 +140,18 @@ namespace stillhead
 
   void Dock::guessAgain()
   {
+    PanelSettings settings = guessedSettings( *mProject );
     PanelSettings kept;
-    if ( !readSettings( *mProject, kept ) )
-      showSettings( guessedSettings( *mProject ) );
+    if ( readSettings( *mProject, kept ) )
+    {
+      // Only what was never chosen is guessed.
+      const auto keptOr = []( const QString &id, const QString &guess ) { return id.isEmpty() ? guess : id; };
+      kept.mains = keptOr( kept.mains, settings.mains );
+      kept.laterals = keptOr( kept.laterals, settings.laterals );
+      kept.terrain = keptOr( kept.terrain, settings.terrain );
+      settings = kept;
+    }
+    showSettings( settings );
   }
 
   void Dock::showSettings( const PanelSettings &settings )

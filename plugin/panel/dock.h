@@ -46,7 +46,15 @@ namespace stillhead
       //! The sentence at the top.
       QString answer() const;
 
+      //! Saves the results into the GeoPackage \a path and shows them as layers.
+      void save( const QString &path );
+
+    signals:
+      //! Something is to be said to the user; \a isProblem tells how.
+      void said( const QString &text, bool isProblem );
+
     private:
+      void askWhereToSave();
       void buildWidgets();
       void connectAll();
 

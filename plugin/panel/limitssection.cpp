@@ -45,7 +45,7 @@ namespace stillhead
 
   void LimitsSection::describe( const SolvedPlan *plan )
   {
-    mLegend->show( plan );
+    mLegend->showPlan( plan );
     if ( !plan )
     {
       setSummary( QString() );

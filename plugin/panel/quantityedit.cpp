@@ -33,7 +33,7 @@ namespace stillhead
     if ( quantity == mQuantity )
       return;
     mQuantity = quantity;
-    show( std::nullopt );
+    showFigure( std::nullopt );
     mTyped.reset();
     showUnit();
   }
@@ -60,10 +60,10 @@ namespace stillhead
     }
     mUnits = units;
     showUnit();
-    show( mTyped ? std::optional<double>( converted( *mTyped, mTypedUnits, mUnits ) ) : std::nullopt );
+    showFigure( mTyped ? std::optional<double>( converted( *mTyped, mTypedUnits, mUnits ) ) : std::nullopt );
   }
 
-  void QuantityEdit::show( const std::optional<double> &figure )
+  void QuantityEdit::showFigure( const std::optional<double> &figure )
   {
     QString text;
     if ( figure )
@@ -113,7 +113,7 @@ namespace stillhead
     mTyped = isNumber ? std::optional<double>( figure ) : std::nullopt;
     mTypedUnits = mUnits;
     if ( isNumber )
-      show( mTyped );
+      showFigure( mTyped );
     else
       setText( text );
   }

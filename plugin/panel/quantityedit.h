@@ -48,7 +48,7 @@ namespace stillhead
 
     private:
       void noteEdit();
-      void show( const std::optional<double> &figure );
+      void showFigure( const std::optional<double> &figure );
       void showUnit();
       std::optional<double> read() const;
       double converted( double figure, const DisplayUnits &from, const DisplayUnits &to ) const;

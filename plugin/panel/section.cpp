@@ -7,6 +7,8 @@
 #include <QComboBox>
 #include <QLabel>
 
+#include <algorithm>
+
 namespace stillhead
 {
 
@@ -29,7 +31,23 @@ namespace stillhead
 
   void Section::showTitle()
   {
-    setTitle( isCollapsed() && !mSummary.isEmpty() ? tr( "%1: %2" ).arg( mTitle, mSummary ) : mTitle );
+    const bool isSummedUp = isCollapsed() && !mSummary.isEmpty();
+    const QString full = isSummedUp ? tr( "%1: %2" ).arg( mTitle, mSummary ) : mTitle;
+    const int forArrow = 3 * fontMetrics().height();
+    setTitle( fontMetrics().elidedText( full, Qt::ElideRight, std::max( width() - forArrow, 4 * forArrow ) ) );
+    setToolTip( isSummedUp ? mSummary : QString() );
+  }
+
+  QSize Section::minimumSizeHint() const
+  {
+    const QSize size = QgsCollapsibleGroupBoxBasic::minimumSizeHint();
+    return QSize( std::min( size.width(), layout()->totalMinimumSize().width() ), size.height() );
+  }
+
+  void Section::resizeEvent( QResizeEvent *event )
+  {
+    QgsCollapsibleGroupBoxBasic::resizeEvent( event );
+    showTitle();
   }
 
   void Section::addRow( const QString &label, QWidget *widget )

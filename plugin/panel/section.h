@@ -35,6 +35,9 @@ namespace stillhead
       //! The line that stands behind the title while folded.
       void setSummary( const QString &summary );
 
+      //! Does not grow with the title, which is shortened where there is no room.
+      QSize minimumSizeHint() const override;
+
     signals:
       //! The user has changed something here.
       void edited();
@@ -60,6 +63,8 @@ namespace stillhead
       //! What other widgets hold, for those that are no quantity, choice or text.
       virtual void fillMore( QVariantMap &parameters ) const { static_cast<void>( parameters ); }
       virtual void showMore( const QVariantMap &parameters ) { static_cast<void>( parameters ); }
+
+      void resizeEvent( QResizeEvent *event ) override;
 
     private:
       void showTitle();

@@ -18,6 +18,8 @@ namespace stillhead
     , mPressure( choiceBox( parameter::PRESSURE_UNIT, this ) )
     , mLength( choiceBox( parameter::LENGTH_UNIT, this ) )
   {
+    for ( QComboBox *box : { mPressure, mLength } )
+      box->setMinimumContentsLength( 4 );
     auto *label = new QLabel( tr( "&Units" ), this );
     label->setBuddy( mPressure );
     mPressure->setAccessibleName( tr( "Pressure unit" ) );

@@ -12,10 +12,10 @@ namespace stillhead
   namespace
   {
 
-    QString tr( const char *text )
+    class Step
     {
-      return QCoreApplication::translate( "stillhead::PreviewInput", text );
-    }
+        Q_DECLARE_TR_FUNCTIONS( stillhead::PreviewInput )
+    };
 
     bool isGiven( const QVariant &value )
     {
@@ -33,17 +33,17 @@ namespace stillhead
   QString PreviewInput::missing() const
   {
     if ( !mains )
-      return tr( "Choose the layer that mainlines are drawn in." );
+      return Step::tr( "Choose the layer that mainlines are drawn in." );
     if ( isBroken( mains ) || isBroken( laterals ) || isBroken( terrain ) )
-      return tr( "A chosen layer has lost its file; mend it in the layer tree, or choose another." );
+      return Step::tr( "A chosen layer has lost its file; mend it in the layer tree, or choose another." );
     if ( mains->featureCount() == 0 && !sketch )
-      return tr( "Draw the first mainline." );
+      return Step::tr( "Draw the first mainline." );
     if ( !terrain )
-      return tr( "Choose the terrain: ground elevations as a raster." );
+      return Step::tr( "Choose the terrain: ground elevations as a raster." );
     if ( !isGiven( parameters.value( parameter::SOURCE ) ) )
-      return tr( "Pick where the water comes from." );
+      return Step::tr( "Pick where the water comes from." );
     if ( !isGiven( parameters.value( parameter::SOURCE_VALUE ) ) )
-      return tr( "Give the pressure or water level at the source." );
+      return Step::tr( "Give the pressure or water level at the source." );
     return QString();
   }
 

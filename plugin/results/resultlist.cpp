@@ -5,6 +5,7 @@
 #include "core/job/pieceline.h"
 #include "processing/styles/fieldaliases.h"
 
+#include <qgslinestring.h>
 #include <qgsmemoryproviderutils.h>
 #include <qgsmultilinestring.h>
 #include <qgsvectorlayer.h>

@@ -29,12 +29,14 @@ namespace stillhead
       //! Adds a further tab, which the dock takes over.
       void addTab( QWidget *tab, const QString &title );
 
+      //! Says something in the message bar.
+      void say( const QString &text, bool isProblem );
+
     private:
       ResultTab *addList( const QString &name );
       void follow();
       void fill();
       void goTo( const QgsGeometry &place );
-      void say( const QString &text, bool isProblem );
 
       Preview &mPreview;
       QPointer<QgsMapCanvas> mCanvas;

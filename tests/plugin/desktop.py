@@ -3,6 +3,7 @@
 # Checks that there is one provider and one menu, that unloading through the plugin manager takes both away, and
 # that each of the two removes the provider only if it added it. Writes its verdict to $STILLHEAD_TEST_OUT.
 import os
+import sys
 import traceback
 
 import qgis.utils
@@ -10,6 +11,9 @@ from qgis.core import QgsApplication
 from qgis.PyQt.QtCore import Qt, QTimer
 from qgis.PyQt.QtWidgets import QAbstractItemView, QApplication, QDockWidget
 from qgis.utils import iface
+
+sys.path.insert(0, os.environ["STILLHEAD_TEST_FOLDER"])
+from planners_round import Round  # noqa: E402
 
 OUT = os.environ["STILLHEAD_TEST_OUT"]
 HEADLESS = "stillhead_headless"
@@ -165,6 +169,7 @@ def main():
         check_menu()
         check_menu_opens_algorithms()
         check_without_processing()
+        Round(OUT, check, screenshot).run()
         check_headless_first()
         check_native_first()
         screenshot("desktop.png")

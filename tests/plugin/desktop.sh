@@ -24,7 +24,7 @@ EOF_INI
 
 status=0
 env -u QT_QPA_PLATFORM QGIS_CUSTOM_CONFIG_PATH="$out/config" XDG_RUNTIME_DIR="$out/run" LC_ALL=C.UTF-8 \
-  QGIS_PLUGINPATH="$build/headless" STILLHEAD_TEST_OUT="$out" \
+  QGIS_PLUGINPATH="$build/headless" STILLHEAD_TEST_OUT="$out" STILLHEAD_TEST_FOLDER="$here" PYTHONDONTWRITEBYTECODE=1 \
   xvfb-run -a -s "-screen 0 1400x900x24" timeout 240 qgis --nologo --code "$here/desktop.py" > "$out/qgis.log" 2>&1 \
   || status=$?
 cat "$out/qgis.log"

@@ -3,7 +3,7 @@
 // those of a pipe that would lie there; and the way from the source follows joined pipe by the shortest length.
 #include "core/job/placeprobe.h"
 
-#include "core/job/waytoplace.h"
+#include "core/job/wayprofile.h"
 #include "tests/support/jobsetup.h"
 
 #include <QTest>
@@ -40,6 +40,7 @@ class TestPlaceProbe : public QObject
     void wayIsTheShortest_data();
     void wayIsTheShortest();
     void noWayToPipeApart();
+    void profileFollowsTheWay();
 };
 
 void TestPlaceProbe::agreesWithThePieces()
@@ -142,6 +143,28 @@ void TestPlaceProbe::noWayToPipeApart()
   JobSetup setup( "main 0 0, 100 0; main 0 500, 100 500" );
   const StaticResult result = setup.solve();
   QVERIFY( wayToPlace( result, { lineOf( result, 1 ), 50.0 } ).empty() );
+}
+
+void TestPlaceProbe::profileFollowsTheWay()
+{
+  // Down 80 m over 100 m, then up a lateral that was drawn towards the joint; water at 100 m, limits 20 and 60 kPa.
+  JobSetup setup( "main 0 0 90, 100 0 10; lateral 100 50 30, 100 0 10" );
+  const StaticResult result = setup.solve();
+  TileCache cache( *setup.terrain );
+  PlaceProbe probe( result, setup.samePlan, cache, true, setup.job.specificWeightNPerM3 );
+  const int lateral = lineOf( result, 1 );
+  const CanonicalLine &line = result.drawing.lines[static_cast<std::size_t>( lateral )];
+  const std::vector<WayLeg> way = wayToPlace( result, { lateral, line.reversed ? line.lengthM : 0.0 } );
+  const std::vector<WayPoint> points = wayProfile( result, way, setup.job.limits, probe );
+  QCOMPARE( points.front().distanceM, 0.0 );
+  QCOMPARE( points.front().figures.pipeM, 90.0 );
+  QCOMPARE( points.back().distanceM, 150.0 );
+  QCOMPARE( points.back().figures.pipeM, 30.0 );
+  QCOMPARE( points.back().figures.highPa, 70000.0 );
+  for ( std::size_t i = 1; i < points.size(); ++i )
+    QVERIFY( points[i].distanceM >= points[i - 1].distanceM );
+  QCOMPARE( points.back().mostElevationM, 40.0 );
+  QCOMPARE( points.back().leastElevationM, 80.0 );
 }
 
 QTEST_GUILESS_MAIN( TestPlaceProbe )
