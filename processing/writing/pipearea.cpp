@@ -11,6 +11,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <limits>
 #include <map>
 #include <memory>
 #include <numeric>
@@ -119,15 +120,21 @@ namespace stillhead
     //! A side of cells that gives about CELL_LINES to each.
     double usualSideM( const std::vector<Strand> &strands, double distanceM )
     {
-      QgsRectangle box;
-      box.setMinimal();
+      double left = std::numeric_limits<double>::max();
+      double low = left;
+      double right = -left;
+      double high = -left;
       for ( const Strand &strand : strands )
       {
-        for ( int i = 0; i < strand.x.size(); ++i )
-          box.combineExtentWith( strand.x.at( i ), strand.y.at( i ) );
+        const auto [west, east] = std::minmax_element( strand.x.begin(), strand.x.end() );
+        const auto [south, north] = std::minmax_element( strand.y.begin(), strand.y.end() );
+        left = std::min( left, *west );
+        right = std::max( right, *east );
+        low = std::min( low, *south );
+        high = std::max( high, *north );
       }
       const double cells = static_cast<double>( strands.size() ) / static_cast<double>( CELL_LINES );
-      const double area = std::max( box.width(), distanceM ) * std::max( box.height(), distanceM );
+      const double area = std::max( right - left, distanceM ) * std::max( high - low, distanceM );
       return std::max( std::sqrt( area / cells ), LEAST_CELL_WIDTHS * distanceM );
     }
 
